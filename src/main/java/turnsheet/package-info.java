@@ -1,0 +1,5 @@
+/** Turnsheet: speed and flutter measurement for repair benches. */
+@NullMarked
+package turnsheet;
+
+import org.jspecify.annotations.NullMarked;

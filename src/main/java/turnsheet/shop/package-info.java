@@ -1,0 +1,8 @@
+/**
+ * Customers, machine models, units, visits, instruments, media, limits. Knows no bytes and no
+ * numerics.
+ */
+@NullMarked
+package turnsheet.shop;
+
+import org.jspecify.annotations.NullMarked;
