@@ -39,6 +39,40 @@ public final class SignalSynth {
   }
 
   /**
+   * A tachometer's rounded pulses: they rise through zero where {@link #risingEdges} of the same
+   * speed has its edges, and fall half a pulse later.
+   *
+   * @param pulsesPerSecond at nominal speed
+   * @param steepness 1 for nearly a sine, 8 for steep flanks
+   * @param noiseRms standard deviation of added white Gaussian noise, 1 is full scale
+   */
+  public static double[] pulses(
+      SpeedFunction speed,
+      double pulsesPerSecond,
+      double sampleRateHertz,
+      double durationSeconds,
+      double amplitude,
+      double steepness,
+      double noiseRms,
+      long seed) {
+    double[] samples =
+        tone(
+            speed,
+            pulsesPerSecond,
+            sampleRateHertz,
+            durationSeconds,
+            1,
+            Double.POSITIVE_INFINITY,
+            seed);
+    double scale = amplitude / Math.tanh(steepness);
+    Random random = new Random(seed);
+    for (int i = 0; i < samples.length; i++) {
+      samples[i] = scale * Math.tanh(steepness * samples[i]) + noiseRms * random.nextGaussian();
+    }
+    return samples;
+  }
+
+  /**
    * Times of the rising edges of a wheel of pulses.
    *
    * @param pulsesPerSecond at nominal speed
