@@ -1,0 +1,63 @@
+package turnsheet.job;
+
+import com.github.kagkarlsson.scheduler.Scheduler;
+import com.github.kagkarlsson.scheduler.task.TaskInstance;
+import java.time.Clock;
+import java.util.List;
+import java.util.Optional;
+import java.util.UUID;
+import org.springframework.beans.factory.ObjectProvider;
+import org.springframework.stereotype.Service;
+import org.springframework.transaction.annotation.Propagation;
+import org.springframework.transaction.annotation.Transactional;
+import org.springframework.transaction.support.TransactionSynchronization;
+import org.springframework.transaction.support.TransactionSynchronizationManager;
+
+/** Enqueues jobs and tells how they stand. */
+@Service
+public class Jobs {
+
+  private final JobTable table;
+  private final ObjectProvider<Scheduler> scheduler;
+  private final Clock clock;
+
+  // the scheduler knows the task, the task the handlers, and a handler may enqueue: asked for late
+  Jobs(JobTable table, ObjectProvider<Scheduler> scheduler, Clock clock) {
+    this.table = table;
+    this.scheduler = scheduler;
+    this.clock = clock;
+  }
+
+  /**
+   * Enqueues a job in the caller's transaction: it is begun after the commit, and a rollback leaves
+   * nothing of it.
+   *
+   * @param name of a {@link JobHandler}
+   */
+  @Transactional(propagation = Propagation.MANDATORY)
+  public JobId enqueue(String name, UUID subject) {
+    JobId id = JobId.random();
+    table.add(id, name, subject);
+    scheduler
+        .getObject()
+        .schedule(
+            new TaskInstance<Void>(JobConfig.TASK_NAME, id.value().toString()), clock.instant());
+    TransactionSynchronizationManager.registerSynchronization(
+        new TransactionSynchronization() {
+          @Override
+          public void afterCommit() {
+            scheduler.getObject().triggerCheckForDueExecutions();
+          }
+        });
+    return id;
+  }
+
+  public Optional<Job> find(JobId id) {
+    return table.find(id);
+  }
+
+  /** All jobs ever done to a subject, the newest first. */
+  public List<Job> ofSubject(UUID subject) {
+    return table.ofSubject(subject);
+  }
+}
