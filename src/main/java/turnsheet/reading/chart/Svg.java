@@ -1,0 +1,63 @@
+package turnsheet.reading.chart;
+
+import java.util.Locale;
+
+/** Elements of a drawing as text. */
+final class Svg {
+
+  private Svg() {}
+
+  /** A path in the current colour; {@code dashes} empty for a full line. */
+  static String path(String look, String path, double width, String dashes) {
+    return "<path class=\"%s\" d=\"%s\" fill=\"none\" stroke=\"currentColor\" stroke-width=\"%s\"%s/>"
+        .formatted(
+            look,
+            path,
+            number(width),
+            dashes.isEmpty() ? "" : " stroke-dasharray=\"" + dashes + "\"");
+  }
+
+  static String grid(double x1, double y1, double x2, double y2) {
+    return ("<line class=\"drawn-grid\" x1=\"%s\" y1=\"%s\" x2=\"%s\" y2=\"%s\""
+            + " stroke=\"currentColor\" stroke-opacity=\"0.25\" stroke-width=\"0.7\"/>")
+        .formatted(number(x1), number(y1), number(x2), number(y2));
+  }
+
+  static String words(String look, double x, double y, String anchor, String words) {
+    return "<text class=\"%s\" x=\"%s\" y=\"%s\" text-anchor=\"%s\" fill=\"currentColor\">%s</text>"
+        .formatted(look, number(x), number(y), anchor, escape(words));
+  }
+
+  /** Words from bottom to top, centred. */
+  static String upright(double x, double y, String words) {
+    return ("<text class=\"drawn-name\" x=\"%1$s\" y=\"%2$s\" text-anchor=\"middle\""
+            + " fill=\"currentColor\" transform=\"rotate(-90 %1$s %2$s)\">%3$s</text>")
+        .formatted(number(x), number(y), escape(words));
+  }
+
+  static String dot(String look, double x, double y) {
+    return "<circle class=\"%s\" cx=\"%s\" cy=\"%s\" r=\"3.2\" fill=\"currentColor\"/>"
+        .formatted(look, number(x), number(y));
+  }
+
+  static String bar(double x, double y, double width, double height) {
+    return ("<rect class=\"drawn-bar\" x=\"%s\" y=\"%s\" width=\"%s\" height=\"%s\""
+            + " fill=\"currentColor\" fill-opacity=\"0.35\" stroke=\"currentColor\""
+            + " stroke-width=\"0.6\"/>")
+        .formatted(number(x), number(y), number(width), number(height));
+  }
+
+  /** A length to one tenth, which is finer than any screen or printer shows. */
+  static String number(double value) {
+    String digits = String.format(Locale.ROOT, "%.1f", value);
+    return digits.endsWith(".0") ? digits.substring(0, digits.length() - 2) : digits;
+  }
+
+  static String escape(String words) {
+    return words
+        .replace("&", "&amp;")
+        .replace("<", "&lt;")
+        .replace(">", "&gt;")
+        .replace("\"", "&quot;");
+  }
+}

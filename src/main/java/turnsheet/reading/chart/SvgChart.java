@@ -1,0 +1,236 @@
+package turnsheet.reading.chart;
+
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+import java.util.function.Supplier;
+
+/**
+ * Draws curves with their axes as one SVG element, for paper and for pages without scripts.
+ *
+ * <p>Everything is told apart without colour: the first series is a full line, the second is
+ * dashed, the third dotted; limits are long dashes with their name; an uncertainty is a bar. Looks
+ * are set by presentation attributes, which a style sheet may overrule by class ({@code
+ * drawn-axis}, {@code drawn-grid}, {@code drawn-series series-1}, {@code drawn-limit}, {@code
+ * drawn-flag}, {@code drawn-bar}, {@code drawn-uncertainty}): it needs neither inline styles nor a
+ * style sheet.
+ *
+ * <p>Not thread-safe; one object makes one drawing. Lengths are in the drawing's own units, of
+ * which {@link #WIDTH} make the full width.
+ */
+public final class SvgChart {
+
+  /** Width of every drawing; on paper it is set to the width of the column. */
+  public static final int WIDTH = 760;
+
+  private static final int LEFT = 64;
+  private static final int RIGHT = WIDTH - 14;
+  private static final int BOTTOM = 46;
+  private static final int TOP = 12;
+  private static final int FLAG_ROW = 15;
+  private static final int FLAG_ROWS = 3;
+
+  /** Width of a letter at the size of the drawing's words, a little on the wide side. */
+  private static final double LETTER = 6.6;
+
+  private static final List<String> DASHES = List.of("", "6 3", "1.5 2.5");
+
+  private final Axis x;
+  private final Axis y;
+  private final int height;
+  private final String title;
+  private final String description;
+  private final List<Supplier<String>> marks = new ArrayList<>();
+  private final List<Flag> flags = new ArrayList<>();
+  private int series;
+
+  /**
+   * An empty drawing.
+   *
+   * @param title short name, read first by a screen reader
+   * @param description what the curve shows, in one or two sentences
+   */
+  public SvgChart(Axis x, Axis y, int height, String title, String description) {
+    this.x = x;
+    this.y = y;
+    this.height = height;
+    this.title = title;
+    this.description = description;
+  }
+
+  /** A curve; where its points are buckets, the band between lowest and highest. */
+  public SvgChart curve(Curve curve) {
+    int number = ++series;
+    marks.add(() -> line(number, trail(curve)));
+    return this;
+  }
+
+  /** Points joined by straight lines, each with a dot and the bar of its uncertainty. */
+  public SvgChart points(List<Point> points) {
+    int number = ++series;
+    marks.add(() -> dots(number, points));
+    return this;
+  }
+
+  /** Upright bars of one width side by side, as for a histogram. */
+  public SvgChart bars(double from, double width, double[] heights) {
+    double[] kept = heights.clone();
+    marks.add(
+        () -> {
+          StringBuilder bars = new StringBuilder();
+          for (int k = 0; k < kept.length; k++) {
+            double edge = left(from + k * width);
+            double crest = top(kept[k]);
+            double wide = left(from + (k + 1) * width) - edge;
+            bars.append(Svg.bar(edge, crest, wide, top(y.from()) - crest));
+          }
+          return bars.toString();
+        });
+    return this;
+  }
+
+  /** A level line with its name; left out where it lies outside the drawing. */
+  public SvgChart limit(double value, String name) {
+    if (y.holds(value)) {
+      marks.add(
+          () -> {
+            double level = top(value);
+            double words = level < frameTop() + 16 ? level + 13 : level - 4;
+            return Svg.path(
+                    "drawn-limit", "M%d %sH%d".formatted(LEFT, n(level), RIGHT), 1.2, "10 4")
+                + Svg.words("drawn-limit", RIGHT - 4, words, "end", name);
+          });
+    }
+    return this;
+  }
+
+  /** A word above one place of a curve, tied to it by a thin line. */
+  public SvgChart flag(double atX, double atY, String word) {
+    if (x.holds(atX)) {
+      flags.add(new Flag(atX, Math.min(atY, y.to()), word));
+    }
+    return this;
+  }
+
+  /** The finished element. */
+  public String toSvg() {
+    StringBuilder svg =
+        new StringBuilder(
+            ("<svg xmlns=\"http://www.w3.org/2000/svg\" class=\"drawn\" role=\"img\""
+                    + " viewBox=\"0 0 %d %d\" font-size=\"12\"><title>%s</title><desc>%s</desc>")
+                .formatted(WIDTH, height, Svg.escape(title), Svg.escape(description)));
+    frame(svg);
+    marks.forEach(mark -> svg.append(mark.get()));
+    raiseFlags(svg);
+    return svg.append("</svg>").toString();
+  }
+
+  private void frame(StringBuilder svg) {
+    double bottom = top(y.from());
+    for (Axis.Tick tick : y.ticks(Math.max(2, height / 55))) {
+      double level = top(tick.value());
+      svg.append(Svg.grid(LEFT, level, RIGHT, level));
+      svg.append(Svg.words("drawn-tick", LEFT - 8, level + 4, "end", tick.text()));
+    }
+    for (Axis.Tick tick : x.ticks(8)) {
+      double at = left(tick.value());
+      svg.append(Svg.grid(at, bottom, at, bottom + 5));
+      svg.append(Svg.words("drawn-tick", at, bottom + 18, "middle", tick.text()));
+    }
+    String axes = "M%d %sV%sH%d".formatted(LEFT, n(frameTop()), n(bottom), RIGHT);
+    svg.append(Svg.path("drawn-axis", axes, 1, ""));
+    svg.append(Svg.words("drawn-name", (LEFT + RIGHT) / 2.0, height - 8, "middle", x.title()));
+    svg.append(Svg.upright(14, (frameTop() + bottom) / 2, y.title()));
+  }
+
+  private String trail(Curve curve) {
+    StringBuilder path = new StringBuilder();
+    boolean pen = false;
+    for (int i = 0; i < curve.size(); i++) {
+      double at = curve.x(i);
+      if (Float.isNaN(curve.low(i)) || !x.holds(at)) {
+        pen = false;
+        continue;
+      }
+      path.append(pen ? 'L' : 'M').append(place(at, curve.low(i)));
+      if (curve.high(i) != curve.low(i)) {
+        path.append('L').append(place(at, curve.high(i)));
+      }
+      pen = true;
+    }
+    return path.toString();
+  }
+
+  private String dots(int number, List<Point> points) {
+    StringBuilder path = new StringBuilder();
+    StringBuilder drawn = new StringBuilder();
+    for (Point p : points) {
+      path.append(path.isEmpty() ? 'M' : 'L').append(place(p.x(), p.y()));
+      if (p.uncertainty() > 0) {
+        String bar =
+            "M%sh8m-4 0V%sm-4 0h8"
+                .formatted(
+                    n(left(p.x()) - 4) + " " + n(top(p.y() - p.uncertainty())),
+                    n(top(p.y() + p.uncertainty())));
+        drawn.append(Svg.path("drawn-uncertainty", bar, 1, ""));
+      }
+      drawn.append(Svg.dot("drawn-dot series-" + number, left(p.x()), top(p.y())));
+    }
+    return line(number, path.toString()) + drawn;
+  }
+
+  private static String line(int number, String path) {
+    String dashes = DASHES.get((number - 1) % DASHES.size());
+    return path.isEmpty() ? "" : Svg.path("drawn-series series-" + number, path, 1.1, dashes);
+  }
+
+  /** Puts each word into the first row where it does not run into one that stands there. */
+  private void raiseFlags(StringBuilder svg) {
+    double[] taken = new double[FLAG_ROWS];
+    List<Flag> inOrder = new ArrayList<>(flags);
+    inOrder.sort(Comparator.comparingDouble(Flag::x));
+    for (Flag flag : inOrder) {
+      double at = left(flag.x());
+      double wide = flag.word().length() * LETTER;
+      double begin = Math.max(LEFT, Math.min(at + 3, RIGHT - wide));
+      int row = 0;
+      while (row < FLAG_ROWS - 1 && taken[row] > begin) {
+        row++;
+      }
+      taken[row] = begin + wide + 8;
+      double level = TOP + row * FLAG_ROW;
+      String pole = "M%s %sV%s".formatted(n(at), n(level - 8), n(top(flag.y())));
+      svg.append(Svg.path("drawn-flag", pole, 0.6, ""));
+      svg.append(Svg.words("drawn-flag", begin, level, "start", flag.word()));
+    }
+  }
+
+  private String place(double atX, double atY) {
+    return n(left(atX)) + " " + n(top(Math.max(y.from(), Math.min(y.to(), atY))));
+  }
+
+  private double left(double value) {
+    return LEFT + x.share(value) * (RIGHT - LEFT);
+  }
+
+  private double top(double value) {
+    return height - BOTTOM - y.share(value) * (height - BOTTOM - frameTop());
+  }
+
+  private double frameTop() {
+    return flags.isEmpty() ? TOP : TOP + FLAG_ROWS * FLAG_ROW;
+  }
+
+  private static String n(double length) {
+    return Svg.number(length);
+  }
+
+  /**
+   * A value at a place.
+   *
+   * @param uncertainty half length of the bar about the value; 0 for none
+   */
+  public record Point(double x, double y, double uncertainty) {}
+
+  private record Flag(double x, double y, String word) {}
+}
