@@ -71,25 +71,26 @@ create table speed_setting (
 );
 
 create table rotating_part (
-  id uuid primary key,
   model_id uuid not null references machine_model (id),
   position int not null,
   name varchar(120) not null,
   basis varchar(30) not null,
   amount double precision not null,
   reference_part varchar(120),
-  unique (model_id, name)
+  primary key (model_id, name)
 );
 
 create table service_limit (
-  id uuid primary key,
   model_id uuid not null references machine_model (id),
+  position int not null,
   speed_setting_id uuid not null references speed_setting (id),
   figure varchar(60) not null,
   upper_bound double precision not null,
   origin varchar(300) not null,
-  unique (speed_setting_id, figure)
+  primary key (speed_setting_id, figure)
 );
+
+create index service_limit_model on service_limit (model_id);
 
 create table unit (
   id uuid primary key,
@@ -101,6 +102,8 @@ create table unit (
   unique (model_id, serial_number)
 );
 
+create index unit_customer on unit (customer_id);
+
 create table visit (
   id uuid primary key,
   unit_id uuid not null references unit (id),
@@ -109,6 +112,8 @@ create table visit (
   complaint varchar(4000) not null,
   work_done varchar(4000) not null
 );
+
+create index visit_unit on visit (unit_id, opened_at);
 
 create table bench_instrument (
   id uuid primary key,

@@ -1,0 +1,11 @@
+package turnsheet.shop;
+
+/** What the rate of a rotating part follows from. */
+public enum PartBasis {
+  /** its rim runs at tape speed: rate = v / (pi d) (textbook) */
+  DIAMETER_MM,
+  /** it turns so many times per turn of another part, or of the machine's nominal rotation */
+  TURNS_PER_TURN,
+  /** it turns at a rate of its own, whatever the speed setting */
+  FIXED_PER_MINUTE
+}

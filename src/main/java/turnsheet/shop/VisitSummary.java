@@ -1,0 +1,10 @@
+package turnsheet.shop;
+
+/** A visit as lists and headings show it. */
+public record VisitSummary(
+    Visit visit,
+    String serialNumber,
+    ModelId modelId,
+    String modelName,
+    CustomerId customerId,
+    String customerName) {}
