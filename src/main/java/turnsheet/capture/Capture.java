@@ -1,0 +1,32 @@
+package turnsheet.capture;
+
+import java.time.Instant;
+import org.jspecify.annotations.Nullable;
+import turnsheet.core.signal.Rejection;
+import turnsheet.job.JobId;
+
+/**
+ * One uploaded recording.
+ *
+ * @param fileName as the bench calls it, without folders
+ * @param receivedBy name of the account that brought it
+ * @param looked what was recognised; null where that failed
+ * @param choices what was confirmed last; null before
+ * @param refusal why it was refused or what failed; null in every other state
+ * @param job the latest that measured it; null before
+ */
+public record Capture(
+    CaptureId id,
+    CaptureKey key,
+    String fileName,
+    StoredBytes bytes,
+    Instant receivedAt,
+    String receivedBy,
+    CaptureState state,
+    @Nullable Looked looked,
+    @Nullable CaptureChoices choices,
+    @Nullable Rejection refusal,
+    @Nullable JobId job) {
+
+  public static final int FILE_NAME_LENGTH = 300;
+}

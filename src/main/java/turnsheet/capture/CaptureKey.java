@@ -1,0 +1,33 @@
+package turnsheet.capture;
+
+import org.jspecify.annotations.Nullable;
+import turnsheet.shop.InstrumentId;
+import turnsheet.shop.MediumId;
+import turnsheet.shop.SpeedSettingId;
+import turnsheet.shop.VisitId;
+
+/**
+ * What a capture was made of, and with what.
+ *
+ * @param condition {@link #AS_RECEIVED}, {@link #AFTER_REPAIR} or a label of the bench's own
+ * @param instrument what recorded it; null where not said
+ * @param medium the test tape or record that was played; null where none was or not said
+ */
+public record CaptureKey(
+    VisitId visit,
+    SpeedSettingId setting,
+    String condition,
+    @Nullable InstrumentId instrument,
+    @Nullable MediumId medium) {
+
+  public static final String AS_RECEIVED = "as received";
+  public static final String AFTER_REPAIR = "after repair";
+  public static final int CONDITION_LENGTH = 60;
+
+  public CaptureKey {
+    condition = condition.strip();
+    if (condition.isEmpty() || condition.length() > CONDITION_LENGTH) {
+      throw new IllegalArgumentException("condition of " + condition.length() + " characters");
+    }
+  }
+}

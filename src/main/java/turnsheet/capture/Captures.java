@@ -1,0 +1,204 @@
+package turnsheet.capture;
+
+import java.sql.ResultSet;
+import java.sql.SQLException;
+import java.sql.Types;
+import java.time.OffsetDateTime;
+import java.time.ZoneOffset;
+import java.util.Collection;
+import java.util.List;
+import java.util.Optional;
+import java.util.UUID;
+import java.util.function.Function;
+import org.jspecify.annotations.Nullable;
+import org.springframework.jdbc.core.simple.JdbcClient;
+import org.springframework.stereotype.Repository;
+import turnsheet.core.signal.Rejection;
+import turnsheet.document.CoreJson;
+import turnsheet.job.JobId;
+import turnsheet.shop.InstrumentId;
+import turnsheet.shop.MediumId;
+import turnsheet.shop.SpeedSettingId;
+import turnsheet.shop.VisitId;
+
+/**
+ * All captures and the steps that they may take. A step out of a state that does not allow it
+ * changes nothing and answers false, whoever was first.
+ *
+ * <pre>
+ * RECOGNISED, REFUSED, MEASURED, FAILED  queue    QUEUED
+ * QUEUED                                 measured MEASURED
+ * QUEUED                                 refused  REFUSED
+ * QUEUED                                 failed   FAILED
+ * RECOGNISED, REFUSED                    looked   RECOGNISED or REFUSED
+ * </pre>
+ */
+@Repository
+public class Captures {
+
+  private static final int LONGEST_REFUSAL = 2000;
+
+  private final JdbcClient jdbc;
+
+  Captures(JdbcClient jdbc) {
+    this.jdbc = jdbc;
+  }
+
+  public Optional<Capture> find(CaptureId id) {
+    return jdbc.sql("select * from capture where id = :id")
+        .param("id", id.value())
+        .query(Captures::capture)
+        .optional();
+  }
+
+  /** All captures of a visit, the oldest first. */
+  public List<Capture> ofVisit(VisitId visit) {
+    return jdbc.sql("select * from capture where visit_id = :visit order by received_at, id")
+        .param("visit", visit.value())
+        .query(Captures::capture)
+        .list();
+  }
+
+  /** The newest captures in some states, the newest first, at most so many. */
+  public List<Capture> in(Collection<CaptureState> states, int atMost) {
+    return jdbc.sql(
+            "select * from capture where state in (:states) order by received_at desc, id"
+                + " fetch first :atMost rows only")
+        .param("states", states.stream().map(CaptureState::word).toList())
+        .param("atMost", atMost)
+        .query(Captures::capture)
+        .list();
+  }
+
+  void add(Capture capture) {
+    jdbc.sql(
+            """
+            insert into capture (id, visit_id, speed_setting_id, bench_condition, instrument_id,
+              medium_id, file_name, sha256, byte_length, received_at, received_by, state,
+              recognition, refusal_code, refusal_message)
+            values (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)
+            """)
+        .param(1, capture.id().value())
+        .param(2, capture.key().visit().value())
+        .param(3, capture.key().setting().value())
+        .param(4, capture.key().condition())
+        .param(5, valueOf(capture.key().instrument(), InstrumentId::value), Types.OTHER)
+        .param(6, valueOf(capture.key().medium(), MediumId::value), Types.OTHER)
+        .param(7, capture.fileName())
+        .param(8, capture.bytes().sha256())
+        .param(9, capture.bytes().length())
+        .param(10, capture.receivedAt().atOffset(ZoneOffset.UTC))
+        .param(11, capture.receivedBy())
+        .param(12, capture.state().word())
+        .param(13, valueOf(capture.looked(), CoreJson::toJson), Types.VARCHAR)
+        .param(14, valueOf(capture.refusal(), Rejection::code), Types.VARCHAR)
+        .param(15, valueOf(capture.refusal(), Captures::sentence), Types.VARCHAR)
+        .update();
+  }
+
+  /** Another look, with other options, has shown what the file holds. */
+  boolean looked(CaptureId id, Looked looked) {
+    return jdbc.sql(
+                "update capture set state = 'recognised', recognition = :looked,"
+                    + " refusal_code = null, refusal_message = null"
+                    + " where id = :id and state in ('recognised', 'refused')")
+            .param("looked", CoreJson.toJson(looked))
+            .param("id", id.value())
+            .update()
+        == 1;
+  }
+
+  /** Another look, with other options, ended in a refusal; what was known before stays. */
+  boolean lookRefused(CaptureId id, Rejection why) {
+    return refuse(id, "refused", why, "('recognised', 'refused')");
+  }
+
+  boolean queue(CaptureId id, CaptureChoices choices, JobId job) {
+    return jdbc.sql(
+                "update capture set state = 'queued', choices = :choices, job_id = :job,"
+                    + " refusal_code = null, refusal_message = null where id = :id"
+                    + " and state in ('recognised', 'refused', 'measured', 'failed')")
+            .param("choices", CoreJson.toJson(choices))
+            .param("job", job.value())
+            .param("id", id.value())
+            .update()
+        == 1;
+  }
+
+  /** The capture has a reading; to be called in the transaction that stores it. */
+  public boolean measured(CaptureId id) {
+    return jdbc.sql("update capture set state = 'measured' where id = :id and state = 'queued'")
+            .param("id", id.value())
+            .update()
+        == 1;
+  }
+
+  /** Measuring found that the capture cannot give figures. */
+  public boolean refused(CaptureId id, Rejection why) {
+    return refuse(id, "refused", why, "('queued')");
+  }
+
+  /** The service could not measure the capture, for a reason that is not the capture's. */
+  public boolean failed(CaptureId id, String sentence) {
+    return refuse(id, "failed", new Rejection("failed", sentence), "('queued')");
+  }
+
+  private boolean refuse(CaptureId id, String state, Rejection why, String from) {
+    return jdbc.sql(
+                "update capture set state = :state, refusal_code = :code,"
+                    + " refusal_message = :message where id = :id and state in "
+                    + from)
+            .param("state", state)
+            .param("code", why.code())
+            .param("message", sentence(why))
+            .param("id", id.value())
+            .update()
+        == 1;
+  }
+
+  private static String sentence(Rejection why) {
+    String message = why.message();
+    return message.length() <= LONGEST_REFUSAL ? message : message.substring(0, LONGEST_REFUSAL);
+  }
+
+  private static Capture capture(ResultSet row, int number) throws SQLException {
+    String code = row.getString("refusal_code");
+    return new Capture(
+        new CaptureId(row.getObject("id", UUID.class)),
+        key(row),
+        row.getString("file_name"),
+        new StoredBytes(row.getString("sha256"), row.getLong("byte_length")),
+        row.getObject("received_at", OffsetDateTime.class).toInstant(),
+        row.getString("received_by"),
+        CaptureState.ofWord(row.getString("state")),
+        json(row, "recognition", Looked.class),
+        json(row, "choices", CaptureChoices.class),
+        code == null ? null : new Rejection(code, row.getString("refusal_message")),
+        id(row, "job_id", JobId::new));
+  }
+
+  private static CaptureKey key(ResultSet row) throws SQLException {
+    return new CaptureKey(
+        new VisitId(row.getObject("visit_id", UUID.class)),
+        new SpeedSettingId(row.getObject("speed_setting_id", UUID.class)),
+        row.getString("bench_condition"),
+        id(row, "instrument_id", InstrumentId::new),
+        id(row, "medium_id", MediumId::new));
+  }
+
+  private static <T> @Nullable T id(ResultSet row, String column, Function<UUID, T> id)
+      throws SQLException {
+    UUID value = row.getObject(column, UUID.class);
+    return value == null ? null : id.apply(value);
+  }
+
+  private static <T> @Nullable T json(ResultSet row, String column, Class<T> type)
+      throws SQLException {
+    String json = row.getString(column);
+    return json == null ? null : CoreJson.fromJson(json, type);
+  }
+
+  private static <T, V> @Nullable V valueOf(@Nullable T from, Function<T, V> value) {
+    return from == null ? null : value.apply(from);
+  }
+}

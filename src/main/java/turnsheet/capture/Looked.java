@@ -1,0 +1,15 @@
+package turnsheet.capture;
+
+import org.jspecify.annotations.Nullable;
+import turnsheet.core.format.api.ReadOptions;
+import turnsheet.core.format.api.Recognised;
+import turnsheet.core.measure.KindGuess;
+
+/**
+ * What a look at the first seconds of a capture has shown.
+ *
+ * @param options what the bench had decided before the look
+ * @param recognised what the file holds
+ * @param guess what it may be a recording of
+ */
+public record Looked(ReadOptions options, Recognised recognised, @Nullable KindGuess guess) {}

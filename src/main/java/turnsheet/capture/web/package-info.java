@@ -1,0 +1,5 @@
+/** Pages and REST resources of captures. */
+@NullMarked
+package turnsheet.capture.web;
+
+import org.jspecify.annotations.NullMarked;
