@@ -1,5 +1,8 @@
 package turnsheet.core.signal;
 
+import java.util.ArrayList;
+import java.util.List;
+
 /**
  * Relative deviation from nominal speed, evenly sampled. Immutable.
  *
@@ -9,18 +12,30 @@ package turnsheet.core.signal;
  */
 public final class SpeedTrace {
 
+  private static final int BLOCK = 1 << 16;
+
   private final double startSeconds;
   private final double rateHertz;
-  private final float[] percent;
+  private final float[][] blocks;
+  private final int length;
 
-  /** Takes a copy of the samples. */
-  public SpeedTrace(double startSeconds, double rateHertz, float[] percent) {
+  private SpeedTrace(double startSeconds, double rateHertz, float[][] blocks, int length) {
     if (!(rateHertz > 0 && Double.isFinite(rateHertz))) {
       throw new IllegalArgumentException("rate " + rateHertz + " Hz");
     }
     this.startSeconds = startSeconds;
     this.rateHertz = rateHertz;
-    this.percent = percent.clone();
+    this.blocks = blocks;
+    this.length = length;
+  }
+
+  /** A trace of given samples. */
+  public static SpeedTrace of(double startSeconds, double rateHertz, float[] percent) {
+    Builder builder = new Builder();
+    for (float p : percent) {
+      builder.add(p);
+    }
+    return builder.build(startSeconds, rateHertz);
   }
 
   public double startSeconds() {
@@ -32,15 +47,15 @@ public final class SpeedTrace {
   }
 
   public int length() {
-    return percent.length;
+    return length;
   }
 
   public double durationSeconds() {
-    return percent.length / rateHertz;
+    return length / rateHertz;
   }
 
   public double percent(int index) {
-    return percent[index];
+    return blocks[index / BLOCK][index % BLOCK];
   }
 
   /**
@@ -51,7 +66,40 @@ public final class SpeedTrace {
    */
   public void copyTo(int from, double[] into, int count) {
     for (int i = 0; i < count; i++) {
-      into[i] = percent[from + i];
+      into[i] = percent(from + i);
+    }
+  }
+
+  /**
+   * Collects the samples of a trace, block by block, so that the trace of half a day is never held
+   * twice. One use.
+   */
+  public static final class Builder {
+    private final List<float[]> blocks = new ArrayList<>();
+    private float[] open = new float[0];
+    private int used;
+
+    public void add(double percent) {
+      if (used == open.length) {
+        open = new float[BLOCK];
+        blocks.add(open);
+        used = 0;
+      }
+      open[used++] = (float) percent;
+    }
+
+    public int length() {
+      return blocks.isEmpty() ? 0 : (blocks.size() - 1) * BLOCK + used;
+    }
+
+    /** The trace; the builder holds nothing afterwards. */
+    public SpeedTrace build(double startSeconds, double rateHertz) {
+      int length = length();
+      float[][] handedOver = blocks.toArray(new float[0][]);
+      blocks.clear();
+      open = new float[0];
+      used = 0;
+      return new SpeedTrace(startSeconds, rateHertz, handedOver, length);
     }
   }
 }

@@ -1,0 +1,134 @@
+package turnsheet.core.measure;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import turnsheet.core.dsp.Fft;
+import turnsheet.core.dsp.Window;
+
+/**
+ * Averaged power spectrum of the fluctuation: overlapping windowed segments, padded with zeros.
+ *
+ * <p>Units: bin k at {@code k * stepHertz()} holds the squared peak, in percent of the mean speed,
+ * of a line at its middle.
+ *
+ * <p>Source: P. D. Welch, "The use of fast Fourier transform for the estimation of power spectra",
+ * IEEE Trans. Audio Electroacoust. 15 (1967), 70-73.
+ */
+final class SpeedSpectrum {
+
+  /** A whole capture up to this length is one segment; beyond, memory would grow with it. */
+  private static final double LONGEST_SEGMENT_SECONDS = 128;
+
+  private static final double USUAL_SEGMENT_SECONDS = 64;
+
+  private final Window window;
+  private final double stepHertz;
+  private final int segmentSamples;
+  private final int fftLength;
+  private final int padding;
+  private final int segments;
+  private final double[] power;
+
+  private SpeedSpectrum(
+      Window window, double rate, int segmentSamples, int fftLength, int segments, double[] power) {
+    this.window = window;
+    this.stepHertz = rate / fftLength;
+    this.segmentSamples = segmentSamples;
+    this.fftLength = fftLength;
+    this.padding = (int) Math.ceil((double) fftLength / segmentSamples);
+    this.segments = segments;
+    this.power = power;
+  }
+
+  /** Averages over everything that is long enough; bins reach up to a frequency. */
+  static SpeedSpectrum of(Residual residual, Window window, double toHertz) {
+    double rate = residual.clean().rateHertz();
+    int longest = residual.clean().longestPiece().length();
+    int segment =
+        longest <= LONGEST_SEGMENT_SECONDS * rate
+            ? longest
+            : (int) Math.round(USUAL_SEGMENT_SECONDS * rate);
+    Fft fft = new Fft(Fft.lengthFor(2 * segment));
+    double[] shape = window.values(segment);
+    double scale = 2 / (segment * window.coherentGain());
+    double[] work = new double[fft.length()];
+    double[] power =
+        new double[Math.min(fft.length() / 2, (int) Math.ceil(toHertz * fft.length() / rate) + 1)];
+    List<Integer> starts = starts(residual.clean(), segment);
+    for (int start : starts) {
+      residual.copy(start, work, segment);
+      Arrays.fill(work, segment, work.length, 0);
+      for (int i = 0; i < segment; i++) {
+        work[i] *= shape[i] * scale;
+      }
+      fft.real(work);
+      for (int k = 1; k < power.length; k++) {
+        power[k] += work[2 * k] * work[2 * k] + work[2 * k + 1] * work[2 * k + 1];
+      }
+    }
+    for (int k = 0; k < power.length; k++) {
+      power[k] /= starts.size();
+    }
+    return new SpeedSpectrum(window, rate, segment, fft.length(), starts.size(), power);
+  }
+
+  private static List<Integer> starts(CleanTrace clean, int segment) {
+    List<Integer> starts = new ArrayList<>();
+    for (CleanTrace.Piece piece : clean.pieces()) {
+      int spare = piece.length() - segment;
+      int steps = (int) Math.ceil(spare / (segment / 2.0));
+      for (int i = 0; spare >= 0 && i <= steps; i++) {
+        starts.add(piece.from() + (steps == 0 ? 0 : (int) ((long) spare * i / steps)));
+      }
+    }
+    return starts;
+  }
+
+  double stepHertz() {
+    return stepHertz;
+  }
+
+  int size() {
+    return power.length;
+  }
+
+  double power(int bin) {
+    return power[bin];
+  }
+
+  /** How many segments were averaged. */
+  int segments() {
+    return segments;
+  }
+
+  double segmentSeconds() {
+    return 1 / resolutionHertz();
+  }
+
+  /** Width of one bin before padding. */
+  double resolutionHertz() {
+    return stepHertz * fftLength / segmentSamples;
+  }
+
+  /** Bins per bin before padding, rounded up. */
+  int padding() {
+    return padding;
+  }
+
+  /** Half of the main lobe's width in bins. */
+  int lobeBins() {
+    return window.lobeBins() * padding;
+  }
+
+  /** Root mean square of the fluctuation between two frequencies. */
+  double rmsPercent(double fromHertz, double toHertz) {
+    double sum = 0;
+    int last = (int) Math.min(power.length - 1, Math.floor(toHertz / stepHertz));
+    for (int k = (int) Math.max(1, Math.ceil(fromHertz / stepHertz)); k <= last; k++) {
+      sum += power[k];
+    }
+    // a line's squared peak, spread by window and padding, halved to its mean square
+    return Math.sqrt(sum / (2 * window.noiseBandwidthBins()) * segmentSamples / fftLength);
+  }
+}

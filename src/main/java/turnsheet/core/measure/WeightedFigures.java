@@ -1,0 +1,146 @@
+package turnsheet.core.measure;
+
+import java.util.ArrayList;
+import java.util.List;
+import turnsheet.core.dsp.OverlapSaveFir;
+import turnsheet.core.dsp.QuasiPeakDetector;
+import turnsheet.core.dsp.Weighting;
+import turnsheet.core.stats.MagnitudeHistogram;
+
+/**
+ * The readings of a flutter meter: the weighted fluctuation's two-sigma value, quasi-peak value and
+ * root mean square. docs/interpretation.md says how each is read over a capture.
+ */
+final class WeightedFigures {
+
+  private static final int BLOCK = 8192;
+  private static final double SHARE = 0.95;
+  private static final double SETTLING_SECONDS = 2;
+  private static final double SETTLING_SHARE = 0.2;
+
+  private final double rateHertz;
+  private final double[] response;
+  private final Tally whole = new Tally();
+  private final Tally block = new Tally();
+  private final List<double[]> blocks = new ArrayList<>();
+  private final long blockSamples;
+
+  private static final class Tally {
+    final MagnitudeHistogram magnitude = new MagnitudeHistogram();
+    final MagnitudeHistogram indicated = new MagnitudeHistogram();
+    double squares;
+
+    void add(double weighted, double indication) {
+      magnitude.add(weighted);
+      indicated.add(indication);
+      squares += weighted * weighted;
+    }
+
+    double[] readings() {
+      return new double[] {
+        magnitude.quantile(SHARE), indicated.quantile(SHARE), Math.sqrt(squares / magnitude.total())
+      };
+    }
+
+    void clear() {
+      magnitude.clear();
+      indicated.clear();
+      squares = 0;
+    }
+  }
+
+  WeightedFigures(Residual residual) {
+    rateHertz = residual.clean().rateHertz();
+    response = Weighting.response(rateHertz);
+    long settled = 0;
+    for (CleanTrace.Piece piece : residual.clean().pieces()) {
+      settled += piece.length() - settling(piece);
+    }
+    long count = Math.max(3, Math.min(12, (long) (settled / rateHertz)));
+    blockSamples = Math.max(1, settled / count);
+    for (CleanTrace.Piece piece : residual.clean().pieces()) {
+      run(residual, piece);
+    }
+  }
+
+  private int settling(CleanTrace.Piece piece) {
+    return (int) Math.ceil(Math.min(SETTLING_SECONDS * rateHertz, SETTLING_SHARE * piece.length()));
+  }
+
+  /** The filter is run in on the piece mirrored at its own beginning. */
+  private void run(Residual residual, CleanTrace.Piece piece) {
+    OverlapSaveFir filter = new OverlapSaveFir(response);
+    QuasiPeakDetector detector = new QuasiPeakDetector(rateHertz);
+    double[] in = new double[BLOCK];
+    double[] out = new double[filter.roomFor(BLOCK)];
+    int mirrored = Math.min(response.length, piece.length() - 1);
+    long at = (long) piece.from() - mirrored;
+    for (int left = mirrored; left > 0; ) {
+      int part = Math.min(BLOCK, left);
+      residual.copyBackwards(piece.from() + left, in, part);
+      at = take(residual.clean(), piece, at, out, filter.process(in, part, out), detector);
+      left -= part;
+    }
+    for (int from = piece.from(); from < piece.to(); from += BLOCK) {
+      int part = Math.min(BLOCK, piece.to() - from);
+      residual.copy(from, in, part);
+      at = take(residual.clean(), piece, at, out, filter.process(in, part, out), detector);
+    }
+    take(residual.clean(), piece, at, out, filter.finish(out), detector);
+  }
+
+  private long take(
+      CleanTrace clean,
+      CleanTrace.Piece piece,
+      long at,
+      double[] out,
+      int count,
+      QuasiPeakDetector detector) {
+    int settled = piece.from() + settling(piece);
+    for (int i = 0; i < count; i++) {
+      double indication = detector.next(out[i]);
+      long index = at + i;
+      if (index >= settled && clean.usable((int) index)) {
+        whole.add(out[i], indication);
+        block.add(out[i], indication);
+        if (block.magnitude.total() >= blockSamples) {
+          blocks.add(block.readings());
+          block.clear();
+        }
+      }
+    }
+    return at + count;
+  }
+
+  /** One reading with the standard uncertainty that the limited length leaves. */
+  record Value(double percent, double lengthUncertaintyPercent) {}
+
+  double settledSeconds() {
+    return whole.magnitude.total() / rateHertz;
+  }
+
+  Value twoSigma() {
+    return value(0);
+  }
+
+  Value quasiPeak() {
+    return value(1);
+  }
+
+  Value rms() {
+    return value(2);
+  }
+
+  private Value value(int which) {
+    double mean = 0;
+    for (double[] b : blocks) {
+      mean += b[which] / blocks.size();
+    }
+    double squares = 0;
+    for (double[] b : blocks) {
+      squares += (b[which] - mean) * (b[which] - mean);
+    }
+    double n = blocks.size();
+    return new Value(whole.readings()[which], n < 2 ? 0 : Math.sqrt(squares / (n - 1) / n));
+  }
+}

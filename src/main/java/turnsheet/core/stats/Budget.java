@@ -1,0 +1,66 @@
+package turnsheet.core.stats;
+
+import java.util.ArrayList;
+import java.util.List;
+
+/**
+ * Uncertainty of one figure as a list of independent contributions, each already in the unit of the
+ * figure.
+ *
+ * <p>Source: JCGM 100:2008 (GUM), 5.1.2 (root of the sum of squares for independent inputs) and
+ * 6.2.1 (expanded uncertainty U = k u).
+ */
+public record Budget(List<Contribution> contributions) {
+
+  /** Coverage factor for about 95 %, near-normal result, many degrees of freedom. */
+  public static final double K = 2;
+
+  public Budget {
+    contributions = List.copyOf(contributions);
+  }
+
+  /**
+   * One cause.
+   *
+   * @param name for people
+   * @param standardUncertainty in the unit of the figure
+   */
+  public record Contribution(String name, double standardUncertainty) {
+    public Contribution {
+      if (!(standardUncertainty >= 0 && Double.isFinite(standardUncertainty))) {
+        throw new IllegalArgumentException(name + " " + standardUncertainty);
+      }
+    }
+  }
+
+  /** No contribution yet. */
+  public static Budget empty() {
+    return new Budget(List.of());
+  }
+
+  /** The same with one more contribution. */
+  public Budget plus(String name, double standardUncertainty) {
+    var more = new ArrayList<>(contributions);
+    more.add(new Contribution(name, standardUncertainty));
+    return new Budget(more);
+  }
+
+  /** A contribution known by its half width only, all values within being equally likely. */
+  public Budget plusRectangular(String name, double halfWidth) {
+    return plus(name, halfWidth / Math.sqrt(3));
+  }
+
+  /** Combined standard uncertainty. */
+  public double combined() {
+    double sum = 0;
+    for (Contribution c : contributions) {
+      sum += c.standardUncertainty * c.standardUncertainty;
+    }
+    return Math.sqrt(sum);
+  }
+
+  /** Expanded uncertainty at k = 2. */
+  public double expanded() {
+    return K * combined();
+  }
+}
