@@ -7,6 +7,7 @@ import turnsheet.core.format.api.ByteSource;
 import turnsheet.core.format.api.CaptureFormat;
 import turnsheet.core.format.api.ReadOptions;
 import turnsheet.core.format.api.Recognition;
+import turnsheet.core.format.text.VcdFormat;
 import turnsheet.core.signal.EdgeReader;
 import turnsheet.core.signal.RejectedException;
 import turnsheet.core.signal.SampleReader;
@@ -22,7 +23,9 @@ public final class CaptureFormats {
 
   /** All formats of this version. */
   public static CaptureFormats standard() {
-    return new CaptureFormats(List.of());
+    return new CaptureFormats(
+        List.of( //
+            new VcdFormat()));
   }
 
   /** Says what the file holds, or why it cannot be used. */
