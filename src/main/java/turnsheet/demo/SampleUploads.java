@@ -37,16 +37,56 @@ final class SampleUploads {
   /** All measurable samples in the order of the folder's README. */
   static List<SampleUpload> all() {
     return List.of(
-        reelTone("reel-19-tone-as-received.wav", "Reel transport at 19.05 cm/s before the repair: runs fast, capstan out of true.", 30, reelSpeed(0.37, 0.115, 0.030), 11),
-        reelTone("reel-19-tone-after-repair.wav", "The same transport after the capstan bearing was changed.", 30, reelSpeed(0.04, 0.024, 0.018), 12),
-        reelTone("reel-19-tone-first-visit.wav", "The same transport years earlier.", 15, reelSpeed(0.06, 0.022, 0.016), 13),
-        reelTone("reel-19-tone-second-visit.wav", "The same transport between the two.", 15, reelSpeed(0.17, 0.052, 0.021), 14),
-        reelTacho("reel-38-tacho-as-received.wav", "Tachometer waveform of the transport at 38.1 cm/s before the repair.", speedAtDouble(-0.21, 0.062), 15),
-        reelTacho("reel-38-tacho-after-repair.wav", "The same after the repair.", speedAtDouble(0.03, 0.019), 16),
+        reelTone(
+            "reel-19-tone-as-received.wav",
+            "Reel transport at 19.05 cm/s before the repair: runs fast, capstan out of true.",
+            30,
+            reelSpeed(0.37, 0.115, 0.030),
+            11),
+        reelTone(
+            "reel-19-tone-after-repair.wav",
+            "The same transport after the capstan bearing was changed.",
+            30,
+            reelSpeed(0.04, 0.024, 0.018),
+            12),
+        reelTone(
+            "reel-19-tone-first-visit.wav",
+            "The same transport years earlier.",
+            15,
+            reelSpeed(0.06, 0.022, 0.016),
+            13),
+        reelTone(
+            "reel-19-tone-second-visit.wav",
+            "The same transport between the two.",
+            15,
+            reelSpeed(0.17, 0.052, 0.021),
+            14),
+        reelTacho(
+            "reel-38-tacho-as-received.wav",
+            "Tachometer waveform of the transport at 38.1 cm/s before the repair.",
+            speedAtDouble(-0.21, 0.062),
+            15),
+        reelTacho(
+            "reel-38-tacho-after-repair.wav",
+            "The same after the repair.",
+            speedAtDouble(0.03, 0.019),
+            16),
         reelEdges(),
         reelPeriods(),
-        discTone("disc-33-tone-as-received.aiff", "Record player at 33 1/3 rev/min with a record off centre.", SpeedFunction.constant(-0.0012).plusLine(PLATTER_HZ, 0.19, 0.4).plusLine(10 * PLATTER_HZ, 0.035, 1), 17),
-        discTone("disc-33-tone-after-repair.aiff", "The same with the record centred.", SpeedFunction.constant(-0.0012).plusLine(PLATTER_HZ, 0.05, 0.4).plusLine(10 * PLATTER_HZ, 0.034, 2), 18),
+        discTone(
+            "disc-33-tone-as-received.aiff",
+            "Record player at 33 1/3 rev/min with a record off centre.",
+            SpeedFunction.constant(-0.0012)
+                .plusLine(PLATTER_HZ, 0.19, 0.4)
+                .plusLine(10 * PLATTER_HZ, 0.035, 1),
+            17),
+        discTone(
+            "disc-33-tone-after-repair.aiff",
+            "The same with the record centred.",
+            SpeedFunction.constant(-0.0012)
+                .plusLine(PLATTER_HZ, 0.05, 0.4)
+                .plusLine(10 * PLATTER_HZ, 0.034, 2),
+            18),
         dictationTable(),
         dictationDump());
   }
@@ -100,8 +140,7 @@ final class SampleUploads {
                 out, rate, 16, SignalSynth.tone(speed, TONE_HZ, rate, seconds, 0.5, 55, seed)));
   }
 
-  private static SampleUpload reelTacho(
-      String name, String about, SpeedFunction speed, long seed) {
+  private static SampleUpload reelTacho(String name, String about, SpeedFunction speed, long seed) {
     int rate = 48000;
     double seconds = 12;
     return new SampleUpload(
@@ -116,8 +155,7 @@ final class SampleUploads {
                 out,
                 rate,
                 16,
-                SignalSynth.pulses(
-                    speed, 2 * PULSES_AT_19, rate, seconds, 0.6, 2, 0.0005, seed)));
+                SignalSynth.pulses(speed, 2 * PULSES_AT_19, rate, seconds, 0.6, 2, 0.0005, seed)));
   }
 
   private static SampleUpload reelEdges() {
@@ -154,8 +192,7 @@ final class SampleUploads {
                 out, SignalSynth.risingEdges(speed, PULSES_AT_19 / 2, 30, 1e-6, 20)));
   }
 
-  private static SampleUpload discTone(
-      String name, String about, SpeedFunction speed, long seed) {
+  private static SampleUpload discTone(String name, String about, SpeedFunction speed, long seed) {
     int rate = 24000;
     double seconds = 27;
     return new SampleUpload(
@@ -171,8 +208,7 @@ final class SampleUploads {
   }
 
   private static SampleUpload dictationTable() {
-    SpeedFunction speed =
-        SpeedFunction.constant(0.018).plusLine(DICTATION_BELT_HZ, 0.32, 0.5);
+    SpeedFunction speed = SpeedFunction.constant(0.018).plusLine(DICTATION_BELT_HZ, 0.32, 0.5);
     double step = 200e-6;
     return new SampleUpload(
         "dictation-4-tacho-as-received.csv",
@@ -183,12 +219,14 @@ final class SampleUploads {
         speed,
         out ->
             TextSamples.waveformTable(
-                out, SignalSynth.pulses(speed, 250, 1 / step, 10, 2.4, 1.2, 0.004, 21), step, -0.5));
+                out,
+                SignalSynth.pulses(speed, 250, 1 / step, 10, 2.4, 1.2, 0.004, 21),
+                step,
+                -0.5));
   }
 
   private static SampleUpload dictationDump() {
-    SpeedFunction speed =
-        SpeedFunction.constant(0.003).plusLine(DICTATION_BELT_HZ, 0.11, 0.5);
+    SpeedFunction speed = SpeedFunction.constant(0.003).plusLine(DICTATION_BELT_HZ, 0.11, 0.5);
     return new SampleUpload(
         "dictation-4-tacho-after-repair.vcd",
         "Value change dump of the same tachometer with a new belt.",
@@ -196,15 +234,15 @@ final class SampleUploads {
         250,
         20,
         speed,
-        out ->
-            TextSamples.valueChangeDump(out, SignalSynth.risingEdges(speed, 250, 20, 2e-6, 22)));
+        out -> TextSamples.valueChangeDump(out, SignalSynth.risingEdges(speed, 250, 20, 2e-6, 22)));
   }
 
   /** Stored, not deflated, with a fixed time, so that the bytes do not depend on the platform. */
   private static void zip(OutputStream out) throws IOException {
     byte[] noise = new byte[4000];
     new Random(23).nextBytes(noise);
-    byte[] content = (new String(noise, StandardCharsets.ISO_8859_1)).getBytes(StandardCharsets.UTF_8);
+    byte[] content =
+        new String(noise, StandardCharsets.ISO_8859_1).getBytes(StandardCharsets.UTF_8);
     var crc = new CRC32();
     crc.update(content);
     try (var zip = new ZipOutputStream(out)) {

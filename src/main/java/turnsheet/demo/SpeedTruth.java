@@ -16,7 +16,10 @@ record SpeedTruth(
     double deviationPercent, double weightedTwoSigmaPercent, double unweightedRmsPercent) {
 
   private static final double RATE_HERTZ = 2000;
-  /** Lines of unrelated rates take every relative phase in this time, so the start does not count. */
+
+  /**
+   * Lines of unrelated rates take every relative phase in this time, so the start does not count.
+   */
   private static final double LONG_SECONDS = 500;
 
   static SpeedTruth of(SpeedFunction speed, double durationSeconds) {
@@ -30,8 +33,7 @@ record SpeedTruth(
       for (int i = 0; i < weighted.length; i++) {
         weighted[i] +=
             weightedPeak
-                * Math.sin(
-                    2 * Math.PI * line.rateHertz() * i / RATE_HERTZ + line.phaseRadians());
+                * Math.sin(2 * Math.PI * line.rateHertz() * i / RATE_HERTZ + line.phaseRadians());
       }
     }
     for (int i = 0; i < weighted.length; i++) {

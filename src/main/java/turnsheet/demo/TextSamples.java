@@ -27,8 +27,7 @@ final class TextSamples {
     var text = new StringBuilder("period_us\n");
     for (int k = 1; k < risingSeconds.length; k++) {
       text.append(
-          String.format(
-              Locale.ROOT, "%.2f\n", (risingSeconds[k] - risingSeconds[k - 1]) * MICRO));
+          String.format(Locale.ROOT, "%.2f\n", (risingSeconds[k] - risingSeconds[k - 1]) * MICRO));
     }
     write(out, text);
   }
@@ -54,7 +53,8 @@ final class TextSamples {
     for (int k = 0; k + 1 < risingSeconds.length; k++) {
       long up = Math.round(risingSeconds[k] * NANO / 100);
       long down =
-          Math.round((risingSeconds[k] + (risingSeconds[k + 1] - risingSeconds[k]) / 3) * NANO / 100);
+          Math.round(
+              (risingSeconds[k] + (risingSeconds[k + 1] - risingSeconds[k]) / 3) * NANO / 100);
       text.append('#').append(Math.max(1, up)).append("\n1!\n");
       text.append('#').append(Math.max(2, down)).append("\n0!\n");
     }

@@ -17,7 +17,8 @@ class SampleUploadsTest {
   @Test
   void theFolderHoldsWhatTheGeneratorMakes() throws IOException {
     for (SampleUpload sample : SampleUploads.all()) {
-      assertThat(Arrays.equals(Files.readAllBytes(FOLDER.resolve(sample.fileName())), sample.bytes()))
+      assertThat(
+              Arrays.equals(Files.readAllBytes(FOLDER.resolve(sample.fileName())), sample.bytes()))
           .as(sample.fileName())
           .isTrue();
     }
@@ -34,7 +35,10 @@ class SampleUploadsTest {
     }
   }
 
-  /** AES6-2008 table 1: 0 dB at 4 Hz; a sine's two-sigma value is sin(0.95 pi/2) = 0.996917 of its peak. */
+  /**
+   * AES6-2008 table 1: 0 dB at 4 Hz; a sine's two-sigma value is sin(0.95 pi/2) = 0.996917 of its
+   * peak.
+   */
   @Test
   void theTruthOfOneLineAtFourHertzIsItsTwoSigmaValue() {
     SpeedTruth truth = SpeedTruth.of(SpeedFunction.constant(0).plusLine(4, 0.1, 0), 100);

@@ -30,13 +30,7 @@ class LongCaptureIT {
 
     BuiltJar.Ended ended =
         BuiltJar.run(
-            200,
-            List.of("-Xmx256m"),
-            "measure",
-            file.toString(),
-            "--tone-hz",
-            "3150",
-            "--json");
+            200, List.of("-Xmx256m"), "measure", file.toString(), "--tone-hz", "3150", "--json");
 
     assertThat(ended.err()).isEmpty();
     assertThat(ended.status()).isZero();

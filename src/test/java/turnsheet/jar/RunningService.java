@@ -10,6 +10,7 @@ import java.nio.file.Path;
 import java.time.Duration;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.concurrent.TimeUnit;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 
@@ -82,11 +83,12 @@ public final class RunningService implements AutoCloseable {
     process.waitFor();
   }
 
+  /** Asks the process to end and waits; ends it by force where it does not. */
   @Override
-  public void close() throws InterruptedException {
+  public void close() {
     process.destroy();
-    if (!process.waitFor(10, java.util.concurrent.TimeUnit.SECONDS)) {
-      kill();
+    if (process.onExit().completeOnTimeout(process, 10, TimeUnit.SECONDS).join().isAlive()) {
+      process.toHandle().destroyForcibly();
     }
   }
 
