@@ -30,7 +30,7 @@ import turnsheet.shop.VisitId;
  * QUEUED                                 measured MEASURED
  * QUEUED                                 refused  REFUSED
  * QUEUED                                 failed   FAILED
- * RECOGNISED, REFUSED                    looked   RECOGNISED or REFUSED
+ * RECOGNISED, REFUSED, FAILED            looked   RECOGNISED or REFUSED
  * </pre>
  */
 @Repository
@@ -101,7 +101,7 @@ public class Captures {
     return jdbc.sql(
                 "update capture set state = 'recognised', recognition = :looked,"
                     + " refusal_code = null, refusal_message = null"
-                    + " where id = :id and state in ('recognised', 'refused')")
+                    + " where id = :id and state in ('recognised', 'refused', 'failed')")
             .param("looked", CoreJson.toJson(looked))
             .param("id", id.value())
             .update()
@@ -110,14 +110,16 @@ public class Captures {
 
   /** Another look, with other options, ended in a refusal; what was known before stays. */
   boolean lookRefused(CaptureId id, Rejection why) {
-    return refuse(id, "refused", why, "('recognised', 'refused')");
+    return refuse(id, "refused", why, "('recognised', 'refused', 'failed')");
   }
 
-  boolean queue(CaptureId id, CaptureChoices choices, JobId job) {
+  boolean queue(CaptureId id, Looked looked, CaptureChoices choices, JobId job) {
     return jdbc.sql(
-                "update capture set state = 'queued', choices = :choices, job_id = :job,"
+                "update capture set state = 'queued', recognition = :looked, choices = :choices,"
+                    + " job_id = :job,"
                     + " refusal_code = null, refusal_message = null where id = :id"
                     + " and state in ('recognised', 'refused', 'measured', 'failed')")
+            .param("looked", CoreJson.toJson(looked))
             .param("choices", CoreJson.toJson(choices))
             .param("job", job.value())
             .param("id", id.value())

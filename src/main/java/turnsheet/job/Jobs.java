@@ -8,8 +8,6 @@ import java.util.Optional;
 import java.util.UUID;
 import org.springframework.beans.factory.ObjectProvider;
 import org.springframework.stereotype.Service;
-import org.springframework.transaction.annotation.Propagation;
-import org.springframework.transaction.annotation.Transactional;
 import org.springframework.transaction.support.TransactionSynchronization;
 import org.springframework.transaction.support.TransactionSynchronizationManager;
 
@@ -33,9 +31,13 @@ public class Jobs {
    * nothing of it.
    *
    * @param name of a {@link JobHandler}
+   * @throws IllegalStateException outside a transaction
    */
-  @Transactional(propagation = Propagation.MANDATORY)
   public JobId enqueue(String name, UUID subject) {
+    if (!TransactionSynchronizationManager.isActualTransactionActive()) {
+      throw new IllegalStateException(
+          "a job is enqueued with what it is about, in one transaction");
+    }
     JobId id = JobId.random();
     table.add(id, name, subject);
     scheduler

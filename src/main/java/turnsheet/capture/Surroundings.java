@@ -1,0 +1,28 @@
+package turnsheet.capture;
+
+import org.jspecify.annotations.Nullable;
+import turnsheet.shop.BenchInstrument;
+import turnsheet.shop.MachineModel;
+import turnsheet.shop.ReferenceMedium;
+import turnsheet.shop.SpeedSetting;
+import turnsheet.shop.VisitSummary;
+
+/** What the shop knows about the things that a {@link CaptureKey} names. */
+public record Surroundings(
+    VisitSummary visit,
+    MachineModel model,
+    SpeedSetting setting,
+    @Nullable BenchInstrument instrument,
+    @Nullable ReferenceMedium medium) {
+
+  /** Nominal tone: of the medium if it carries one, else of the setting. */
+  @Nullable Double toneHz() {
+    Double ofMedium = medium == null ? null : medium.toneHz();
+    return ofMedium == null ? setting.toneHz() : ofMedium;
+  }
+
+  @Nullable Double pulsesPerSecond() {
+    var pulses = model.pulsesPerSecond(setting);
+    return pulses.isPresent() ? pulses.getAsDouble() : null;
+  }
+}
