@@ -1,8 +1,10 @@
 package turnsheet;
 
 import java.time.Clock;
+import org.springframework.boot.jackson.autoconfigure.JsonMapperBuilderCustomizer;
 import org.springframework.context.annotation.Bean;
 import org.springframework.context.annotation.Configuration;
+import tools.jackson.databind.EnumNamingStrategies;
 import turnsheet.core.format.CaptureFormats;
 import turnsheet.core.measure.Measurement;
 
@@ -23,5 +25,11 @@ class ServiceConfig {
   @Bean
   Measurement measurement(CaptureFormats formats) {
     return new Measurement(formats);
+  }
+
+  /** The REST API says enums as the result contract does: {@code tachometer}. */
+  @Bean
+  JsonMapperBuilderCustomizer contractNames() {
+    return builder -> builder.enumNamingStrategy(EnumNamingStrategies.LOWER_CAMEL_CASE);
   }
 }

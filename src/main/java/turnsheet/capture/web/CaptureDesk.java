@@ -1,0 +1,59 @@
+package turnsheet.capture.web;
+
+import java.io.IOException;
+import java.nio.charset.StandardCharsets;
+import java.util.UUID;
+import org.springframework.core.io.InputStreamResource;
+import org.springframework.core.io.Resource;
+import org.springframework.http.ContentDisposition;
+import org.springframework.http.MediaType;
+import org.springframework.http.ResponseEntity;
+import org.springframework.stereotype.Component;
+import turnsheet.capture.Capture;
+import turnsheet.capture.CaptureId;
+import turnsheet.capture.CaptureStore;
+import turnsheet.capture.Captures;
+import turnsheet.job.JobId;
+import turnsheet.job.Jobs;
+import turnsheet.web.NotFoundException;
+
+/** What the pages and the REST resource ask alike. */
+@Component
+class CaptureDesk {
+
+  private final Captures captures;
+  private final CaptureStore store;
+  private final Jobs jobs;
+
+  CaptureDesk(Captures captures, CaptureStore store, Jobs jobs) {
+    this.captures = captures;
+    this.store = store;
+    this.jobs = jobs;
+  }
+
+  Capture capture(UUID id) {
+    return captures.find(new CaptureId(id)).orElseThrow(() -> new NotFoundException("capture"));
+  }
+
+  ProgressDocument progress(UUID id) {
+    Capture capture = capture(id);
+    JobId job = capture.job();
+    return ProgressDocument.of(capture, job == null ? null : jobs.find(job).orElse(null));
+  }
+
+  /** The original bytes, always as a download, never as something that a browser would run. */
+  ResponseEntity<Resource> file(UUID id) throws IOException {
+    Capture capture = capture(id);
+    return ResponseEntity.ok()
+        .contentType(MediaType.APPLICATION_OCTET_STREAM)
+        .contentLength(capture.bytes().length())
+        .header(
+            "Content-Disposition",
+            ContentDisposition.attachment()
+                .filename(capture.fileName(), StandardCharsets.UTF_8)
+                .build()
+                .toString())
+        .header("X-Content-Type-Options", "nosniff")
+        .body(new InputStreamResource(store.open(capture.bytes()).open()));
+  }
+}

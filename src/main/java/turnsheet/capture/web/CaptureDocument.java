@@ -1,0 +1,53 @@
+package turnsheet.capture.web;
+
+import java.time.Instant;
+import java.util.UUID;
+import org.jspecify.annotations.Nullable;
+import turnsheet.capture.Capture;
+import turnsheet.capture.CaptureChoices;
+import turnsheet.capture.Looked;
+import turnsheet.core.format.api.Recognised;
+import turnsheet.core.measure.KindGuess;
+import turnsheet.core.signal.Rejection;
+
+/** A capture as the REST API shows it; absent things are null. */
+record CaptureDocument(
+    UUID id,
+    UUID visitId,
+    UUID speedSettingId,
+    String condition,
+    @Nullable UUID instrumentId,
+    @Nullable UUID mediumId,
+    String fileName,
+    String sha256,
+    long byteLength,
+    Instant receivedAt,
+    String receivedBy,
+    String state,
+    @Nullable Recognised recognised,
+    @Nullable KindGuess kindGuess,
+    @Nullable CaptureChoices choices,
+    @Nullable Rejection refusal) {
+
+  static CaptureDocument of(Capture capture) {
+    var key = capture.key();
+    Looked looked = capture.looked();
+    return new CaptureDocument(
+        capture.id().value(),
+        key.visit().value(),
+        key.setting().value(),
+        key.condition(),
+        key.instrument() == null ? null : key.instrument().value(),
+        key.medium() == null ? null : key.medium().value(),
+        capture.fileName(),
+        capture.bytes().sha256(),
+        capture.bytes().length(),
+        capture.receivedAt(),
+        capture.receivedBy(),
+        capture.state().word(),
+        looked == null ? null : looked.recognised(),
+        looked == null ? null : looked.guess(),
+        capture.choices(),
+        capture.refusal());
+  }
+}

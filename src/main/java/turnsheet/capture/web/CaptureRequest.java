@@ -1,0 +1,34 @@
+package turnsheet.capture.web;
+
+import jakarta.validation.constraints.NotBlank;
+import jakarta.validation.constraints.NotNull;
+import jakarta.validation.constraints.Size;
+import java.util.UUID;
+import org.jspecify.annotations.Nullable;
+import turnsheet.capture.CaptureKey;
+import turnsheet.shop.InstrumentId;
+import turnsheet.shop.MediumId;
+import turnsheet.shop.SpeedSettingId;
+import turnsheet.shop.VisitId;
+
+/**
+ * What is said about a file as it is uploaded, in a form or in the query of a raw upload.
+ *
+ * @param ownLabel takes the place of the condition where it is filled in
+ */
+record CaptureRequest(
+    @NotNull UUID speedSettingId,
+    @NotBlank @Size(max = CaptureKey.CONDITION_LENGTH) String condition,
+    @Nullable @Size(max = CaptureKey.CONDITION_LENGTH) String ownLabel,
+    @Nullable UUID instrumentId,
+    @Nullable UUID mediumId) {
+
+  CaptureKey key(UUID visit) {
+    return new CaptureKey(
+        new VisitId(visit),
+        new SpeedSettingId(speedSettingId),
+        ownLabel == null || ownLabel.isBlank() ? condition : ownLabel,
+        instrumentId == null ? null : new InstrumentId(instrumentId),
+        mediumId == null ? null : new MediumId(mediumId));
+  }
+}

@@ -1,0 +1,89 @@
+package turnsheet.capture.web;
+
+import jakarta.servlet.http.HttpServletRequest;
+import jakarta.validation.Valid;
+import java.io.IOException;
+import java.net.URI;
+import java.security.Principal;
+import java.util.UUID;
+import org.jspecify.annotations.Nullable;
+import org.springframework.core.io.Resource;
+import org.springframework.http.MediaType;
+import org.springframework.http.ResponseEntity;
+import org.springframework.web.bind.annotation.GetMapping;
+import org.springframework.web.bind.annotation.ModelAttribute;
+import org.springframework.web.bind.annotation.PathVariable;
+import org.springframework.web.bind.annotation.PostMapping;
+import org.springframework.web.bind.annotation.RequestBody;
+import org.springframework.web.bind.annotation.RequestMapping;
+import org.springframework.web.bind.annotation.RequestParam;
+import org.springframework.web.bind.annotation.RestController;
+import turnsheet.capture.Capture;
+import turnsheet.capture.CaptureId;
+import turnsheet.capture.Captures;
+import turnsheet.capture.Intake;
+import turnsheet.shop.VisitId;
+
+/** Captures by REST. */
+@RestController
+@RequestMapping("/api/v1")
+class CaptureResource {
+
+  private final Intake intake;
+  private final Captures captures;
+  private final CaptureDesk desk;
+
+  CaptureResource(Intake intake, Captures captures, CaptureDesk desk) {
+    this.intake = intake;
+    this.captures = captures;
+    this.desk = desk;
+  }
+
+  /** Takes the body as the file; a file that cannot be used answers 201 with state refused. */
+  @PostMapping(
+      path = "/visits/{visit}/captures",
+      consumes = MediaType.APPLICATION_OCTET_STREAM_VALUE)
+  ResponseEntity<CaptureDocument> upload(
+      @PathVariable UUID visit,
+      @Valid @ModelAttribute CaptureRequest request,
+      @RequestParam String fileName,
+      Principal visitor,
+      HttpServletRequest body)
+      throws IOException {
+    Capture capture =
+        intake.receive(request.key(visit), fileName, visitor.getName(), body.getInputStream());
+    return ResponseEntity.created(
+            URI.create(body.getContextPath() + "/api/v1/captures/" + capture.id()))
+        .body(CaptureDocument.of(capture));
+  }
+
+  @GetMapping("/visits/{visit}/captures")
+  java.util.List<CaptureDocument> ofVisit(@PathVariable UUID visit) {
+    return captures.ofVisit(new VisitId(visit)).stream().map(CaptureDocument::of).toList();
+  }
+
+  @GetMapping("/captures/{id}")
+  CaptureDocument capture(@PathVariable UUID id) {
+    return CaptureDocument.of(desk.capture(id));
+  }
+
+  /** Orders the measurement; answers 202, or 200 where the wish made the file unusable. */
+  @PostMapping("/captures/{id}/measure")
+  ResponseEntity<CaptureDocument> measure(
+      @PathVariable UUID id, @RequestBody(required = false) @Nullable WishForm wish) {
+    WishForm said = wish == null ? WishForm.none() : wish;
+    Capture capture = intake.confirm(new CaptureId(id), said.wish());
+    boolean ordered = capture.refusal() == null;
+    return ResponseEntity.status(ordered ? 202 : 200).body(CaptureDocument.of(capture));
+  }
+
+  @GetMapping("/captures/{id}/job")
+  ProgressDocument job(@PathVariable UUID id) {
+    return desk.progress(id);
+  }
+
+  @GetMapping("/captures/{id}/file")
+  ResponseEntity<Resource> file(@PathVariable UUID id) throws IOException {
+    return desk.file(id);
+  }
+}
