@@ -99,7 +99,6 @@ class ArchitectureTest {
             "org.jtransforms..",
             "pl.edu.icm.jlargearrays..",
             "org.hipparchus..",
-            "org.jflac..",
             "de.siegmar.fastcsv..")
         .check(CLASSES);
   }

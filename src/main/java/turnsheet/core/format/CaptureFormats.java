@@ -7,6 +7,9 @@ import turnsheet.core.format.api.ByteSource;
 import turnsheet.core.format.api.CaptureFormat;
 import turnsheet.core.format.api.ReadOptions;
 import turnsheet.core.format.api.Recognition;
+import turnsheet.core.format.audio.AiffFormat;
+import turnsheet.core.format.audio.FlacFormat;
+import turnsheet.core.format.audio.WavFormat;
 import turnsheet.core.format.text.VcdFormat;
 import turnsheet.core.signal.EdgeReader;
 import turnsheet.core.signal.RejectedException;
@@ -25,6 +28,9 @@ public final class CaptureFormats {
   public static CaptureFormats standard() {
     return new CaptureFormats(
         List.of( //
+            new WavFormat(), //
+            new AiffFormat(), //
+            new FlacFormat(), //
             new VcdFormat()));
   }
 
@@ -58,6 +64,7 @@ public final class CaptureFormats {
       throw new RejectedException(
           "empty", "The file is empty (0 bytes): record or export it again.");
     }
+    ForeignContent.refuse(head);
     for (CaptureFormat format : formats) {
       if (format.claims(head)) {
         return format;
