@@ -50,8 +50,8 @@ final class ForeignContent {
           compressed(0, "\u00ff\u00fd", "MPEG layer 2 audio"),
           compressed(0, "\u00ff\u00fc", "MPEG layer 2 audio"),
           compressed(0, "\u00ff\u00f1", "raw AAC audio"),
-          compressed(0, "\u00ff\u00f8", "a raw AAC or FLAC stream without its header"),
-          compressed(0, "\u00ff\u00f9", "a raw AAC or FLAC stream without its header"),
+          headless("\u00ff\u00f8"),
+          headless("\u00ff\u00f9"),
           new Mark(0, "riff.\u0091", "unsupportedContainer", "Wave64 audio", OTHER_CONTAINER),
           new Mark(0, "caff", "unsupportedContainer", "CAF audio", OTHER_CONTAINER),
           new Mark(0, ".snd", "unsupportedContainer", "AU audio", OTHER_CONTAINER));
@@ -74,6 +74,15 @@ final class ForeignContent {
 
   private static Mark compressed(int at, String bytes, String kind) {
     return new Mark(at, bytes, "compressedAudio", kind, EXPORT_SAMPLES);
+  }
+
+  private static Mark headless(String bytes) {
+    return new Mark(
+        0,
+        bytes,
+        "unsupportedContainer",
+        "a raw FLAC or AAC stream without the header that describes it",
+        OTHER_CONTAINER);
   }
 
   /** Bytes, written as characters up to 255, at a place of the head. */

@@ -146,8 +146,8 @@ final class FlacReader implements SampleReader {
           "changingFormat",
           String.format(
               Locale.ROOT,
-              "The FLAC stream changes its format%s: %d Hz, %d channels, %d bits where the header"
-                  + " announces %d Hz, %d channels, %d bits. Export the recording as one piece.",
+              "The FLAC stream changes its format%s: %d Hz, channels: %d, %d bits where the header"
+                  + " announces %d Hz, channels: %d, %d bits. Export the recording as one piece.",
               where(),
               frame.sampleRateHertz() == 0 ? header.sampleRateHertz() : frame.sampleRateHertz(),
               frame.channels(),
