@@ -6,10 +6,10 @@ import java.time.Clock;
 import java.util.List;
 import java.util.Optional;
 import org.springframework.jdbc.core.simple.JdbcClient;
-import org.springframework.stereotype.Repository;
+import org.springframework.stereotype.Component;
 
 /** The customers of the shop. */
-@Repository
+@Component
 public final class Customers {
 
   private static final PageQuery.Listing LISTING =

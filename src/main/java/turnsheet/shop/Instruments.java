@@ -8,10 +8,10 @@ import java.util.List;
 import java.util.Optional;
 import org.springframework.dao.DuplicateKeyException;
 import org.springframework.jdbc.core.simple.JdbcClient;
-import org.springframework.stereotype.Repository;
+import org.springframework.stereotype.Component;
 
 /** The bench instruments of the shop: a handful. */
-@Repository
+@Component
 public final class Instruments {
 
   private static final PageQuery.Listing LISTING =

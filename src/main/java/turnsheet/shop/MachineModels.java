@@ -6,11 +6,11 @@ import java.util.function.UnaryOperator;
 import org.springframework.dao.DataIntegrityViolationException;
 import org.springframework.dao.DuplicateKeyException;
 import org.springframework.jdbc.core.simple.JdbcClient;
-import org.springframework.stereotype.Repository;
+import org.springframework.stereotype.Component;
 import org.springframework.transaction.support.TransactionOperations;
 
 /** The machine models that the shop looks after. */
-@Repository
+@Component
 public final class MachineModels {
 
   private static final PageQuery.Listing LISTING =

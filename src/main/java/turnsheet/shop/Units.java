@@ -7,10 +7,10 @@ import java.util.List;
 import java.util.Optional;
 import org.springframework.dao.DuplicateKeyException;
 import org.springframework.jdbc.core.simple.JdbcClient;
-import org.springframework.stereotype.Repository;
+import org.springframework.stereotype.Component;
 
 /** The units that the shop knows. */
-@Repository
+@Component
 public final class Units {
 
   private static final String SUMMARY =

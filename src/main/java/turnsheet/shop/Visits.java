@@ -9,11 +9,11 @@ import java.util.List;
 import java.util.Optional;
 import java.util.function.UnaryOperator;
 import org.springframework.jdbc.core.simple.JdbcClient;
-import org.springframework.stereotype.Repository;
+import org.springframework.stereotype.Component;
 import org.springframework.transaction.support.TransactionOperations;
 
 /** The visits of all units. */
-@Repository
+@Component
 public final class Visits {
 
   private static final PageQuery.Listing LISTING =
