@@ -3,7 +3,11 @@ package turnsheet.core.measure;
 import java.io.IOException;
 import turnsheet.core.format.CaptureFormats;
 import turnsheet.core.format.api.ByteSource;
+import turnsheet.core.format.api.Contents;
 import turnsheet.core.format.api.ReadOptions;
+import turnsheet.core.format.api.Recognised;
+import turnsheet.core.format.api.Recognition;
+import turnsheet.core.signal.RejectedException;
 import turnsheet.core.signal.Rejection;
 
 /** Measures captures: the way in for the service and the shell command. */
@@ -30,7 +34,43 @@ public final class Measurement {
       MeasureSettings settings,
       Progress progress)
       throws IOException {
-    return new Outcome.Refused(new Rejection("notYet", "No plan stands for " + settings.kind()));
+    ByteSource counted = new ProgressSource(source, progress);
+    ReadOptions chosen = options.withChannel(settings.channel());
+    Recognition recognition = formats.recognise(source, chosen);
+    if (!(recognition instanceof Recognition.Accepted accepted)) {
+      return new Outcome.Refused(((Recognition.Refused) recognition).rejection());
+    }
+    Recognised recognised = accepted.recognised();
+    boolean waveform = recognised.contents() == Contents.WAVEFORM;
+    if (waveform == (settings.kind() == CaptureKind.EDGES)) {
+      return new Outcome.Refused(otherContents(waveform));
+    }
+    try {
+      Outcome outcome =
+          switch (settings.kind()) {
+            case TONE ->
+                new TonePlan(settings)
+                    .outcome(() -> formats.openSamples(counted, chosen), sha256, recognised);
+            case TACHOMETER, EDGES ->
+                new Outcome.Refused(
+                    new Rejection("notYet", "No plan stands for " + settings.kind()));
+          };
+      progress.reached(1);
+      return outcome;
+    } catch (RejectedException e) {
+      return new Outcome.Refused(e.rejection());
+    }
+  }
+
+  private static Rejection otherContents(boolean waveform) {
+    return waveform
+        ? new Rejection(
+            "waveformNotEdges",
+            "The file holds a waveform, not a list of edges: measure it as a tone or as a"
+                + " tachometer waveform.")
+        : new Rejection(
+            "edgesNotWaveform",
+            "The file holds edges or periods, not a waveform: measure it as an edge list.");
   }
 
   /** The formats this measures. */

@@ -1,0 +1,113 @@
+package turnsheet.core.dsp;
+
+/**
+ * Follows the frequency of a tone: the recording is shifted by the expected frequency, cut to the
+ * band around it, and the phase of the complex signal that is left is differenced.
+ *
+ * <p>Shape: {@link #process} takes samples of the recording and leaves baseband values (amplitude
+ * and phase step) at {@link ToneBand#phaseRateHertz}. The caller passes the steps, mended where it
+ * sees fit, to a {@link SpeedSmoother}.
+ *
+ * <p>The first filter is a band pass made of complex taps, so that the shift costs nothing at the
+ * rate of the recording; it is exact, the filter of a shifted signal being the shift of a filtered
+ * one.
+ */
+public final class ToneDemodulator {
+
+  private static final int BLOCK = 8192;
+
+  private final FirDecimator firstRe;
+  private final FirDecimator firstIm;
+  private final FirDecimator secondRe;
+  private final FirDecimator secondIm;
+  private final double turnsPerStep;
+  private final double delaySeconds;
+  private final double[] midRe;
+  private final double[] midIm;
+  private final double[] re;
+  private final double[] im;
+  private double turns;
+  private int count;
+
+  public ToneDemodulator(ToneBand band) {
+    double[] shape =
+        band.firstFactor() == 1
+            ? new double[] {1}
+            : KaiserFir.lowPass(
+                band.passHertz(),
+                band.firstStopHertz(),
+                ToneBand.ATTENUATION_DB,
+                band.sampleRateHertz());
+    double turnsPerSample = band.toneHertz() / band.sampleRateHertz();
+    double[] cosine = new double[shape.length];
+    double[] sine = new double[shape.length];
+    for (int i = 0; i < shape.length; i++) {
+      double angle = 2 * Math.PI * fraction(turnsPerSample * (i - shape.length / 2));
+      // twice, so that the result has the amplitude of the tone
+      cosine[i] = 2 * shape[i] * StrictMath.cos(angle);
+      sine[i] = -2 * shape[i] * StrictMath.sin(angle);
+    }
+    firstRe = new FirDecimator(cosine, band.firstFactor());
+    firstIm = new FirDecimator(sine, band.firstFactor());
+    turnsPerStep = fraction(turnsPerSample * band.firstFactor());
+    double[] taps =
+        KaiserFir.lowPass(
+            band.passHertz(), band.stopHertz(), ToneBand.ATTENUATION_DB, band.firstRateHertz());
+    secondRe = new FirDecimator(taps, band.secondFactor());
+    secondIm = new FirDecimator(taps, band.secondFactor());
+    delaySeconds =
+        firstRe.delaySamples() / band.sampleRateHertz()
+            + secondRe.delaySamples() / band.firstRateHertz();
+    midRe = new double[firstRe.roomFor(BLOCK)];
+    midIm = new double[midRe.length];
+    re = new double[secondRe.roomFor(midRe.length)];
+    im = new double[re.length];
+  }
+
+  /** Most samples that {@link #process} takes at once. */
+  public static int blockSamples() {
+    return BLOCK;
+  }
+
+  /** Time of the first baseband value. */
+  public double delaySeconds() {
+    return delaySeconds;
+  }
+
+  /**
+   * Takes samples.
+   *
+   * @param in read from index 0, left alone
+   * @return how many baseband values {@link #re} and {@link #im} now hold
+   */
+  public int process(double[] in, int samples) {
+    int n = firstRe.process(in, samples, midRe);
+    firstIm.process(in, samples, midIm);
+    for (int i = 0; i < n; i++) {
+      double angle = 2 * Math.PI * turns;
+      double c = StrictMath.cos(angle);
+      double s = StrictMath.sin(angle);
+      double x = midRe[i];
+      midRe[i] = x * c + midIm[i] * s;
+      midIm[i] = midIm[i] * c - x * s;
+      turns = fraction(turns + turnsPerStep);
+    }
+    count = secondRe.process(midRe, n, re);
+    secondIm.process(midIm, n, im);
+    return count;
+  }
+
+  /** Real part of the latest values; valid up to the next {@link #process}. */
+  public double re(int index) {
+    return re[index];
+  }
+
+  /** Imaginary part of the latest values; valid up to the next {@link #process}. */
+  public double im(int index) {
+    return im[index];
+  }
+
+  private static double fraction(double turns) {
+    return turns - Math.floor(turns);
+  }
+}
