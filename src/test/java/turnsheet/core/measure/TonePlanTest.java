@@ -169,7 +169,8 @@ class TonePlanTest {
     // samples; hum and noise move single samples at the ends of runs
     assertThat(result.signal().clippedSamples() / (double) samples.length)
         .isCloseTo(0.535, within(0.06));
-    // clipping a sine of peak a at 1 leaves a fundamental of 2/pi (a asin(1/a) + sqrt(1 - 1/a^2)) and
+    // clipping a sine of peak a at 1 leaves a fundamental of 2/pi (a asin(1/a) + sqrt(1 - 1/a^2))
+    // and
     // passes a small signal for the share of time 2/pi asin(1/a) only (describing function)
     double fundamental = 2 / Math.PI * (1.5 * Math.asin(1 / 1.5) + Math.sqrt(1 - 1 / 2.25));
     double hum = 0.03 * 2 / Math.PI * Math.asin(1 / 1.5);
