@@ -1,31 +1,44 @@
 package turnsheet.capture.web;
 
 import java.io.IOException;
+import java.io.InputStream;
 import java.nio.charset.StandardCharsets;
+import java.security.Principal;
 import java.util.UUID;
+import org.slf4j.Logger;
+import org.slf4j.LoggerFactory;
 import org.springframework.core.io.InputStreamResource;
 import org.springframework.core.io.Resource;
 import org.springframework.http.ContentDisposition;
 import org.springframework.http.MediaType;
 import org.springframework.http.ResponseEntity;
 import org.springframework.stereotype.Component;
+import turnsheet.capture.BrokenUploadException;
 import turnsheet.capture.Capture;
 import turnsheet.capture.CaptureId;
+import turnsheet.capture.CaptureKey;
 import turnsheet.capture.CaptureStore;
 import turnsheet.capture.Captures;
+import turnsheet.capture.Intake;
+import turnsheet.capture.StoreException;
 import turnsheet.job.JobId;
 import turnsheet.job.Jobs;
 import turnsheet.web.NotFoundException;
+import turnsheet.web.RefusedRequestException;
 
 /** What the pages and the REST resource ask alike. */
 @Component
 class CaptureDesk {
 
+  private static final Logger log = LoggerFactory.getLogger(CaptureDesk.class);
+
+  private final Intake intake;
   private final Captures captures;
   private final CaptureStore store;
   private final Jobs jobs;
 
-  CaptureDesk(Captures captures, CaptureStore store, Jobs jobs) {
+  CaptureDesk(Intake intake, Captures captures, CaptureStore store, Jobs jobs) {
+    this.intake = intake;
     this.captures = captures;
     this.store = store;
     this.jobs = jobs;
@@ -33,6 +46,26 @@ class CaptureDesk {
 
   Capture capture(UUID id) {
     return captures.find(new CaptureId(id)).orElseThrow(() -> new NotFoundException("capture"));
+  }
+
+  /**
+   * Takes a file in.
+   *
+   * @throws RefusedRequestException also where the transfer or the disk failed
+   */
+  Capture receive(CaptureKey key, String fileName, Principal visitor, InputStream in) {
+    try {
+      return intake.receive(key, fileName, visitor.getName(), in);
+    } catch (BrokenUploadException e) {
+      throw new RefusedRequestException(
+          "uploadBroken", "The transfer broke off and nothing was stored: upload it again.");
+    } catch (StoreException e) {
+      log.error("cannot store a capture", e);
+      throw new RefusedRequestException(
+          "notStored",
+          "The disk of the service did not take the recording, and nothing of it was stored: make"
+              + " room in the data folder, then upload it again.");
+    }
   }
 
   ProgressDocument progress(UUID id) {

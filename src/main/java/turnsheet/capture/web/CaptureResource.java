@@ -5,6 +5,7 @@ import jakarta.validation.Valid;
 import java.io.IOException;
 import java.net.URI;
 import java.security.Principal;
+import java.util.List;
 import java.util.UUID;
 import org.jspecify.annotations.Nullable;
 import org.springframework.core.io.Resource;
@@ -51,14 +52,14 @@ class CaptureResource {
       HttpServletRequest body)
       throws IOException {
     Capture capture =
-        intake.receive(request.key(visit), fileName, visitor.getName(), body.getInputStream());
+        desk.receive(request.key(visit), fileName, visitor, body.getInputStream());
     return ResponseEntity.created(
             URI.create(body.getContextPath() + "/api/v1/captures/" + capture.id()))
         .body(CaptureDocument.of(capture));
   }
 
   @GetMapping("/visits/{visit}/captures")
-  java.util.List<CaptureDocument> ofVisit(@PathVariable UUID visit) {
+  List<CaptureDocument> ofVisit(@PathVariable UUID visit) {
     return captures.ofVisit(new VisitId(visit)).stream().map(CaptureDocument::of).toList();
   }
 

@@ -18,17 +18,16 @@ import org.springframework.web.bind.annotation.ResponseBody;
 import org.springframework.web.bind.annotation.ResponseStatus;
 import org.springframework.web.multipart.MultipartFile;
 import turnsheet.capture.Capture;
-import turnsheet.capture.Intake;
 import turnsheet.web.RefusedRequestException;
 
 /** Takes files from the pages of a visit. */
 @Controller
 class UploadController {
 
-  private final Intake intake;
+  private final CaptureDesk desk;
 
-  UploadController(Intake intake) {
-    this.intake = intake;
+  UploadController(CaptureDesk desk) {
+    this.desk = desk;
   }
 
   /** The form as a browser without scripts sends it. */
@@ -47,7 +46,7 @@ class UploadController {
     for (MultipartFile file : chosen) {
       try (InputStream in = file.getInputStream()) {
         String name = String.valueOf(file.getOriginalFilename());
-        last = intake.receive(request.key(visit), name, visitor.getName(), in);
+        last = desk.receive(request.key(visit), name, visitor, in);
       }
     }
     return last != null && chosen.size() == 1
@@ -69,7 +68,7 @@ class UploadController {
       HttpServletRequest body)
       throws IOException {
     Capture capture =
-        intake.receive(request.key(visit), fileName, visitor.getName(), body.getInputStream());
+        desk.receive(request.key(visit), fileName, visitor, body.getInputStream());
     return new Uploaded(body.getContextPath() + "/captures/" + capture.id());
   }
 
