@@ -55,6 +55,8 @@ public class CaptureStore {
       StoredBytes stored = write(in, part);
       keep(part, stored);
       return stored;
+    } catch (BrokenUploadException e) {
+      throw e;
     } catch (IOException e) {
       throw new StoreException(e);
     } finally {

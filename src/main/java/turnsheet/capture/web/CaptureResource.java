@@ -51,8 +51,7 @@ class CaptureResource {
       Principal visitor,
       HttpServletRequest body)
       throws IOException {
-    Capture capture =
-        desk.receive(request.key(visit), fileName, visitor, body.getInputStream());
+    Capture capture = desk.receive(request.key(visit), fileName, visitor, body.getInputStream());
     return ResponseEntity.created(
             URI.create(body.getContextPath() + "/api/v1/captures/" + capture.id()))
         .body(CaptureDocument.of(capture));

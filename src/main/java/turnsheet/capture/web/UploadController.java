@@ -67,8 +67,7 @@ class UploadController {
       Principal visitor,
       HttpServletRequest body)
       throws IOException {
-    Capture capture =
-        desk.receive(request.key(visit), fileName, visitor, body.getInputStream());
+    Capture capture = desk.receive(request.key(visit), fileName, visitor, body.getInputStream());
     return new Uploaded(body.getContextPath() + "/captures/" + capture.id());
   }
 
