@@ -45,15 +45,18 @@ public final class Measurement {
     if (waveform == (settings.kind() == CaptureKind.EDGES)) {
       return new Outcome.Refused(otherContents(waveform));
     }
+    EdgePlan edges =
+        new EdgePlan(sha256, recognised.format(), recognised.sampleRateHertz(), settings);
     try {
       Outcome outcome =
           switch (settings.kind()) {
             case TONE ->
                 new TonePlan(settings)
                     .outcome(() -> formats.openSamples(counted, chosen), sha256, recognised);
-            case TACHOMETER, EDGES ->
-                new Outcome.Refused(
-                    new Rejection("notYet", "No plan stands for " + settings.kind()));
+            case TACHOMETER ->
+                new TachometerPlan(() -> formats.openSamples(counted, chosen)).measure(edges);
+            case EDGES ->
+                edges.measure(() -> formats.openEdges(counted, chosen), WaveformSignal.ofAList());
           };
       progress.reached(1);
       return outcome;

@@ -1,0 +1,194 @@
+package turnsheet.core.measure;
+
+import java.io.IOException;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import org.jspecify.annotations.Nullable;
+import turnsheet.core.dsp.EdgeSpeed;
+import turnsheet.core.signal.RejectedException;
+import turnsheet.core.signal.SpeedTrace;
+import turnsheet.core.signal.Warning;
+import turnsheet.core.stats.PeriodHistogram;
+
+/**
+ * From edges to a reading, whether they come from a list or from a waveform: a look at the
+ * beginning, one pass over everything, then the figures.
+ *
+ * <p>Memory does not grow with the number of edges but for the speed trace, four bytes a
+ * millisecond.
+ */
+final class EdgePlan {
+
+  private static final int FEWEST_EDGES = 10;
+  private static final int MOST_CLASSES = 100;
+
+  /** More than this and the train is called uneven. */
+  private static final double UNEVEN_SHARE = 0.05;
+
+  /** Uneven, and changing by jumps more often than this: no rotation. */
+  private static final double JUMPING_SHARE = 0.12;
+
+  /** Below this the weighting, which has its middle at 4 Hz, sees too little of what it weighs. */
+  private static final double LOWEST_WEIGHTED_BAND_HERTZ = 10;
+
+  private final String sha256;
+  private final String format;
+  private final @Nullable Double sampleRateHz;
+  private final MeasureSettings settings;
+
+  EdgePlan(String sha256, String format, @Nullable Double sampleRateHz, MeasureSettings settings) {
+    this.sha256 = sha256;
+    this.format = format;
+    this.sampleRateHz = sampleRateHz;
+    this.settings = settings;
+  }
+
+  /**
+   * Measures.
+   *
+   * @param opener used twice
+   * @param signal what the waveform itself tells; for a list nothing
+   */
+  Outcome.Measured measure(EdgeOpener opener, WaveformSignal signal)
+      throws IOException, RejectedException {
+    // a clock that runs fast counts more seconds than went by
+    double clockFactor = 1 / (1 + settings.clockErrorPpm() * 1e-6);
+    EdgeProbe probe = EdgeProbe.of(opener, clockFactor);
+    EdgeScan scan = new EdgeScan(probe, settings);
+    scan.run(opener, clockFactor);
+    requireSteady(scan, probe);
+    requireNominal(scan);
+
+    SpeedTrace trace = scan.trace();
+    double band = EdgeSpeed.PASS * trace.rateHertz();
+    List<Stretch> excluded = excluded(scan);
+    requireLength(scan, trace, excluded);
+    EdgeNoise noise = EdgeNoise.of(scan, probe);
+    TraceFigures figures =
+        TraceFigures.of(
+            trace,
+            excluded,
+            TraceNoise.ofEdges(noise.floorSeconds(), 1 / scan.periods.meanSeconds()),
+            band,
+            settings);
+
+    List<Warning> warnings = new ArrayList<>(scan.warnings);
+    warnings.addAll(new EdgeWarnings(scan, probe, settings).all(band, noise));
+    warnings.addAll(figures.warnings());
+    Reading reading =
+        new Reading(
+            new Reading.Source(
+                sha256,
+                format,
+                settings.kind(),
+                settings.channel(),
+                sampleRateHz,
+                scan.periods.spanSeconds()),
+            new Reading.Method(Measurement.METHOD_VERSION, settings),
+            figures.speed(),
+            flutter(figures, band),
+            figures.lines(),
+            new EdgeFigures(scan, settings, noise).edges(),
+            new Reading.Signal(
+                signal.snrDb(),
+                signal.mains(),
+                0,
+                scan.gaps.stream()
+                    .map(g -> new Reading.Dropout(g.startSeconds(), g.durationSeconds()))
+                    .toList(),
+                noise.floorFigure(figures.floorPercent())),
+            warnings);
+    return new Outcome.Measured(
+        reading, new Series(trace, figures.spectrum(), histogram(scan.histogram)));
+  }
+
+  private void requireSteady(EdgeScan scan, EdgeProbe probe) throws RejectedException {
+    if (scan.periods.edges() < FEWEST_EDGES) {
+      throw new RejectedException(
+          "tooShort",
+          String.format(
+              Locale.ROOT,
+              "Only %d edges are in the recording: record at least %d, better 30 s.",
+              scan.periods.edges(),
+              FEWEST_EDGES));
+    }
+    double lost = (double) (scan.missing() + scan.extra()) / scan.periods.edges();
+    boolean jumping =
+        scan.periods.shareOutside() > UNEVEN_SHARE && scan.periods.shareOfJumps() > JUMPING_SHARE;
+    if (jumping || lost > 0.5) {
+      double median = probe.medianSeconds();
+      throw new RejectedException(
+          "notSteady",
+          String.format(
+              Locale.ROOT,
+              "The pulses are no steady rotation: %.0f %% of the periods lie more than %s %% from"
+                  + " the middle one of %s ms and %.0f %% jump from one to the next; check the"
+                  + " signal, or cut the recording to the stretch that runs.",
+              100 * scan.periods.shareOutside(),
+              Plain.number(settings.searchPercent(), 3),
+              Plain.number(median * 1e3, 4),
+              100 * scan.periods.shareOfJumps()));
+    }
+  }
+
+  private void requireNominal(EdgeScan scan) throws RejectedException {
+    double rate = 1 / scan.periods.meanSeconds();
+    double nominal = settings.nominalHz();
+    if (Math.abs(rate / nominal - 1) > settings.searchPercent() / 100) {
+      throw new RejectedException(
+          "otherRate",
+          String.format(
+              Locale.ROOT,
+              "The pulses come %s times per second, not within %s %% of the nominal %s: check"
+                  + " the speed setting and the pulses per turn.",
+              Plain.number(rate, 6),
+              Plain.number(settings.searchPercent(), 3),
+              Plain.number(nominal, 6)));
+    }
+  }
+
+  private static void requireLength(EdgeScan scan, SpeedTrace trace, List<Stretch> excluded)
+      throws RejectedException {
+    double usable = trace.length() == 0 ? 0 : TraceFigures.longestUsableSeconds(trace, excluded);
+    if (usable < TraceFigures.SHORTEST_SECONDS || trace.length() < 2 * FEWEST_EDGES) {
+      throw new RejectedException(
+          "tooShort",
+          String.format(
+              Locale.ROOT,
+              "The longest stretch without a gap is %.2f s of the %.2f s recorded: record at least"
+                  + " %d pulses and 5 s in one piece, better 30 s.",
+              usable,
+              scan.periods.spanSeconds(),
+              2 * scan.speed.reachEdges() + 2 * FEWEST_EDGES));
+    }
+  }
+
+  /** Long gaps and as much beside them as the filter looks across with weight. */
+  private static List<Stretch> excluded(EdgeScan scan) {
+    double margin = scan.speed.reachEdges() / 3.0 * scan.periods.meanSeconds();
+    return scan.gaps.stream()
+        .map(g -> new Stretch(g.startSeconds() - margin, g.endSeconds() + margin))
+        .toList();
+  }
+
+  private Reading.Flutter flutter(TraceFigures figures, double bandHertz) {
+    Reading.Flutter all = figures.flutter();
+    if (bandHertz >= LOWEST_WEIGHTED_BAND_HERTZ) {
+      return all;
+    }
+    Figure none =
+        Figure.absent(
+            String.format(
+                Locale.ROOT,
+                "the pulses show fluctuation up to %s Hz only, and the weighting needs %.0f Hz",
+                Plain.number(bandHertz, 2),
+                LOWEST_WEIGHTED_BAND_HERTZ));
+    return new Reading.Flutter(none, none, none, all.unweightedRmsPercent(), all.bands());
+  }
+
+  private static Series.Histogram histogram(PeriodHistogram histogram) {
+    PeriodHistogram.Classes classes = histogram.classes(MOST_CLASSES);
+    return new Series.Histogram(classes.from() * 1e6, classes.width() * 1e6, classes.counts());
+  }
+}

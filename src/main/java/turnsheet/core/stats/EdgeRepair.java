@@ -1,0 +1,115 @@
+package turnsheet.core.stats;
+
+import java.util.Arrays;
+
+/**
+ * Makes a pulse train whole again: drops edges that ought not to be there and puts edges, evenly
+ * spaced, where some are missing, so that the number of an edge is an angle.
+ *
+ * <p>An edge is extra where leaving it out brings its neighbour to within a fifth of a period of
+ * the expected place, and it lies within 0.6 periods of one of its neighbours. Edges are missing
+ * where the distance is at least one and a half periods: the nearest whole number less one. The
+ * period expected is the median of the last seven that needed no repair, so that ramps are
+ * followed. One use; feed edges in order of time, then {@link #finish}.
+ */
+public final class EdgeRepair {
+
+  private static final int RECENT = 7;
+  private static final double NEAR = 0.2;
+  private static final double CLOSE = 0.6;
+  private static final double GAP = 1.5;
+
+  private final EdgeSink sink;
+  private final GapListener gaps;
+  private final double[] recent = new double[RECENT];
+  private final double[] sorted = new double[RECENT];
+  private int next;
+  private double expected;
+  private double last = Double.NaN;
+  private double candidate = Double.NaN;
+  private long missing;
+  private long extra;
+
+  /** Told of every stretch without edges. */
+  @FunctionalInterface
+  public interface GapListener {
+    void gap(double fromSeconds, double toSeconds, long missing);
+  }
+
+  /**
+   * @param periodSeconds expected at the beginning
+   */
+  public EdgeRepair(double periodSeconds, EdgeSink sink, GapListener gaps) {
+    if (!(periodSeconds > 0 && Double.isFinite(periodSeconds))) {
+      throw new IllegalArgumentException("period " + periodSeconds + " s");
+    }
+    Arrays.fill(recent, periodSeconds);
+    this.expected = periodSeconds;
+    this.sink = sink;
+    this.gaps = gaps;
+  }
+
+  /** Takes the next rising edge. */
+  public void edge(double seconds) {
+    if (Double.isNaN(last)) {
+      last = seconds;
+      sink.edge(seconds, true);
+      return;
+    }
+    if (!Double.isNaN(candidate)) {
+      if (isExtra(seconds)) {
+        extra++;
+        candidate = seconds;
+        return;
+      }
+      accept();
+    }
+    candidate = seconds;
+  }
+
+  /** Hands out what was held back. */
+  public void finish() {
+    if (!Double.isNaN(candidate)) {
+      accept();
+    }
+  }
+
+  public long missing() {
+    return missing;
+  }
+
+  public long extra() {
+    return extra;
+  }
+
+  private boolean isExtra(double following) {
+    double place = last + expected;
+    double off = Math.abs(following - place);
+    double shorter = Math.min(candidate - last, following - candidate);
+    return off <= NEAR * expected
+        && off < Math.abs(candidate - place)
+        && shorter < CLOSE * expected;
+  }
+
+  private void accept() {
+    double distance = candidate - last;
+    double periods = distance / expected;
+    if (periods >= GAP) {
+      long lost = Math.round(periods) - 1;
+      missing += lost;
+      gaps.gap(last, candidate, lost);
+      for (long i = 1; i <= lost; i++) {
+        sink.edge(last + distance * i / (lost + 1), false);
+      }
+    } else {
+      recent[next] = distance;
+      next = (next + 1) % RECENT;
+      System.arraycopy(recent, 0, sorted, 0, RECENT);
+      Arrays.sort(sorted);
+      expected = sorted[RECENT / 2];
+    }
+    sink.edge(candidate, true);
+    last = candidate;
+    candidate = Double.NaN;
+  }
+}

@@ -1,0 +1,101 @@
+package turnsheet.core.stats;
+
+import java.util.ArrayList;
+import java.util.List;
+
+/**
+ * Overlapping Allan deviation at averaging times of 1, 2, 4, ... steps, from one pass over the
+ * times of an even train.
+ *
+ * <p>Up to 16 steps every start counts, as in NIST SP 1065 section 5.2.4; from there on every start
+ * that is a multiple of a sixteenth of the averaging time, which leaves the expectation as it is
+ * and costs a little certainty, so that memory stays constant.
+ */
+public final class StabilityLadder implements EdgeSink {
+
+  private static final int STARTS = 16;
+  private static final int LEVELS = 40;
+  private static final int FEWEST_TERMS = 8;
+
+  private final List<Level> levels = new ArrayList<>();
+  private long index;
+  private double first;
+  private double last;
+
+  public StabilityLadder() {
+    for (int i = 0; i < LEVELS; i++) {
+      levels.add(new Level(1L << i));
+    }
+  }
+
+  @Override
+  public void edge(double seconds, boolean real) {
+    if (index == 0) {
+      first = seconds;
+    }
+    last = seconds;
+    for (Level level : levels) {
+      // strides are powers of two: a level that does not take this edge ends the loop
+      if (index % level.stride != 0) {
+        break;
+      }
+      level.add(seconds - first);
+    }
+    index++;
+  }
+
+  /** The rungs for which at least eight terms came. */
+  public List<Rung> rungs() {
+    List<Rung> rungs = new ArrayList<>();
+    if (index < 2) {
+      return rungs;
+    }
+    double step = (last - first) / (index - 1);
+    for (Level level : levels) {
+      if (level.terms >= FEWEST_TERMS && index > 3 * level.steps) {
+        double tau = level.steps * step;
+        double independent = Math.max(1, (double) (index - 1) / level.steps - 1);
+        rungs.add(new Rung(tau, Math.sqrt(level.sum / (2.0 * level.terms)) / tau, independent));
+      }
+    }
+    return rungs;
+  }
+
+  /**
+   * One averaging time.
+   *
+   * @param deviation relative
+   * @param independentTerms how many second differences share no data, at least 1
+   */
+  public record Rung(double tauSeconds, double deviation, double independentTerms) {}
+
+  /** Second differences over one number of steps. */
+  private static final class Level {
+    private final long steps;
+    private final long stride;
+    private final double[] ring;
+    private final int lag;
+    private long taken;
+    private double sum;
+    private long terms;
+
+    Level(long steps) {
+      this.steps = steps;
+      this.stride = Math.max(1, steps / STARTS);
+      this.lag = (int) (steps / stride);
+      this.ring = new double[2 * lag + 1];
+    }
+
+    void add(double time) {
+      ring[(int) (taken % ring.length)] = time;
+      taken++;
+      if (taken >= ring.length) {
+        double oldest = ring[(int) (taken % ring.length)];
+        double middle = ring[(int) ((taken + lag) % ring.length)];
+        double d = time - 2 * middle + oldest;
+        sum += d * d;
+        terms++;
+      }
+    }
+  }
+}
