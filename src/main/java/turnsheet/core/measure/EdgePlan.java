@@ -72,6 +72,7 @@ final class EdgePlan {
             TraceNoise.ofEdges(noise.floorSeconds(), 1 / scan.periods.meanSeconds()),
             band,
             settings);
+    requireSpeed(figures.speed());
 
     List<Warning> warnings = new ArrayList<>(scan.warnings);
     warnings.addAll(new EdgeWarnings(scan, probe, settings).all(band, noise));
@@ -145,6 +146,22 @@ final class EdgePlan {
               Plain.number(rate, 6),
               Plain.number(settings.searchPercent(), 3),
               Plain.number(nominal, 6)));
+    }
+  }
+
+  /** Where pauses lie between stretches that run, the rate over everything says little. */
+  private void requireSpeed(Reading.Speed speed) throws RejectedException {
+    Double deviation = speed.deviationPercent().value();
+    if (deviation != null && Math.abs(deviation) > settings.searchPercent()) {
+      throw new RejectedException(
+          "notSteady",
+          String.format(
+              Locale.ROOT,
+              "Between gaps the speed is %s %% from nominal, beyond the %s %% that are looked at,"
+                  + " while over the whole recording the pulses are about as many as they should"
+                  + " be: cut the recording to one stretch that runs.",
+              Plain.number(deviation, 3),
+              Plain.number(settings.searchPercent(), 3)));
     }
   }
 

@@ -6,11 +6,12 @@ import java.util.Arrays;
  * Makes a pulse train whole again: drops edges that ought not to be there and puts edges, evenly
  * spaced, where some are missing, so that the number of an edge is an angle.
  *
- * <p>An edge is extra where leaving it out brings its neighbour to within a fifth of a period of
- * the expected place, and it lies within 0.6 periods of one of its neighbours. Edges are missing
- * where the distance is at least one and a half periods: the nearest whole number less one. The
- * period expected is the median of the last seven that needed no repair, so that ramps are
- * followed. One use; feed edges in order of time, then {@link #finish}.
+ * <p>An edge is extra where it comes within 0.6 periods of the one before and the next one is still
+ * no more than a fifth of a period late, or where the next one follows within 0.6 periods and lies
+ * nearer to the expected place, within a fifth of a period of it. Edges are missing where the
+ * distance is at least one and a half periods: the nearest whole number less one. The period
+ * expected is the median of the last seven that needed no repair, so that ramps are followed. One
+ * use; feed edges in order of time, then {@link #finish}.
  */
 public final class EdgeRepair {
 
@@ -84,11 +85,14 @@ public final class EdgeRepair {
 
   private boolean isExtra(double following) {
     double place = last + expected;
+    // far too early, and the next one is not late without it
+    if (candidate - last < CLOSE * expected && following <= place + NEAR * expected) {
+      return true;
+    }
     double off = Math.abs(following - place);
-    double shorter = Math.min(candidate - last, following - candidate);
     return off <= NEAR * expected
         && off < Math.abs(candidate - place)
-        && shorter < CLOSE * expected;
+        && following - candidate < CLOSE * expected;
   }
 
   private void accept() {
