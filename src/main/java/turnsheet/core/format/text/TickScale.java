@@ -37,6 +37,11 @@ final class TickScale {
     return unitSeconds;
   }
 
+  /** Hertz of a rate per unit. */
+  double hertz(double perTick) {
+    return perTick * divisor / factor;
+  }
+
   double seconds(double ticks) {
     return ticks * factor / divisor;
   }

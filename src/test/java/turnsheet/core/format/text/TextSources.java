@@ -44,8 +44,8 @@ final class TextSources {
 
               @Override
               public int read(byte[] into, int from, int count) {
-                if (at == bytes.length) {
-                  return -1;
+                if (at == bytes.length || count == 0) {
+                  return count == 0 ? 0 : -1;
                 }
                 into[from] = bytes[at++];
                 return 1;
