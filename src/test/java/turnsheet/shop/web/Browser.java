@@ -3,6 +3,7 @@ package turnsheet.shop.web;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.springframework.security.test.web.servlet.request.SecurityMockMvcRequestPostProcessors.csrf;
 
+import java.net.URI;
 import org.springframework.test.web.servlet.assertj.MockMvcTester;
 import org.springframework.test.web.servlet.assertj.MvcTestResult;
 
@@ -16,7 +17,7 @@ final class Browser {
   }
 
   MvcTestResult open(String address) {
-    return mvc.get().uri(address).exchange();
+    return mvc.get().uri(encoded(address)).exchange();
   }
 
   /** The page's text; it must be there. */
@@ -28,7 +29,7 @@ final class Browser {
 
   /** Sends a form; fields are name, value, name, value. */
   MvcTestResult send(String address, String... fields) {
-    var request = mvc.post().uri(address).with(csrf());
+    var request = mvc.post().uri(encoded(address)).with(csrf());
     for (int i = 0; i < fields.length; i += 2) {
       request = request.formField(fields[i], fields[i + 1]);
     }
@@ -49,5 +50,9 @@ final class Browser {
     MvcTestResult result = send(address, fields);
     assertThat(result).hasStatusOk();
     assertThat(result.getResponse().getContentAsString()).contains(sentence).contains(typed);
+  }
+
+  private static URI encoded(String address) {
+    return URI.create(address.replace(' ', '+'));
   }
 }
