@@ -10,9 +10,7 @@ import turnsheet.core.format.api.Recognition;
 import turnsheet.core.format.audio.AiffFormat;
 import turnsheet.core.format.audio.FlacFormat;
 import turnsheet.core.format.audio.WavFormat;
-=======
 import turnsheet.core.format.text.TableFormat;
->>>>>>> f132556 (Tables of numbers are read as waveforms, edge times or periods)
 import turnsheet.core.format.text.VcdFormat;
 import turnsheet.core.signal.EdgeReader;
 import turnsheet.core.signal.RejectedException;
@@ -31,7 +29,6 @@ public final class CaptureFormats {
   public static CaptureFormats standard() {
     return new CaptureFormats(
         List.of( //
-<<<<<<< HEAD
             new WavFormat(), //
             new AiffFormat(), //
             new FlacFormat(), //
