@@ -64,10 +64,10 @@ final class ModelRules {
     for (ServiceLimit limit : limits) {
       SpeedSetting setting = known.get(limit.settingId());
       if (setting == null) {
-        throw new RefusedChangeException("limitSettingUnknown", limit.figure().path());
+        throw new RefusedChangeException("limitSettingUnknown", limit.figure());
       }
       if (!bounded.add(List.of(limit.settingId(), limit.figure()))) {
-        throw new RefusedChangeException("limitTaken", limit.figure().path(), setting.label());
+        throw new RefusedChangeException("limitTaken", limit.figure(), setting.label());
       }
     }
   }

@@ -69,6 +69,11 @@ public final class Visits {
     return query.run(jdbc, LISTING, Visits::summary);
   }
 
+  /** A page of the visits of one unit, newest first. */
+  public PageOf<VisitSummary> page(UnitId unit, PageQuery query) {
+    return query.run(jdbc, LISTING.where("v.unit_id = ?", unit.value()), Visits::summary);
+  }
+
   /** A page of the visits that are still open, newest first. */
   public PageOf<VisitSummary> open(PageQuery query) {
     return query.run(jdbc, LISTING.where("v.closed_at is null"), Visits::summary);

@@ -1,0 +1,163 @@
+package turnsheet.shop.web;
+
+import java.util.ArrayList;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Objects;
+import java.util.UUID;
+import java.util.stream.Stream;
+import org.springframework.stereotype.Component;
+import turnsheet.core.measure.FigureName;
+import turnsheet.shop.MachineModel;
+import turnsheet.shop.ModelId;
+import turnsheet.shop.PartBasis;
+import turnsheet.shop.RotatingPart;
+import turnsheet.shop.ServiceLimit;
+import turnsheet.shop.SpeedSetting;
+import turnsheet.shop.SpeedSettingId;
+import turnsheet.shop.SpeedUnit;
+
+/** Between machine models and their JSON. */
+@Component
+class ModelDocuments {
+
+  private final Refusals refusals;
+
+  ModelDocuments(Refusals refusals) {
+    this.refusals = refusals;
+  }
+
+  /** What was sent, in the place of a model or as a new one; settings keep their ids by label. */
+  MachineModel read(ModelDocument sent, MachineModel old) {
+    Map<String, SpeedSettingId> byLabel = new HashMap<>();
+    old.settings().forEach(s -> byLabel.put(s.label(), s.id()));
+    List<SpeedSetting> settings = new ArrayList<>();
+    for (ModelDocument.Setting setting : sent.speedSettings()) {
+      settings.add(setting(setting, settingId(setting, old, byLabel)));
+    }
+    return new MachineModel(
+        old.id(),
+        sent.name(),
+        sent.pulsesPerTurn(),
+        sent.note(),
+        settings,
+        sent.rotatingParts().stream().map(this::part).toList(),
+        sent.serviceLimits().stream().map(l -> limit(l, settings)).toList());
+  }
+
+  /** A new model has nothing to keep. */
+  MachineModel read(ModelDocument sent) {
+    return read(
+        sent,
+        new MachineModel(ModelId.next(), sent.name(), null, "", List.of(), List.of(), List.of()));
+  }
+
+  static ModelDocument write(MachineModel model) {
+    return new ModelDocument(
+        model.id().value(),
+        model.name(),
+        model.pulsesPerTurn(),
+        model.note(),
+        model.settings().stream().map(ModelDocuments::setting).toList(),
+        model.parts().stream().map(p -> part(model, p)).toList(),
+        model.limits().stream().map(l -> limit(model, l)).toList());
+  }
+
+  private static SpeedSettingId settingId(
+      ModelDocument.Setting sent, MachineModel old, Map<String, SpeedSettingId> byLabel) {
+    UUID id = sent.id();
+    if (id != null && old.setting(new SpeedSettingId(id)).isPresent()) {
+      return new SpeedSettingId(id);
+    }
+    SpeedSettingId known = id == null ? byLabel.get(sent.label()) : null;
+    return known == null ? SpeedSettingId.next() : known;
+  }
+
+  private SpeedSetting setting(ModelDocument.Setting sent, SpeedSettingId id) {
+    Double tape = sent.speedCmPerS();
+    Double turns = sent.speedRevPerMin();
+    if (tape != null && turns == null) {
+      return new SpeedSetting(
+          id, sent.label(), SpeedUnit.CM_PER_S, tape, sent.toneHz(), sent.pulsesPerSecond());
+    }
+    if (tape == null && turns != null) {
+      return new SpeedSetting(
+          id, sent.label(), SpeedUnit.REV_PER_MIN, turns, sent.toneHz(), sent.pulsesPerSecond());
+    }
+    throw refusals.answer("speedOnce", sent.label());
+  }
+
+  private RotatingPart part(ModelDocument.Part sent) {
+    long given =
+        Stream.of(sent.diameterMm(), sent.turnsPerTurn(), sent.turnsPerMinute())
+            .filter(Objects::nonNull)
+            .count();
+    if (given != 1) {
+      throw refusals.answer("partOnce", sent.name());
+    }
+    Double turns = sent.turnsPerTurn();
+    if (turns != null) {
+      return new RotatingPart(sent.name(), PartBasis.TURNS_PER_TURN, turns, sent.turnsOf());
+    }
+    if (sent.turnsOf() != null) {
+      throw refusals.answer("turnsOfAlone", sent.name());
+    }
+    Double diameter = sent.diameterMm();
+    return diameter != null
+        ? new RotatingPart(sent.name(), PartBasis.DIAMETER_MM, diameter, null)
+        : new RotatingPart(
+            sent.name(),
+            PartBasis.FIXED_PER_MINUTE,
+            Objects.requireNonNull(sent.turnsPerMinute()),
+            null);
+  }
+
+  private ServiceLimit limit(ModelDocument.Limit sent, List<SpeedSetting> settings) {
+    FigureName figure =
+        FigureName.ofPath(sent.figure())
+            .orElseThrow(() -> refusals.answer("figureUnknown", sent.figure()));
+    SpeedSettingId setting =
+        settings.stream()
+            .filter(s -> s.label().equals(sent.speedSetting()))
+            .findFirst()
+            .orElseThrow(() -> refusals.answer("limitSettingLabel", sent.speedSetting()))
+            .id();
+    return new ServiceLimit(setting, figure, sent.upperBound(), sent.origin());
+  }
+
+  private static ModelDocument.Setting setting(SpeedSetting setting) {
+    boolean tape = setting.unit() == SpeedUnit.CM_PER_S;
+    return new ModelDocument.Setting(
+        setting.id().value(),
+        setting.label(),
+        tape ? setting.nominalSpeed() : null,
+        tape ? null : setting.nominalSpeed(),
+        setting.toneHz(),
+        setting.pulsesPerSecond());
+  }
+
+  private static ModelDocument.Part part(MachineModel model, RotatingPart part) {
+    List<ModelDocument.Rate> rates = new ArrayList<>();
+    for (SpeedSetting setting : model.settings()) {
+      model
+          .rateHertzAt(part, setting)
+          .ifPresent(rate -> rates.add(new ModelDocument.Rate(setting.label(), rate)));
+    }
+    return new ModelDocument.Part(
+        part.name(),
+        part.basis() == PartBasis.DIAMETER_MM ? part.amount() : null,
+        part.basis() == PartBasis.TURNS_PER_TURN ? part.amount() : null,
+        part.basis() == PartBasis.FIXED_PER_MINUTE ? part.amount() : null,
+        part.referencePart(),
+        rates);
+  }
+
+  private static ModelDocument.Limit limit(MachineModel model, ServiceLimit limit) {
+    return new ModelDocument.Limit(
+        model.setting(limit.settingId()).orElseThrow().label(),
+        limit.figure().path(),
+        limit.upperBound(),
+        limit.origin());
+  }
+}

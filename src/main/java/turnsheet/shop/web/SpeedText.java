@@ -1,0 +1,43 @@
+package turnsheet.shop.web;
+
+import java.math.BigDecimal;
+import java.math.MathContext;
+import java.math.RoundingMode;
+import turnsheet.shop.SpeedSetting;
+import turnsheet.shop.SpeedUnit;
+
+/** Nominal speeds as people read them. */
+public final class SpeedText {
+
+  /** Six digits tell 33.3333 from 33.33 and 9.525 from 9.53; more say nothing on a bench. */
+  private static final MathContext SIX_DIGITS = new MathContext(6, RoundingMode.HALF_UP);
+
+  private static final String SPACE = "\u202f";
+
+  private SpeedText() {}
+
+  /** {@code 9.525 cm/s (3.75 in/s)} or {@code 33.3333 rev/min}. */
+  public static String of(SpeedSetting setting) {
+    double speed = setting.nominalSpeed();
+    return setting.unit() == SpeedUnit.REV_PER_MIN
+        ? digits(speed) + SPACE + "rev/min"
+        : digits(speed)
+            + SPACE
+            + "cm/s ("
+            + digits(speed / SpeedUnit.CM_PER_INCH)
+            + SPACE
+            + "in/s)";
+  }
+
+  /** A number with at most six significant digits and no idle zeros. */
+  public static String digits(double value) {
+    BigDecimal rounded = BigDecimal.valueOf(value).round(SIX_DIGITS).stripTrailingZeros();
+    return (rounded.scale() < 0 ? rounded.setScale(0, RoundingMode.UNNECESSARY) : rounded)
+        .toPlainString();
+  }
+
+  /** A rate in Hz, three decimals. */
+  static String hertz(double rate) {
+    return BigDecimal.valueOf(rate).setScale(3, RoundingMode.HALF_UP).toPlainString();
+  }
+}
