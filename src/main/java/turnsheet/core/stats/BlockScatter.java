@@ -36,6 +36,6 @@ public final class BlockScatter {
       return Double.NaN;
     }
     double mean = blocks.mean();
-    return mean > 0 ? blocks.sampleStdDev() / Math.sqrt(blocks.count()) / mean / 2 : 0;
+    return mean > 0 ? blocks.sampleStdDev() / Math.sqrt((double) blocks.count()) / mean / 2 : 0;
   }
 }
