@@ -55,7 +55,11 @@ final class EdgeWarnings {
               Plain.number(bandHertz, 3)));
     }
     WheelPattern wheel = scan.wheel;
-    if (wheel != null && wheel.known() && wheel.rmsPeriods() > 3 * wheel.rmsUncertaintyPeriods()) {
+    Integer teeth = settings.teeth();
+    if (teeth != null
+        && wheel != null
+        && wheel.known()
+        && wheel.rmsPeriods() > 3 * wheel.rmsUncertaintyPeriods()) {
       warnings.add(
           warning(
               "wheelPattern",
@@ -63,7 +67,7 @@ final class EdgeWarnings {
                   + " an eccentric wheel and a true speed variation at the wheel's rate look the"
                   + " same in it, and the flutter figures contain it.",
               Plain.number(100 * wheel.rmsPeriods(), 2),
-              settings.teeth()));
+              teeth));
     }
     return warnings;
   }
