@@ -35,9 +35,11 @@ final class Svg {
         .formatted(number(x), number(y), escape(words));
   }
 
-  static String dot(String look, double x, double y) {
-    return "<circle class=\"%s\" cx=\"%s\" cy=\"%s\" r=\"3.2\" fill=\"currentColor\"/>"
-        .formatted(look, number(x), number(y));
+  /** A hollow dot is filled with the ground, so that the line does not run through it. */
+  static String dot(String look, double x, double y, boolean full) {
+    return ("<circle class=\"%s\" cx=\"%s\" cy=\"%s\" r=\"3.2\" fill=\"%s\""
+            + " stroke=\"currentColor\" stroke-width=\"1.2\"/>")
+        .formatted(look, number(x), number(y), full ? "currentColor" : "white");
   }
 
   static String bar(double x, double y, double width, double height) {

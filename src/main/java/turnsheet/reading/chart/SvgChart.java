@@ -42,6 +42,7 @@ public final class SvgChart {
   private final String description;
   private final List<Supplier<String>> marks = new ArrayList<>();
   private final List<Flag> flags = new ArrayList<>();
+  private List<Axis.Tick> xTicks;
   private int series;
 
   /**
@@ -56,12 +57,24 @@ public final class SvgChart {
     this.height = height;
     this.title = title;
     this.description = description;
+    this.xTicks = x.ticks(8);
   }
 
-  /** A curve; where its points are buckets, the band between lowest and highest. */
-  public SvgChart curve(Curve curve) {
+  /** Marks along the horizontal axis in place of round numbers, such as dates. */
+  public SvgChart xTicks(List<Axis.Tick> ticks) {
+    xTicks = List.copyOf(ticks);
+    return this;
+  }
+
+  /**
+   * A curve; where its points are buckets, the band between lowest and highest.
+   *
+   * @param parts adjoining windows of one curve, as a logarithmic axis needs them
+   */
+  public SvgChart curve(Curve... parts) {
     int number = ++series;
-    marks.add(() -> line(number, trail(curve)));
+    List<Curve> kept = List.of(parts);
+    marks.add(() -> line(number, trail(kept)));
     return this;
   }
 
@@ -132,7 +145,7 @@ public final class SvgChart {
       svg.append(Svg.grid(LEFT, level, RIGHT, level));
       svg.append(Svg.words("drawn-tick", LEFT - 8, level + 4, "end", tick.text()));
     }
-    for (Axis.Tick tick : x.ticks(8)) {
+    for (Axis.Tick tick : xTicks) {
       double at = left(tick.value());
       svg.append(Svg.grid(at, bottom, at, bottom + 5));
       svg.append(Svg.words("drawn-tick", at, bottom + 18, "middle", tick.text()));
@@ -143,20 +156,28 @@ public final class SvgChart {
     svg.append(Svg.upright(14, (frameTop() + bottom) / 2, y.title()));
   }
 
-  private String trail(Curve curve) {
+  private String trail(List<Curve> parts) {
     StringBuilder path = new StringBuilder();
+    double reached = Double.NEGATIVE_INFINITY;
     boolean pen = false;
-    for (int i = 0; i < curve.size(); i++) {
-      double at = curve.x(i);
-      if (Float.isNaN(curve.low(i)) || !x.holds(at)) {
-        pen = false;
-        continue;
+    for (Curve curve : parts) {
+      for (int i = 0; i < curve.size(); i++) {
+        double at = curve.x(i);
+        if (at <= reached) {
+          // windows overlap by the points beyond their edges
+          continue;
+        }
+        if (Float.isNaN(curve.low(i)) || !x.holds(at)) {
+          pen = false;
+          continue;
+        }
+        path.append(pen ? 'L' : 'M').append(place(at, curve.low(i)));
+        if (curve.high(i) != curve.low(i)) {
+          path.append('L').append(place(at, curve.high(i)));
+        }
+        pen = true;
+        reached = at;
       }
-      path.append(pen ? 'L' : 'M').append(place(at, curve.low(i)));
-      if (curve.high(i) != curve.low(i)) {
-        path.append('L').append(place(at, curve.high(i)));
-      }
-      pen = true;
     }
     return path.toString();
   }
@@ -174,7 +195,7 @@ public final class SvgChart {
                     n(top(p.y() + p.uncertainty())));
         drawn.append(Svg.path("drawn-uncertainty", bar, 1, ""));
       }
-      drawn.append(Svg.dot("drawn-dot series-" + number, left(p.x()), top(p.y())));
+      drawn.append(Svg.dot("drawn-dot series-" + number, left(p.x()), top(p.y()), number % 2 == 1));
     }
     return line(number, path.toString()) + drawn;
   }

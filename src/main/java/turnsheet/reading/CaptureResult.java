@@ -1,0 +1,59 @@
+package turnsheet.reading;
+
+import java.time.Instant;
+import java.util.Map;
+import org.jspecify.annotations.Nullable;
+import turnsheet.capture.CaptureId;
+import turnsheet.capture.CaptureState;
+import turnsheet.core.measure.Figure;
+import turnsheet.core.measure.FigureName;
+import turnsheet.shop.SpeedSettingId;
+import turnsheet.shop.VisitId;
+
+/**
+ * How a capture stands, with the figures of the reading that stands for it.
+ *
+ * @param refusal sentence of a capture that is refused or failed; null otherwise
+ * @param progress 0 to 1, of the job that measures it; 0 where none runs
+ * @param readingId null until it is measured
+ * @param figures those with a value; empty until it is measured
+ */
+public record CaptureResult(
+    CaptureId captureId,
+    VisitId visitId,
+    SpeedSettingId settingId,
+    String settingLabel,
+    String condition,
+    String fileName,
+    Instant receivedAt,
+    CaptureState state,
+    @Nullable String refusal,
+    double progress,
+    @Nullable ReadingId readingId,
+    Map<FigureName, Figure> figures) {
+
+  public CaptureResult {
+    figures = Map.copyOf(figures);
+  }
+
+  /** A figure of the reading that stands for it; absent where there is none. */
+  public Figure figure(FigureName name) {
+    return figures.getOrDefault(name, Figure.absent("not measured"));
+  }
+
+  CaptureResult withFigures(Map<FigureName, Figure> found) {
+    return new CaptureResult(
+        captureId,
+        visitId,
+        settingId,
+        settingLabel,
+        condition,
+        fileName,
+        receivedAt,
+        state,
+        refusal,
+        progress,
+        readingId,
+        found);
+  }
+}

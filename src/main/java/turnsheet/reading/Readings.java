@@ -1,0 +1,191 @@
+package turnsheet.reading;
+
+import java.sql.ResultSet;
+import java.sql.SQLException;
+import java.time.Clock;
+import java.time.Instant;
+import java.time.OffsetDateTime;
+import java.time.ZoneOffset;
+import java.time.temporal.ChronoUnit;
+import java.util.List;
+import java.util.Optional;
+import java.util.UUID;
+import org.springframework.jdbc.core.simple.JdbcClient;
+import org.springframework.stereotype.Component;
+import org.springframework.transaction.support.TransactionOperations;
+import turnsheet.capture.CaptureId;
+import turnsheet.core.measure.Figure;
+import turnsheet.core.measure.FigureName;
+import turnsheet.core.measure.Reading;
+import turnsheet.core.measure.Series;
+import turnsheet.document.ReadingDocument;
+import turnsheet.reading.chart.Curve;
+import turnsheet.shop.VisitId;
+
+/** All readings with their curves. Readings are added, never changed. */
+@Component
+public final class Readings {
+
+  static final String NEWEST_OF_ITS_CAPTURE =
+      """
+      not exists (select 1 from reading later where later.capture_id = r.capture_id
+        and (later.made_at > r.made_at or (later.made_at = r.made_at and later.id > r.id)))
+      """;
+
+  private final JdbcClient jdbc;
+  private final TransactionOperations transactions;
+  private final Clock clock;
+
+  public Readings(JdbcClient jdbc, TransactionOperations transactions, Clock clock) {
+    this.jdbc = jdbc;
+    this.transactions = transactions;
+    this.clock = clock;
+  }
+
+  /**
+   * Stores a reading beside those that the capture has.
+   *
+   * <p>Joins the caller's transaction. Where the newest reading is the same document, as after a
+   * job that was run twice, nothing is stored.
+   *
+   * @return the new reading, or the same one
+   */
+  public ReadingId add(CaptureId capture, Reading reading, Series series) {
+    return transactions.execute(status -> addOnce(capture, reading, series));
+  }
+
+  public Optional<StoredReading> find(ReadingId id) {
+    return jdbc.sql("select * from reading r where r.id = ?")
+        .param(id.value())
+        .query(Readings::stored)
+        .optional();
+  }
+
+  /** The reading that stands for a capture: the newest. */
+  public Optional<StoredReading> newestOf(CaptureId capture) {
+    return jdbc.sql("select * from reading r where r.capture_id = ? and " + NEWEST_OF_ITS_CAPTURE)
+        .param(capture.value())
+        .query(Readings::stored)
+        .optional();
+  }
+
+  /** All readings of a capture, newest first. */
+  public List<StoredReading> ofCapture(CaptureId capture) {
+    return jdbc.sql("select * from reading r where r.capture_id = ? order by made_at desc, id desc")
+        .param(capture.value())
+        .query(Readings::stored)
+        .list();
+  }
+
+  /** Which readings a capture has, newest first, without their documents. */
+  public List<Version> versionsOf(CaptureId capture) {
+    return jdbc.sql(
+            """
+            select r.id, r.made_at, r.method_version from reading r where r.capture_id = ?
+            order by r.made_at desc, r.id desc
+            """)
+        .param(capture.value())
+        .query(
+            (row, number) ->
+                new Version(
+                    new ReadingId(row.getObject("id", UUID.class)),
+                    row.getObject("made_at", OffsetDateTime.class).toInstant(),
+                    row.getString("method_version")))
+        .list();
+  }
+
+  /** The reading that stands for each measured capture of a visit, in one statement. */
+  public List<VisitReading> ofVisit(VisitId visit) {
+    return jdbc.sql(
+            """
+            select r.*, c.speed_setting_id, c.bench_condition, c.file_name, c.received_at
+            from reading r join capture c on c.id = r.capture_id
+            where c.visit_id = ? and c.state = 'measured' and %s
+            order by c.received_at, c.id
+            """
+                .formatted(NEWEST_OF_ITS_CAPTURE))
+        .param(visit.value())
+        .query(VisitReading::of)
+        .list();
+  }
+
+  /** A curve of a reading; empty where the reading has none of that name. */
+  public Optional<Curve> curve(ReadingId id, SeriesName name) {
+    if (name == SeriesName.HISTOGRAM) {
+      throw new IllegalArgumentException("a histogram is no curve");
+    }
+    return content(id, name).map(SeriesCodec::decodeCurve);
+  }
+
+  public Optional<Series.Histogram> histogram(ReadingId id) {
+    return content(id, SeriesName.HISTOGRAM).map(SeriesCodec::decodeHistogram);
+  }
+
+  private ReadingId addOnce(CaptureId capture, Reading reading, Series series) {
+    String document = ReadingDocument.toJson(reading);
+    Optional<UUID> same =
+        jdbc.sql(
+                "select r.id from reading r where r.capture_id = ? and r.document = ? and "
+                    + NEWEST_OF_ITS_CAPTURE)
+            .params(capture.value(), document)
+            .query(UUID.class)
+            .optional();
+    if (same.isPresent()) {
+      return new ReadingId(same.get());
+    }
+    ReadingId id = ReadingId.next();
+    jdbc.sql("insert into reading values (?, ?, ?, ?, ?)")
+        .params(id.value(), capture.value(), reading.method().version(), now(), document)
+        .update();
+    for (FigureName name : FigureName.values()) {
+      addFigure(id, name, name.of(reading));
+    }
+    addSeries(id, SeriesName.TRACE, SeriesCodec.encode(Curve.of(series.trace())));
+    addSeries(id, SeriesName.SPECTRUM, SeriesCodec.encode(Curve.of(series.spectrum())));
+    Series.Histogram histogram = series.histogram();
+    if (histogram != null) {
+      addSeries(id, SeriesName.HISTOGRAM, SeriesCodec.encode(histogram));
+    }
+    return id;
+  }
+
+  private void addFigure(ReadingId id, FigureName name, Figure figure) {
+    jdbc.sql("insert into reading_figure values (:reading, :figure, :amount, :uncertainty)")
+        .param("reading", id.value())
+        .param("figure", name.path())
+        .param("amount", figure.value())
+        .param("uncertainty", figure.expandedUncertainty())
+        .update();
+  }
+
+  private void addSeries(ReadingId id, SeriesName name, byte[] content) {
+    jdbc.sql("insert into reading_series values (:reading, :name, :content)")
+        .param("reading", id.value())
+        .param("name", name.word())
+        .param("content", content)
+        .update();
+  }
+
+  private Optional<byte[]> content(ReadingId id, SeriesName name) {
+    return jdbc.sql("select content from reading_series where reading_id = ? and name = ?")
+        .params(id.value(), name.word())
+        .query((row, number) -> row.getBytes(1))
+        .optional();
+  }
+
+  /** To the microsecond, which both databases keep. */
+  private OffsetDateTime now() {
+    return clock.instant().truncatedTo(ChronoUnit.MICROS).atOffset(ZoneOffset.UTC);
+  }
+
+  static StoredReading stored(ResultSet row, int number) throws SQLException {
+    return new StoredReading(
+        new ReadingId(row.getObject("id", UUID.class)),
+        new CaptureId(row.getObject("capture_id", UUID.class)),
+        row.getObject("made_at", OffsetDateTime.class).toInstant(),
+        ReadingDocument.fromJson(row.getString("document")));
+  }
+
+  /** A reading without its figures. */
+  public record Version(ReadingId id, Instant madeAt, String version) {}
+}

@@ -1,0 +1,78 @@
+package turnsheet.reading.web;
+
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.stream.Collectors;
+import org.springframework.context.MessageSource;
+import org.springframework.jdbc.core.simple.JdbcClient;
+import org.springframework.stereotype.Component;
+import turnsheet.capture.CaptureState;
+import turnsheet.reading.CaptureResult;
+import turnsheet.reading.CaptureResults;
+import turnsheet.shop.PageOf;
+import turnsheet.shop.PageQuery;
+import turnsheet.shop.VisitId;
+import turnsheet.shop.VisitSummary;
+import turnsheet.shop.Visits;
+import turnsheet.web.Times;
+
+/** Gathers what the bench page shows: six statements, however full the bench is. */
+@Component
+class BenchView {
+
+  private final Visits visits;
+  private final CaptureResults results;
+  private final JdbcClient jdbc;
+  private final MessageSource messages;
+  private final Times times;
+
+  BenchView(
+      Visits visits, CaptureResults results, JdbcClient jdbc, MessageSource messages, Times times) {
+    this.visits = visits;
+    this.results = results;
+    this.jdbc = jdbc;
+    this.messages = messages;
+    this.times = times;
+  }
+
+  BenchPage page(Locale locale) {
+    Wording words = new Wording(messages, locale);
+    List<VisitSummary> stays = visits.open(PageQuery.first(PageOf.LARGEST)).items();
+    Map<VisitId, List<CaptureResult>> byVisit =
+        results.onTheBench().stream().collect(Collectors.groupingBy(CaptureResult::visitId));
+    Standing standing = new Standing(results.limitsOnTheBench());
+    Bench bench = new Bench(stays, byVisit, standing, words, times);
+    List<BenchPage.Recording> waiting = bench.recordings(CaptureState.RECOGNISED);
+    List<BenchPage.Recording> measuring = bench.recordings(CaptureState.QUEUED);
+    List<BenchPage.Stay> outside = bench.stays(Bench::isOutside);
+    List<BenchPage.Stay> ready = bench.stays(Bench::isReady);
+    return new BenchPage(
+        words.text(
+            "reading.bench.summary",
+            Integer.toString(stays.size()),
+            Integer.toString(waiting.size()),
+            Integer.toString(measuring.size()),
+            Integer.toString(outside.size()),
+            Integer.toString(ready.size())),
+        start(),
+        waiting,
+        measuring,
+        bench.recordings(CaptureState.REFUSED, CaptureState.FAILED),
+        outside,
+        ready,
+        bench.stays((b, captures) -> true));
+  }
+
+  private BenchPage.Start start() {
+    return jdbc.sql(
+            """
+            select (select count(*) from machine_model), (select count(*) from customer),
+              (select count(*) from unit)
+            """)
+        .query(
+            (row, number) ->
+                new BenchPage.Start(row.getLong(1) > 0, row.getLong(2) > 0, row.getLong(3) > 0))
+        .single();
+  }
+}

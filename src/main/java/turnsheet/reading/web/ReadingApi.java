@@ -1,0 +1,104 @@
+package turnsheet.reading.web;
+
+import java.time.Instant;
+import java.util.List;
+import java.util.UUID;
+import org.jspecify.annotations.Nullable;
+import org.springframework.http.MediaType;
+import org.springframework.web.bind.annotation.GetMapping;
+import org.springframework.web.bind.annotation.PathVariable;
+import org.springframework.web.bind.annotation.RequestMapping;
+import org.springframework.web.bind.annotation.RequestParam;
+import org.springframework.web.bind.annotation.RestController;
+import turnsheet.capture.CaptureId;
+import turnsheet.core.measure.Figure;
+import turnsheet.core.measure.FigureName;
+import turnsheet.document.ReadingDocument;
+import turnsheet.reading.CaptureResult;
+import turnsheet.reading.CaptureResults;
+import turnsheet.reading.ReadingId;
+import turnsheet.reading.Readings;
+import turnsheet.shop.SpeedSettingId;
+import turnsheet.shop.UnitId;
+import turnsheet.web.NotFoundException;
+import turnsheet.web.RefusedRequestException;
+
+/** Readings and histories for programs. */
+@RestController
+@RequestMapping("/api/v1")
+class ReadingApi {
+
+  private final Readings readings;
+  private final CaptureResults results;
+
+  ReadingApi(Readings readings, CaptureResults results) {
+    this.readings = readings;
+    this.results = results;
+  }
+
+  /** The result contract. */
+  @GetMapping(path = "/readings/{id}", produces = MediaType.APPLICATION_JSON_VALUE)
+  String reading(@PathVariable UUID id) {
+    return readings
+        .find(new ReadingId(id))
+        .map(stored -> ReadingDocument.toJson(stored.reading()))
+        .orElseThrow(() -> new NotFoundException("reading"));
+  }
+
+  /** Which readings a capture has, newest first. */
+  @GetMapping("/captures/{id}/readings")
+  List<ReadingEntry> ofCapture(@PathVariable UUID id) {
+    return readings.versionsOf(new CaptureId(id)).stream()
+        .map(v -> new ReadingEntry(v.id().value(), v.version(), v.madeAt()))
+        .toList();
+  }
+
+  /**
+   * One figure of one unit over the years, in the order of the captures.
+   *
+   * @param figure path in the result contract: {@code flutter.weightedTwoSigmaPercent}
+   */
+  @GetMapping("/units/{id}/history")
+  List<HistoryEntry> history(
+      @PathVariable UUID id, @RequestParam UUID speedSettingId, @RequestParam String figure) {
+    FigureName name =
+        FigureName.ofPath(figure)
+            .orElseThrow(
+                () ->
+                    new RefusedRequestException(
+                        "unknownFigure", "There is no figure " + figure + " to follow."));
+    return History.with(results.ofUnit(new UnitId(id)), new SpeedSettingId(speedSettingId), name)
+        .stream()
+        .map(result -> HistoryEntry.of(result, result.figure(name)))
+        .toList();
+  }
+
+  record ReadingEntry(UUID readingId, String methodVersion, Instant madeAt) {}
+
+  /**
+   * One point of a history, in the unit that the figure's name ends with.
+   *
+   * @param expandedUncertainty null where it cannot be stated
+   */
+  record HistoryEntry(
+      Instant receivedAt,
+      UUID visitId,
+      UUID captureId,
+      @Nullable UUID readingId,
+      String condition,
+      @Nullable Double value,
+      @Nullable Double expandedUncertainty) {
+
+    static HistoryEntry of(CaptureResult result, Figure figure) {
+      ReadingId reading = result.readingId();
+      return new HistoryEntry(
+          result.receivedAt(),
+          result.visitId().value(),
+          result.captureId().value(),
+          reading == null ? null : reading.value(),
+          result.condition(),
+          figure.value(),
+          figure.expandedUncertainty());
+    }
+  }
+}

@@ -1,0 +1,50 @@
+package turnsheet.reading.web;
+
+import java.util.List;
+import org.jspecify.annotations.Nullable;
+import turnsheet.web.Crumb;
+import turnsheet.web.Shown;
+
+/**
+ * One reading as its page shows it.
+ *
+ * @param histogram null for a tone
+ * @param edges empty for a tone
+ * @param others earlier or later readings of the same capture
+ */
+record ReadingPage(
+    String id,
+    String captureId,
+    List<Crumb> trail,
+    String title,
+    String sentence,
+    List<FigureRow> speed,
+    List<FigureRow> flutter,
+    List<FigureRow> edges,
+    List<FigureRow> signal,
+    String rule,
+    @Nullable Drawn trace,
+    @Nullable Drawn spectrum,
+    @Nullable Drawn histogram,
+    List<LineRow> lines,
+    List<StabilityRow> stability,
+    List<Fact> edgeFacts,
+    List<Fact> signalFacts,
+    List<String> warnings,
+    List<Fact> source,
+    List<Fact> method,
+    List<Other> others) {
+
+  /**
+   * One line of the spectrum.
+   *
+   * @param suspects the most probable first, with harmonic and expected rate
+   */
+  record LineRow(Shown rate, Shown peak, List<String> suspects) {}
+
+  record StabilityRow(String tau, Shown deviation) {}
+
+  record Fact(String name, String text) {}
+
+  record Other(String id, String madeAt, String version) {}
+}

@@ -1,0 +1,201 @@
+package turnsheet.reading.web;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.springframework.test.web.servlet.request.MockMvcRequestBuilders.get;
+import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.content;
+import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.header;
+import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.jsonPath;
+import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.redirectedUrl;
+import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.status;
+
+import java.time.Clock;
+import java.util.UUID;
+import org.junit.jupiter.api.BeforeEach;
+import org.junit.jupiter.api.Test;
+import org.springframework.beans.factory.annotation.Autowired;
+import org.springframework.jdbc.core.simple.JdbcClient;
+import org.springframework.test.web.servlet.MockMvc;
+import org.springframework.transaction.support.TransactionTemplate;
+import turnsheet.capture.CaptureId;
+import turnsheet.document.ReadingDocument;
+import turnsheet.reading.ReadingId;
+import turnsheet.reading.Readings;
+import turnsheet.reading.SampleBench;
+import turnsheet.reading.SampleReadings;
+import turnsheet.testing.AsTechnician;
+import turnsheet.testing.ServiceTest;
+
+@ServiceTest
+@AsTechnician
+class ReadingPagesTest {
+
+  @Autowired MockMvc mvc;
+  @Autowired JdbcClient jdbc;
+  @Autowired TransactionTemplate transactions;
+  @Autowired Clock clock;
+  @Autowired Readings readings;
+
+  private SampleBench bench;
+  private CaptureId capture;
+  private ReadingId reading;
+
+  @BeforeEach
+  void measureOne() {
+    bench = new SampleBench(jdbc, transactions, clock);
+    capture = bench.capture("as received", "measured");
+    reading = readings.add(capture, SampleReadings.tone(0.37), SampleReadings.series());
+  }
+
+  @Test
+  void readingPageAnswersFirstAndShowsLimitsLinesAndWarnings() throws Exception {
+    String page = page("/readings/" + reading);
+
+    assertThat(plain(page))
+        .contains(
+            "Runs (0.3700 ± 0.0060) % fast, limit ± 0.5 %: within;"
+                + " weighted flutter (two-sigma) (0.0670 ± 0.0020) %, limit 0.06 %: outside.");
+    assertThat(page)
+        .contains("capstan shaft, expected at 10.02 Hz")
+        .contains("The recording lasts 4 s: record 60 s or more.")
+        .contains("too short")
+        .contains("one stretch only")
+        .contains("service manual")
+        .contains("ab".repeat(32))
+        .contains("<svg")
+        .doesNotContain("style=")
+        .doesNotContain("??");
+  }
+
+  @Test
+  void captureLeadsToItsNewestReading() throws Exception {
+    ReadingId newer = readings.add(capture, SampleReadings.tone(0.2), SampleReadings.series());
+
+    mvc.perform(get("/captures/" + capture + "/reading"))
+        .andExpect(redirectedUrl("/readings/" + newer));
+    assertThat(page("/readings/" + reading)).contains("/readings/" + newer);
+  }
+
+  @Test
+  void unknownReadingIsNotFound() throws Exception {
+    mvc.perform(get("/readings/" + UUID.randomUUID())).andExpect(status().isNotFound());
+    mvc.perform(get("/captures/" + UUID.randomUUID() + "/reading"))
+        .andExpect(status().isNotFound());
+    mvc.perform(get("/readings/" + reading + "/series/smell")).andExpect(status().isNotFound());
+  }
+
+  @Test
+  void seriesComeInWindows() throws Exception {
+    // samples 500 to 600 lie in this window, and one beyond it where rounding puts an edge between
+    mvc.perform(get("/readings/" + reading + "/series/trace?from=1&to=1.2&points=4000"))
+        .andExpect(status().isOk())
+        .andExpect(jsonPath("$.samplesPerPoint").value(1))
+        .andExpect(jsonPath("$.low.length()").value(org.hamcrest.Matchers.oneOf(101, 102)))
+        .andExpect(jsonPath("$.high").isEmpty());
+    mvc.perform(get("/api/v1/readings/" + reading + "/series/trace?points=10"))
+        .andExpect(jsonPath("$.samplesPerPoint").value(200))
+        .andExpect(jsonPath("$.high.length()").value(10));
+    mvc.perform(get("/readings/" + reading + "/series/histogram"))
+        .andExpect(jsonPath("$.counts[1]").value(5));
+    mvc.perform(get("/readings/" + reading + "/series/trace?points=4001"))
+        .andExpect(status().isUnprocessableContent());
+    mvc.perform(get("/readings/" + reading + "/series/trace?from=2&to=1"))
+        .andExpect(status().isUnprocessableContent());
+  }
+
+  @Test
+  void restAndDownloadGiveTheContract() throws Exception {
+    String expected = ReadingDocument.toJson(SampleReadings.tone(0.37));
+    mvc.perform(get("/api/v1/readings/" + reading)).andExpect(content().string(expected));
+    String file =
+        mvc.perform(get("/readings/" + reading + ".json"))
+            .andExpect(
+                header()
+                    .string("Content-Disposition", org.hamcrest.Matchers.containsString(".json")))
+            .andReturn()
+            .getResponse()
+            .getContentAsString();
+    assertThat(ReadingDocument.fromJson(file)).isEqualTo(SampleReadings.tone(0.37));
+    mvc.perform(get("/api/v1/captures/" + capture + "/readings"))
+        .andExpect(jsonPath("$[0].readingId").value(reading.toString()))
+        .andExpect(jsonPath("$[0].methodVersion").value("1"));
+  }
+
+  @Test
+  void tablesComeAsCsv() throws Exception {
+    assertThat(page("/readings/" + reading + ".csv"))
+        .contains("speed.deviationPercent,0.37,0.006,2.0,")
+        .contains("speed.driftPercentPerMinute,,,,too short");
+    assertThat(page("/readings/" + reading + "/series/trace.csv").lines()).hasSize(2001);
+    assertThat(page("/readings/" + reading + "/series/histogram.csv")).contains("300.5,301.0,5");
+  }
+
+  @Test
+  void visitPageShowsEachCaptureInItsPlace() throws Exception {
+    bench.capture("after repair", "refused");
+    bench.capture("after cleaning", "recognised");
+    String page = page("/visits/" + bench.visit.id());
+
+    assertThat(page)
+        .contains("+0.3700")
+        .contains("outside")
+        .contains("The file is silent: record it again.")
+        .contains("after cleaning")
+        .contains("voices waver")
+        .doesNotContain("/visits/" + bench.visit.id() + "/sheet")
+        .doesNotContain("??");
+  }
+
+  @Test
+  void visitWithTwoConditionsLeadsToItsSheet() throws Exception {
+    CaptureId after = bench.capture("after repair", "measured");
+    readings.add(after, SampleReadings.tone(0.02), SampleReadings.series());
+
+    assertThat(page("/visits/" + bench.visit.id()))
+        .contains("/visits/" + bench.visit.id() + "/sheet");
+  }
+
+  @Test
+  void unitPageFollowsTheChosenFigure() throws Exception {
+    String byDefault = page("/units/" + bench.unit.id());
+    String chosen = page("/units/" + bench.unit.id() + "?figure=speed.deviationPercent");
+
+    assertThat(byDefault).contains(">.0670<").contains("Limit 0.06").doesNotContain("??");
+    assertThat(chosen).contains(">.3700<").contains("0.5").contains("<svg");
+    mvc.perform(
+            get("/api/v1/units/" + bench.unit.id() + "/history")
+                .param("speedSettingId", bench.setting.toString())
+                .param("figure", "speed.deviationPercent"))
+        .andExpect(jsonPath("$[0].value").value(0.37))
+        .andExpect(jsonPath("$[0].expandedUncertainty").value(0.006))
+        .andExpect(jsonPath("$[0].condition").value("as received"));
+    mvc.perform(
+            get("/api/v1/units/" + bench.unit.id() + "/history")
+                .param("speedSettingId", bench.setting.toString())
+                .param("figure", "nothing"))
+        .andExpect(status().isUnprocessableContent());
+  }
+
+  @Test
+  void benchSaysWhatEachVisitNeeds() throws Exception {
+    bench.capture("after repair", "recognised");
+    String page = page("/");
+
+    assertThat(page)
+        .contains(bench.model.name())
+        .contains("Waiting for you to confirm")
+        .contains("Outside a limit")
+        .doesNotContain("??");
+  }
+
+  private String page(String address) throws Exception {
+    return mvc.perform(get(address))
+        .andExpect(status().isOk())
+        .andReturn()
+        .getResponse()
+        .getContentAsString(java.nio.charset.StandardCharsets.UTF_8);
+  }
+
+  private static String plain(String page) {
+    return page.replace('\u202f', ' ').replace("\u2009", " ");
+  }
+}
