@@ -94,7 +94,7 @@ final class EdgePlan {
             new Reading.Signal(
                 signal.snrDb(),
                 signal.mains(),
-                0,
+                signal.clippedSamples().getAsLong(),
                 scan.gaps.stream()
                     .map(g -> new Reading.Dropout(g.startSeconds(), g.durationSeconds()))
                     .toList(),

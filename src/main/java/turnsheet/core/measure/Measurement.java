@@ -54,7 +54,8 @@ public final class Measurement {
                 new TonePlan(settings)
                     .outcome(() -> formats.openSamples(counted, chosen), sha256, recognised);
             case TACHOMETER ->
-                new TachometerPlan(() -> formats.openSamples(counted, chosen)).measure(edges);
+                new TachometerPlan(() -> formats.openSamples(counted, chosen), settings)
+                    .measure(edges);
             case EDGES ->
                 edges.measure(() -> formats.openEdges(counted, chosen), WaveformSignal.ofAList());
           };

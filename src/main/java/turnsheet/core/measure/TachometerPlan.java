@@ -1,6 +1,7 @@
 package turnsheet.core.measure;
 
 import java.io.IOException;
+import java.util.Arrays;
 import java.util.List;
 import turnsheet.core.dsp.CrossingReader;
 import turnsheet.core.signal.RejectedException;
@@ -25,7 +26,13 @@ final class TachometerPlan {
   /** The waveform must go this share of its swing beyond the middle before an edge counts. */
   private static final double BAND_SHARE = 0.11;
 
+  /** Mains lines close to the pulse rate or above it cannot be told from the pulses. */
+  private static final double MAINS_BELOW_SHARE = 0.7;
+
   private final SampleOpener opener;
+  private final MeasureSettings settings;
+  private List<Reading.MainsLine> mains = List.of();
+  private ClipCounter clips = new ClipCounter();
 
   /** Opens the same samples again and again, from the start each time. */
   @FunctionalInterface
@@ -33,8 +40,9 @@ final class TachometerPlan {
     SampleReader open() throws IOException, RejectedException;
   }
 
-  TachometerPlan(SampleOpener opener) {
+  TachometerPlan(SampleOpener opener, MeasureSettings settings) {
     this.opener = opener;
+    this.settings = settings;
   }
 
   Outcome.Measured measure(EdgePlan plan) throws IOException, RejectedException {
@@ -49,19 +57,26 @@ final class TachometerPlan {
               + " again.");
     }
     double middle = (low + high) / 2;
-    EdgeOpener edges = () -> new CrossingReader(opener.open(), middle, BAND_SHARE * swing);
+    EdgeOpener edges =
+        () -> {
+          clips = new ClipCounter();
+          return new CrossingReader(
+              new ClipCountingReader(opener.open(), clips), middle, BAND_SHARE * swing);
+        };
     return plan.measure(
         edges,
         new WaveformSignal(
             Figure.absent(
                 "pulses have no single level to compare with noise: see the noise of the edges"),
-            List.of()));
+            mains,
+            () -> clips.clipped()));
   }
 
   /** Samples of the first minute, thinned evenly. */
   private double[] beginning() throws IOException, RejectedException {
     try (SampleReader reader = opener.open()) {
       double rate = reader.sampleRateHertz();
+      ToneProbe tone = new ToneProbe(rate, settings);
       long span = (long) (PROBE_SECONDS * rate);
       int every = (int) Math.max(1, span / PROBE_SAMPLES);
       double[] kept = new double[(int) (span / every) + 1];
@@ -70,17 +85,30 @@ final class TachometerPlan {
       long index = 0;
       int count;
       while (index < span && (count = reader.read(block)) > 0) {
+        tone.add(block, count);
         for (int i = 0; i < count && used < kept.length; i++, index++) {
           if (index % every == 0) {
             kept[used++] = block[i];
           }
         }
       }
+      mains = mains(tone);
       if (used == 0) {
         throw new RejectedException(
             "empty", "The channel holds no samples: record or export it again.");
       }
-      return java.util.Arrays.copyOf(kept, used);
+      return Arrays.copyOf(kept, used);
+    }
+  }
+
+  /** Mains lines below the fundamental of the pulses; none where that cannot be told. */
+  private List<Reading.MainsLine> mains(ToneProbe tone) {
+    try {
+      return tone.found().mains().stream()
+          .filter(line -> line.rateHz() < MAINS_BELOW_SHARE * settings.nominalHz())
+          .toList();
+    } catch (RejectedException e) {
+      return List.of();
     }
   }
 }

@@ -74,6 +74,7 @@ class TachometerPlanTest {
     Reading r = measure(samples, 48000, 400);
     assertThat(value(r.speed().deviationPercent())).isCloseTo(0.4, within(1e-3));
     assertThat(r.warnings()).extracting(Warning::code).doesNotContain("clipped");
+    assertThat(r.signal().clippedSamples()).isEqualTo(samples.length);
     // 119.5 samples a period: rounding goes to and fro from edge to edge, which fourth differences
     // take for more noise than the 20.83 / sqrt 12 = 6 us of independent rounding
     assertThat(value(Objects.requireNonNull(r.edges()).edgeNoiseMicroseconds()))
@@ -83,6 +84,23 @@ class TachometerPlanTest {
         .filteredOn(w -> w.code().equals("quantised"))
         .first()
         .satisfies(w -> assertThat(w.message()).contains("20.83"));
+  }
+
+  /** Hum of 12 % of a sine: 20 log 0.12 = -18.4 dB; what it does to edges is in the lines. */
+  @Test
+  void namesMainsHumOnTheSignal() throws Exception {
+    double[] samples =
+        SignalSynth.tone(
+            SpeedFunction.constant(0), 800, 48000, 20, 0.5, Double.POSITIVE_INFINITY, 1);
+    for (int i = 0; i < samples.length; i++) {
+      samples[i] += 0.06 * Math.sin(2 * Math.PI * 50 * i / 48000);
+    }
+    Reading r = measure(samples, 48000, 800);
+    assertThat(r.signal().mains()).hasSize(1);
+    assertThat(r.signal().mains().get(0).rateHz()).isEqualTo(50);
+    // 50 Hz lies between bins of the probe's spectrum: up to 0.8 dB of scallop
+    assertThat(r.signal().mains().get(0).relativeDb()).isCloseTo(-18.4, within(0.9));
+    assertThat(value(r.lines().get(0).rateHz())).isCloseTo(50, within(0.01));
   }
 
   @Test
@@ -119,8 +137,10 @@ class TachometerPlanTest {
   }
 
   private static Reading measure(double[] samples, double rate, double pulses) throws Exception {
-    EdgePlan plan = new EdgePlan("00", "waveform", rate, MeasureSettings.tachometer(pulses, null));
-    return new TachometerPlan(() -> EdgeLists.samples(samples, rate)).measure(plan).reading();
+    MeasureSettings settings = MeasureSettings.tachometer(pulses, null);
+    return new TachometerPlan(() -> EdgeLists.samples(samples, rate), settings)
+        .measure(new EdgePlan("00", "waveform", rate, settings))
+        .reading();
   }
 
   private static double value(Figure figure) {
