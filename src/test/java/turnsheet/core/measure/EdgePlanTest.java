@@ -7,6 +7,7 @@ import static org.assertj.core.api.Assertions.within;
 import java.io.IOException;
 import java.util.Objects;
 import java.util.Random;
+import org.jspecify.annotations.Nullable;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -286,13 +287,13 @@ class EdgePlanTest {
   }
 
   private static Outcome.Measured measure(
-      SpeedFunction speed, double rate, double seconds, double jitter, Integer teeth)
+      SpeedFunction speed, double rate, double seconds, double jitter, @Nullable Integer teeth)
       throws IOException, RejectedException {
     double[] times = SignalSynth.risingEdges(speed, rate, seconds, jitter, 1);
     return plan(rate, teeth).measure(EdgeLists.rising(times), list());
   }
 
-  private static EdgePlan plan(double rate, Integer teeth) {
+  private static EdgePlan plan(double rate, @Nullable Integer teeth) {
     return new EdgePlan("00", "edge list", null, MeasureSettings.edges(rate, teeth));
   }
 
