@@ -10,6 +10,7 @@ import org.springframework.web.bind.MethodArgumentNotValidException;
 import org.springframework.web.bind.annotation.PathVariable;
 import org.springframework.web.method.annotation.MethodArgumentTypeMismatchException;
 import org.springframework.web.multipart.MultipartException;
+import org.springframework.web.servlet.resource.NoResourceFoundException;
 
 /**
  * What an exception means to whoever asked.
@@ -41,6 +42,9 @@ record Answer(
     }
     if (problem instanceof HttpMessageNotReadableException) {
       return of(HttpStatus.BAD_REQUEST, "unreadable", "The body of the request cannot be read.");
+    }
+    if (problem instanceof NoResourceFoundException) {
+      return to(HttpStatus.NOT_FOUND);
     }
     if (problem instanceof ErrorResponse e) {
       return of(e.getStatusCode(), code(e.getStatusCode()), e.getBody().getDetail());

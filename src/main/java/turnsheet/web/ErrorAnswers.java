@@ -63,8 +63,7 @@ class ErrorAnswers {
     if (detail == null && reference != null) {
       detail = "Something went wrong here; the log of the service has it under this reference.";
     }
-    ProblemDetail problem =
-        Problems.problem(answer.status(), answer.code(), detail == null ? "" : detail);
+    ProblemDetail problem = Problems.problem(answer.status(), answer.code(), detail);
     if (reference != null) {
       problem.setProperty("reference", reference);
     }

@@ -27,8 +27,8 @@ public final class ErrorView {
   private static ModelAndView page(
       HttpStatusCode status, String text, @Nullable String sentence, @Nullable String reference) {
     ModelAndView view = new ModelAndView("error/page", status);
-    view.addObject("title", "web.error." + text + ".title");
-    view.addObject("text", "web.error." + text + ".text");
+    view.addObject("titleKey", "web.error." + text + ".title");
+    view.addObject("textKey", "web.error." + text + ".text");
     view.addObject("sentence", sentence);
     view.addObject("reference", reference);
     return view;

@@ -3,6 +3,7 @@ package turnsheet.web;
 import jakarta.servlet.http.HttpServletResponse;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
+import org.jspecify.annotations.Nullable;
 import org.springframework.http.HttpStatus;
 import org.springframework.http.HttpStatusCode;
 import org.springframework.http.MediaType;
@@ -20,8 +21,9 @@ public class Problems {
     this.json = json;
   }
 
-  static ProblemDetail problem(HttpStatusCode status, String code, String detail) {
-    ProblemDetail problem = ProblemDetail.forStatusAndDetail(status, detail);
+  static ProblemDetail problem(HttpStatusCode status, String code, @Nullable String detail) {
+    ProblemDetail problem = ProblemDetail.forStatus(status);
+    problem.setDetail(detail);
     problem.setProperty("code", code);
     return problem;
   }

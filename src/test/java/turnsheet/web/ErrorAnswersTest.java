@@ -60,7 +60,7 @@ class ErrorAnswersTest {
         .hasStatus(404)
         .hasViewName("error/page")
         .model()
-        .containsEntry("title", "web.error.404.title")
+        .containsEntry("titleKey", "web.error.404.title")
         .containsEntry("sentence", "There is no such unit.");
     assertThat(mvc.get().uri("/refused"))
         .hasStatus(422)
@@ -70,7 +70,7 @@ class ErrorAnswersTest {
     assertThat(mvc.post().uri("/missing"))
         .hasStatus(405)
         .model()
-        .containsEntry("title", "web.error.400.title");
+        .containsEntry("titleKey", "web.error.400.title");
   }
 
   @Test

@@ -51,7 +51,8 @@ class MessageKeysTest {
             .distinct()
             .collect(Collectors.joining("|", "(?:", ")"));
     // "{key}" is how bean validation names one
-    Pattern use = Pattern.compile("(?:[\"'|]|#\\{|\\{)(" + roots + "\\.[A-Za-z0-9.]*)(?=[\"'|}(])");
+    Pattern use =
+        Pattern.compile("(?:[\"'|]|#\\{|\\{)(" + roots + "\\.[A-Za-z0-9.]*)(?=[\"'|}(]|\\$\\{)");
     for (Path file : files("resources/templates", ".html")) {
       collect(use, file);
     }
