@@ -1,0 +1,5 @@
+/** Pages and REST of the before/after sheet. */
+@NullMarked
+package turnsheet.report.web;
+
+import org.jspecify.annotations.NullMarked;
