@@ -8,20 +8,21 @@ import java.util.Base64;
 import java.util.HexFormat;
 
 /** Unguessable words; only their hashes are stored. */
-final class Secrets {
+public final class Secrets {
 
   private static final SecureRandom RANDOM = new SecureRandom();
 
   private Secrets() {}
 
-  static String random(int bytes) {
+  /** URL-safe base64 of so many random bytes, without padding. */
+  public static String random(int bytes) {
     byte[] secret = new byte[bytes];
     RANDOM.nextBytes(secret);
     return Base64.getUrlEncoder().withoutPadding().encodeToString(secret);
   }
 
   /** SHA-256 in lower-case hexadecimal: enough for a secret that nobody can guess, unsalted. */
-  static String sha256(String secret) {
+  public static String sha256(String secret) {
     try {
       byte[] hash =
           MessageDigest.getInstance("SHA-256").digest(secret.getBytes(StandardCharsets.UTF_8));

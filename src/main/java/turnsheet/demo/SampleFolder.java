@@ -3,7 +3,6 @@ package turnsheet.demo;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.List;
 import java.util.Locale;
 
 /** Writes the sample folder: the files and the page that says what is true about them. */
@@ -40,12 +39,15 @@ public final class SampleFolder {
 
   private SampleFolder() {}
 
-  /**
-   * Writes all files into a folder, which is made where it is missing.
-   *
-   * @return the names written
-   */
-  public static List<String> write(Path folder) throws IOException {
+  /** The shell command: one argument, the folder, {@code sample-uploads} where it is left out. */
+  public static void run(String[] args) throws IOException {
+    Path folder = Path.of(args.length == 0 ? "sample-uploads" : args[0]);
+    write(folder);
+    System.out.println("Wrote the samples to " + folder.toAbsolutePath());
+  }
+
+  /** Writes all files into a folder, which is made where it is missing. */
+  static void write(Path folder) throws IOException {
     Files.createDirectories(folder);
     for (SampleUpload sample : SampleUploads.all()) {
       Files.write(folder.resolve(sample.fileName()), sample.bytes());
@@ -54,7 +56,6 @@ public final class SampleFolder {
       Files.write(folder.resolve(name), SampleUploads.refused(name));
     }
     Files.writeString(folder.resolve("README.md"), readme());
-    return SampleUploads.all().stream().map(SampleUpload::fileName).toList();
   }
 
   static String readme() {

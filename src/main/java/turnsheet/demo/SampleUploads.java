@@ -52,13 +52,13 @@ final class SampleUploads {
         reelTone(
             "reel-19-tone-first-visit.wav",
             "The same transport years earlier.",
-            15,
+            24,
             reelSpeed(0.06, 0.022, 0.016),
             13),
         reelTone(
             "reel-19-tone-second-visit.wav",
             "The same transport between the two.",
-            15,
+            24,
             reelSpeed(0.17, 0.052, 0.021),
             14),
         reelTacho(
@@ -127,7 +127,7 @@ final class SampleUploads {
 
   private static SampleUpload reelTone(
       String name, String about, double seconds, SpeedFunction speed, long seed) {
-    int rate = 32000;
+    int rate = 24000;
     return new SampleUpload(
         name,
         about,
@@ -141,8 +141,8 @@ final class SampleUploads {
   }
 
   private static SampleUpload reelTacho(String name, String about, SpeedFunction speed, long seed) {
-    int rate = 48000;
-    double seconds = 12;
+    int rate = 32000;
+    double seconds = 24;
     return new SampleUpload(
         name,
         about,
@@ -155,7 +155,7 @@ final class SampleUploads {
                 out,
                 rate,
                 16,
-                SignalSynth.pulses(speed, 2 * PULSES_AT_19, rate, seconds, 0.6, 2, 0.0005, seed)));
+                SignalSynth.pulses(speed, 2 * PULSES_AT_19, rate, seconds, 0.6, 0.8, 0.0005, seed)));
   }
 
   private static SampleUpload reelEdges() {
@@ -209,18 +209,18 @@ final class SampleUploads {
 
   private static SampleUpload dictationTable() {
     SpeedFunction speed = SpeedFunction.constant(0.018).plusLine(DICTATION_BELT_HZ, 0.32, 0.5);
-    double step = 200e-6;
+    double step = 500e-6;
     return new SampleUpload(
         "dictation-4-tacho-as-received.csv",
         "Oscilloscope table of a dictation machine's tachometer at 4.7625 cm/s, slipping belt.",
         CaptureKind.TACHOMETER,
         250,
-        10,
+        22,
         speed,
         out ->
             TextSamples.waveformTable(
                 out,
-                SignalSynth.pulses(speed, 250, 1 / step, 10, 2.4, 1.2, 0.004, 21),
+                SignalSynth.pulses(speed, 250, 1 / step, 22, 2.4, 1.2, 0.004, 21),
                 step,
                 -0.5));
   }
@@ -232,9 +232,9 @@ final class SampleUploads {
         "Value change dump of the same tachometer with a new belt.",
         CaptureKind.EDGES,
         250,
-        20,
+        24,
         speed,
-        out -> TextSamples.valueChangeDump(out, SignalSynth.risingEdges(speed, 250, 20, 2e-6, 22)));
+        out -> TextSamples.valueChangeDump(out, SignalSynth.risingEdges(speed, 250, 24, 0.2e-6, 22)));
   }
 
   /** Stored, not deflated, with a fixed time, so that the bytes do not depend on the platform. */
