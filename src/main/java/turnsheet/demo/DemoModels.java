@@ -71,8 +71,7 @@ final class DemoModels {
 
   static MachineModel dictationMachine() {
     SpeedSetting only =
-        new SpeedSetting(
-            SpeedSettingId.next(), DICTATION, SpeedUnit.CM_PER_S, 4.7625, null, 250.0);
+        new SpeedSetting(SpeedSettingId.next(), DICTATION, SpeedUnit.CM_PER_S, 4.7625, null, 250.0);
     return new MachineModel(
         ModelId.next(),
         "Tessolin D5 dictation machine",
@@ -83,7 +82,8 @@ final class DemoModels {
             new RotatingPart("capstan", PartBasis.DIAMETER_MM, 2.5, null),
             new RotatingPart("belt", PartBasis.FIXED_PER_MINUTE, 114, null)),
         List.of(
-            limit(only, FigureName.DEVIATION, 1.5), limit(only, FigureName.WEIGHTED_TWO_SIGMA, 0.25)));
+            limit(only, FigureName.DEVIATION, 1.5),
+            limit(only, FigureName.WEIGHTED_TWO_SIGMA, 0.25)));
   }
 
   private static SpeedSetting tape(String label, double cmPerS, @Nullable Double pulses) {
@@ -93,7 +93,12 @@ final class DemoModels {
 
   private static SpeedSetting turning(String label, double perMinute) {
     return new SpeedSetting(
-        SpeedSettingId.next(), label, SpeedUnit.REV_PER_MIN, perMinute, SampleUploads.TONE_HZ, null);
+        SpeedSettingId.next(),
+        label,
+        SpeedUnit.REV_PER_MIN,
+        perMinute,
+        SampleUploads.TONE_HZ,
+        null);
   }
 
   private static ServiceLimit limit(SpeedSetting setting, FigureName figure, double bound) {

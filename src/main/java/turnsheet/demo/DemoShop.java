@@ -50,7 +50,9 @@ class DemoShop {
     LocalDate checked = LocalDate.ofInstant(bench.daysAgo(90), ZoneOffset.UTC);
     InstrumentId recorder =
         instruments
-            .add(new BenchInstrument(InstrumentId.next(), "Sound card at bench 1", 0, 10.0, checked, ""))
+            .add(
+                new BenchInstrument(
+                    InstrumentId.next(), "Sound card at bench 1", 0, 10.0, checked, ""))
             .id();
     InstrumentId controller =
         instruments
@@ -114,9 +116,13 @@ class DemoShop {
     MachineModel model = models.add(DemoModels.recordPlayer());
     Unit unit =
         units.add(
-            model.id(), customers.add("Listening Room Association", "an invented customer").id(), "P1-2203", "");
+            model.id(),
+            customers.add("Listening Room Association", "an invented customer").id(),
+            "P1-2203",
+            "");
     var tone = new DemoBench.Setup(model, DemoModels.AT_33, recorder, disc);
-    VisitId visit = bench.visit(unit, 1, "Long notes waver.", "Platter bushing changed, record centred.");
+    VisitId visit =
+        bench.visit(unit, 1, "Long notes waver.", "Platter bushing changed, record centred.");
     bench.upload(visit, tone, CaptureKey.AS_RECEIVED, "disc-33-tone-as-received.aiff", 1);
     bench.upload(visit, tone, CaptureKey.AFTER_REPAIR, "disc-33-tone-after-repair.aiff", 0);
   }
@@ -125,7 +131,10 @@ class DemoShop {
     MachineModel model = models.add(DemoModels.dictationMachine());
     Unit unit =
         units.add(
-            model.id(), customers.add("Archive of Spoken Letters", "an invented customer").id(), "D5-118", "");
+            model.id(),
+            customers.add("Archive of Spoken Letters", "an invented customer").id(),
+            "D5-118",
+            "");
     var tacho = new DemoBench.Setup(model, DemoModels.DICTATION, controller, null);
     VisitId visit = bench.visit(unit, 1, "Voices gurgle.", "");
     bench.upload(visit, tacho, CaptureKey.AS_RECEIVED, "dictation-4-tacho-as-received.csv", 1);

@@ -14,7 +14,9 @@ import turnsheet.access.OneTimeAddresses;
 import turnsheet.access.Role;
 import turnsheet.access.ShopProfiles;
 
-/** Loads the demo at its first start, tells how far its measurements are, and lets one visitor in. */
+/**
+ * Loads the demo at its first start, tells how far its measurements are, and lets one visitor in.
+ */
 @Component
 @Profile("demo")
 class DemoStart {
@@ -85,12 +87,9 @@ class DemoStart {
       }
     }
     Account account = accounts.bySignInName(SIGN_IN_NAME).orElseThrow();
-    String path =
-        addresses.issue(OneTimeAddresses.Purpose.ENTER, account.id(), ADDRESS_LIFETIME);
+    String path = addresses.issue(OneTimeAddresses.Purpose.ENTER, account.id(), ADDRESS_LIFETIME);
     System.out.println(
-        "Open the demo: http://localhost:"
-            + environment.getProperty("local.server.port")
-            + path);
+        "Open the demo: http://localhost:" + environment.getProperty("local.server.port") + path);
   }
 
   private long captures(String which) {

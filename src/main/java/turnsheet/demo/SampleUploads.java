@@ -155,7 +155,8 @@ final class SampleUploads {
                 out,
                 rate,
                 16,
-                SignalSynth.pulses(speed, 2 * PULSES_AT_19, rate, seconds, 0.6, 0.8, 0.0005, seed)));
+                SignalSynth.pulses(
+                    speed, 2 * PULSES_AT_19, rate, seconds, 0.6, 0.8, 0.0005, seed)));
   }
 
   private static SampleUpload reelEdges() {
@@ -234,7 +235,8 @@ final class SampleUploads {
         250,
         24,
         speed,
-        out -> TextSamples.valueChangeDump(out, SignalSynth.risingEdges(speed, 250, 24, 0.2e-6, 22)));
+        out ->
+            TextSamples.valueChangeDump(out, SignalSynth.risingEdges(speed, 250, 24, 0.2e-6, 22)));
   }
 
   /** Stored, not deflated, with a fixed time, so that the bytes do not depend on the platform. */

@@ -77,7 +77,9 @@ public record SheetPair(
     if (!from.method().version().equals(to.method().version())) {
       cautions.add(Caution.METHOD);
     }
-    if (!from.method().settings().equals(to.method().settings().onChannel(from.source().channel()))) {
+    if (!from.method()
+        .settings()
+        .equals(to.method().settings().onChannel(from.source().channel()))) {
       cautions.add(Caution.SETTINGS);
     }
     return cautions;

@@ -33,11 +33,7 @@ public class Sheets {
   private final Clock clock;
 
   Sheets(
-      Visits visits,
-      MachineModels models,
-      Readings readings,
-      ShopProfiles profiles,
-      Clock clock) {
+      Visits visits, MachineModels models, Readings readings, ShopProfiles profiles, Clock clock) {
     this.visits = visits;
     this.models = models;
     this.readings = readings;
@@ -59,7 +55,9 @@ public class Sheets {
       List<ServiceLimit> limits = model.limitsAt(setting.id());
       for (CaptureKind kind : CaptureKind.values()) {
         List<VisitReading> here =
-            all.stream().filter(r -> r.settingId().equals(setting.id()) && kind(r) == kind).toList();
+            all.stream()
+                .filter(r -> r.settingId().equals(setting.id()) && kind(r) == kind)
+                .toList();
         VisitReading before = newest(here, CaptureKey.AS_RECEIVED);
         VisitReading after = newest(here, CaptureKey.AFTER_REPAIR);
         if (before != null && after != null) {

@@ -63,7 +63,9 @@ public class ShareDesk {
               + ShareLinks.LONGEST_DAYS
               + " days: choose a number between them.");
     }
-    visits.find(visit).orElseThrow(() -> new NotFoundException("visit"));
+    if (visits.find(visit).isEmpty()) {
+      throw new NotFoundException("visit");
+    }
     ShareLinks.Made made = links.make(visit, user.signInName(), days);
     audit.record("share.audit.made", visit.value().toString());
     return new Given(made.link(), publicAddress + PATH + made.token());

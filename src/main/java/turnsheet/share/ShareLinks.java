@@ -13,12 +13,12 @@ import java.util.Optional;
 import java.util.UUID;
 import org.jspecify.annotations.Nullable;
 import org.springframework.jdbc.core.simple.JdbcClient;
-import org.springframework.stereotype.Repository;
+import org.springframework.stereotype.Component;
 import turnsheet.access.Secrets;
 import turnsheet.shop.VisitId;
 
 /** The links that open sheets without an account: 256 random bits, of which only a hash is kept. */
-@Repository
+@Component
 public final class ShareLinks {
 
   public static final int SHORTEST_DAYS = 1;
@@ -141,8 +141,7 @@ public final class ShareLinks {
     return row.getObject(column, OffsetDateTime.class).toInstant();
   }
 
-  private static @Nullable Instant instantOrNull(ResultSet row, String column)
-      throws SQLException {
+  private static @Nullable Instant instantOrNull(ResultSet row, String column) throws SQLException {
     OffsetDateTime time = row.getObject(column, OffsetDateTime.class);
     return time == null ? null : time.toInstant();
   }

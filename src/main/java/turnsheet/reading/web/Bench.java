@@ -9,6 +9,7 @@ import turnsheet.reading.CaptureResult;
 import turnsheet.shop.VisitId;
 import turnsheet.shop.VisitSummary;
 import turnsheet.web.Times;
+import turnsheet.web.Wording;
 
 /** Sorts what is on the bench by what it needs. */
 final class Bench {

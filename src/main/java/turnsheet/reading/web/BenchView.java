@@ -16,6 +16,7 @@ import turnsheet.shop.VisitId;
 import turnsheet.shop.VisitSummary;
 import turnsheet.shop.Visits;
 import turnsheet.web.Times;
+import turnsheet.web.Wording;
 
 /** Gathers what the bench page shows: six statements, however full the bench is. */
 @Component

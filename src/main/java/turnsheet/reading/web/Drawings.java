@@ -12,6 +12,7 @@ import turnsheet.reading.SeriesName;
 import turnsheet.reading.chart.Axis;
 import turnsheet.reading.chart.Curve;
 import turnsheet.reading.chart.SvgChart;
+import turnsheet.web.Wording;
 
 /** Draws the curves of one reading. */
 final class Drawings {

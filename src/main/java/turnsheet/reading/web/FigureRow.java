@@ -8,6 +8,7 @@ import turnsheet.core.measure.FigureName;
 import turnsheet.reading.Judged;
 import turnsheet.web.Numbers;
 import turnsheet.web.Shown;
+import turnsheet.web.Wording;
 
 /**
  * One line of a table of figures, ready to be shown.

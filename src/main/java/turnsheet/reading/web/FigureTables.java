@@ -11,6 +11,7 @@ import turnsheet.core.measure.FigureName;
 import turnsheet.core.measure.Reading;
 import turnsheet.reading.Judged;
 import turnsheet.web.Numbers;
+import turnsheet.web.Wording;
 
 /** Lays the figures of one reading out in tables. */
 final class FigureTables {

@@ -16,6 +16,7 @@ import turnsheet.shop.ServiceLimit;
 import turnsheet.shop.SpeedSettingId;
 import turnsheet.web.Numbers;
 import turnsheet.web.Times;
+import turnsheet.web.Wording;
 
 /** One figure of one unit over the years. */
 final class History {

@@ -26,6 +26,7 @@ import turnsheet.shop.ServiceLimit;
 import turnsheet.web.Crumb;
 import turnsheet.web.Numbers;
 import turnsheet.web.Times;
+import turnsheet.web.Wording;
 
 /** Gathers what the page of a reading shows: a dozen statements, whatever the reading. */
 @Component

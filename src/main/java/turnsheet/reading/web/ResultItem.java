@@ -6,6 +6,7 @@ import turnsheet.core.diagnose.Verdict;
 import turnsheet.core.measure.FigureName;
 import turnsheet.reading.CaptureResult;
 import turnsheet.reading.ReadingId;
+import turnsheet.web.Wording;
 
 /**
  * One capture in few words.

@@ -6,6 +6,7 @@ import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.FigureName;
 import turnsheet.reading.Judged;
 import turnsheet.web.Numbers;
+import turnsheet.web.Wording;
 
 /** The answer of a reading in one sentence: how fast, how steady, and whether that will do. */
 final class Sentence {

@@ -24,6 +24,7 @@ import turnsheet.shop.VisitSummary;
 import turnsheet.shop.Visits;
 import turnsheet.web.Crumb;
 import turnsheet.web.Times;
+import turnsheet.web.Wording;
 
 /** Gathers what the page of a visit shows. */
 @Component

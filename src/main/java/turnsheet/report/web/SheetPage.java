@@ -55,7 +55,7 @@ public record SheetPage(
    *
    * @param limit bound with its unit; empty where there is none
    * @param origin of the bound; empty with it
-   * @param change {@code improved}, {@code worse} or {@code same}
+   * @param change one of the words improved, worse, same
    */
   public record Row(
       String name,

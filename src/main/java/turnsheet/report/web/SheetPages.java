@@ -102,7 +102,9 @@ public class SheetPages {
         verdict(c.judgedAfter()),
         limit(words, judged),
         origin(judged),
-        words.numbers().show(c.difference().difference(), c.name().unit(), turnsheet.web.Numbers.Sign.SHOWN),
+        words
+            .numbers()
+            .show(c.difference().difference(), c.name().unit(), turnsheet.web.Numbers.Sign.SHOWN),
         change(c.difference()));
   }
 
@@ -123,8 +125,7 @@ public class SheetPages {
 
   private static SheetPage.SingleRow singleRow(
       Wording words, FigureName name, Figure figure, List<Judged> judged) {
-    Judged here =
-        judged.stream().filter(j -> j.limit().figure() == name).findFirst().orElse(null);
+    Judged here = judged.stream().filter(j -> j.limit().figure() == name).findFirst().orElse(null);
     return new SheetPage.SingleRow(
         words.nameOf(name),
         words.show(name, figure),
@@ -158,9 +159,7 @@ public class SheetPages {
   }
 
   private static String limit(Wording words, @Nullable Judged judged) {
-    return judged == null
-        ? ""
-        : words.limit(judged.limit().figure(), judged.limit().upperBound());
+    return judged == null ? "" : words.limit(judged.limit().figure(), judged.limit().upperBound());
   }
 
   private static String origin(@Nullable Judged judged) {

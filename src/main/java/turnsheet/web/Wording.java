@@ -1,59 +1,57 @@
-package turnsheet.reading.web;
+package turnsheet.web;
 
 import java.util.Locale;
 import org.springframework.context.MessageSource;
 import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.FigureName;
-import turnsheet.web.Numbers;
-import turnsheet.web.Shown;
 
 /** Texts and numbers in the language of one request. */
-final class Wording {
+public final class Wording {
 
   private final MessageSource messages;
   private final Locale locale;
   private final Numbers numbers;
 
-  Wording(MessageSource messages, Locale locale) {
+  public Wording(MessageSource messages, Locale locale) {
     this.messages = messages;
     this.locale = locale;
     this.numbers = Numbers.in(locale);
   }
 
   /** The text of a key; parts are texts already. */
-  String text(String key, String... parts) {
+  public String text(String key, String... parts) {
     return messages.getMessage(key, parts, locale);
   }
 
-  Numbers numbers() {
+  public Numbers numbers() {
     return numbers;
   }
 
-  String nameOf(FigureName figure) {
+  public String nameOf(FigureName figure) {
     return text("figure." + figure.path());
   }
 
-  Shown show(FigureName name, Figure figure) {
+  public Shown show(FigureName name, Figure figure) {
     return numbers.show(figure, name.unit(), signOf(name));
   }
 
   /** The name of a flutter figure as it stands within a sentence. */
-  String inText(FigureName flutter) {
+  public String inText(FigureName flutter) {
     return text("reading.inText." + flutter.path());
   }
 
   /** Bounds hold for the size of a figure: of one that can be negative, on both sides. */
-  String bound(FigureName name, double upperBound) {
+  public String bound(FigureName name, double upperBound) {
     String bound = numbers.plain(upperBound);
     return signOf(name) == Numbers.Sign.SHOWN ? "±\u202f" + bound : bound;
   }
 
   /** A bound with its unit. */
-  String limit(FigureName name, double upperBound) {
+  public String limit(FigureName name, double upperBound) {
     return bound(name, upperBound) + "\u202f" + name.unit();
   }
 
-  static Numbers.Sign signOf(FigureName name) {
+  public static Numbers.Sign signOf(FigureName name) {
     return name == FigureName.DEVIATION || name == FigureName.DRIFT
         ? Numbers.Sign.SHOWN
         : Numbers.Sign.PLAIN;
