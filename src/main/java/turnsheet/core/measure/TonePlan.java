@@ -180,7 +180,8 @@ final class TonePlan {
       NoiseProbe noise,
       long clipped)
       throws RejectedException {
-    List<Stretch> excluded = new ArrayList<>();
+    List<Stretch> ends = RunUp.of(speed, level.dropouts());
+    List<Stretch> excluded = new ArrayList<>(ends);
     List<Reading.Dropout> dropouts = new ArrayList<>();
     for (Stretch s : level.dropouts()) {
       dropouts.add(new Reading.Dropout(s.startSeconds(), s.durationSeconds()));
@@ -215,6 +216,7 @@ final class TonePlan {
                     figures.floorPercent(), "follows from the noise beside the tone")
                 : Figure.absent("no noise was found beside the tone"));
     List<Warning> warnings = new ArrayList<>(reader.warnings());
+    warnings.addAll(RunUp.warnings(ends, speed.startSeconds()));
     warnings.addAll(figures.warnings());
     warnings.addAll(ToneWarnings.of(band, signal));
     return new Result(

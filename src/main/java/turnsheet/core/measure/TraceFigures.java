@@ -97,14 +97,15 @@ final class TraceFigures {
     double slopeU = 60 * own / (0.181 * seconds);
     int ends = (int) (endSeconds() * clean.rateHertz());
     double scatter = residual.blockScatterPercent(ends);
-    int n = clean.trace().length();
+    int first = clean.pieces().get(0).from();
+    int last = clean.pieces().get(clean.pieces().size() - 1).to();
     return new Reading.Speed(
         nominal,
         Figure.of(nominal * (1 + mean / 100), nominal * deviationU / 100),
         Figure.of(mean, deviationU),
         Figure.of(60 * residual.slopePercentPerSecond(), Budget.K * slopeU),
-        atEnd(residual.averagePercent(0, ends), scatter, systematic),
-        atEnd(residual.averagePercent(n - ends, n), scatter, systematic));
+        atEnd(residual.averagePercent(first, Math.min(last, first + ends)), scatter, systematic),
+        atEnd(residual.averagePercent(Math.max(first, last - ends), last), scatter, systematic));
   }
 
   /** How much of the beginning and of the end the start and end deviations are averaged over. */

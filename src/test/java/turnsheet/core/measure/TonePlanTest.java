@@ -157,6 +157,25 @@ class TonePlanTest {
   }
 
   @Test
+  void runUpAndRunDownAreLeftOut() {
+    double rate = 16000;
+    double[] samples = new double[(int) (30 * rate)];
+    double turns = 0;
+    for (int i = 0; i < samples.length; i++) {
+      double t = i / rate;
+      double ends = 1 - 0.6 * Math.exp(-t / 0.25) - 0.6 * Math.exp(-(30 - t) / 0.25);
+      turns += 3150 * 1.003 * (ends + 0.001 * Math.sin(2 * Math.PI * 4 * t)) / rate;
+      samples[i] = 0.5 * Math.sin(2 * Math.PI * turns);
+    }
+    TonePlan.Result result = measure(samples, rate, MeasureSettings.tone(3150));
+    assertThat(result.warnings()).extracting(Warning::code).contains("runUp", "runDown");
+    // the last per mille of the approach remains in the first second
+    assertThat(value(result.figures().speed().deviationPercent())).isCloseTo(0.3, within(0.003));
+    assertThat(value(result.figures().flutter().weightedTwoSigmaPercent()))
+        .isCloseTo(0.0997, within(0.002));
+  }
+
+  @Test
   void clippingAndHumAreTold() {
     double rate = 48000;
     double[] samples = SignalSynth.tone(SpeedFunction.constant(0), 3150, rate, 10, 1.5, 60, 3);
