@@ -24,14 +24,10 @@ final class DataRows implements Closeable {
   private final int secondColumn;
   private final boolean lastMayBeEmpty;
   private final List<Warning> warnings = new ArrayList<>();
-  private final int[] cellStarts;
-  private final int[] cellEnds;
+  private final Cells cells;
   private double first;
   private double second;
   private long emptyCellLine;
-
-  /** cells up to the last that is not empty */
-  private int filled;
 
   /**
    * @param firstColumn index of a column, -1 for none
@@ -56,8 +52,7 @@ final class DataRows implements Closeable {
     this.layout = layout;
     this.firstColumn = firstColumn;
     this.secondColumn = secondColumn;
-    this.cellStarts = new int[layout.columns()];
-    this.cellEnds = new int[layout.columns()];
+    this.cells = new Cells(layout.separator(), layout.columns());
     this.lastMayBeEmpty = layout.rows().get(0).cell(layout.columns() - 1).isBlank();
   }
 
@@ -126,22 +121,22 @@ final class DataRows implements Closeable {
 
   /** True for a row, false for the end of a cut file, null for a row that may be skipped. */
   private @Nullable Boolean read() throws RejectedException {
-    int cells = split();
-    if (filled == 0) {
+    int count = cells.split(lines.bytes(), lines.start(), lines.end());
+    if (cells.areEmpty()) {
       return null;
     }
     if (emptyCellLine > 0) {
       throw notANumber(emptyCellLine, "an empty cell");
     }
     boolean ragged =
-        cells < layout.columns() - (lastMayBeEmpty ? 1 : 0) || cells > layout.columns();
+        count < layout.columns() - (lastMayBeEmpty ? 1 : 0) || count > layout.columns();
     if (ragged) {
       refuse(
           "raggedRow",
           "Line "
               + lines.number()
               + " has "
-              + cells
+              + count
               + " cells, the rows before have "
               + layout.columns()
               + ": correct or remove the line.");
@@ -153,7 +148,7 @@ final class DataRows implements Closeable {
       return true;
     }
     int column = Double.isNaN(first) ? firstColumn : secondColumn;
-    if (cellStarts[column] == cellEnds[column] && lines.terminated()) {
+    if (cells.start(column) == cells.end(column) && lines.terminated()) {
       emptyCellLine = lines.number();
       return null;
     }
@@ -181,85 +176,21 @@ final class DataRows implements Closeable {
   }
 
   private String shown(int column) {
-    int length = Math.min(24, cellEnds[column] - cellStarts[column]);
+    int length = Math.min(24, cells.end(column) - cells.start(column));
     return "\""
-        + new String(lines.bytes(), cellStarts[column], length, StandardCharsets.UTF_8)
+        + new String(lines.bytes(), cells.start(column), length, StandardCharsets.UTF_8)
         + "\"";
   }
 
   private double cell(int column) {
-    return Decimals.parse(lines.bytes(), cellStarts[column], cellEnds[column], layout.mark());
-  }
-
-  /** Marks the cells; how many there are, not counting empty ones beyond the columns. */
-  private int split() {
-    byte[] bytes = lines.bytes();
-    int end = lines.end();
-    filled = 0;
-    int cells =
-        layout.separator() == RowSplitter.BLANKS
-            ? splitAtBlanks(bytes, lines.start(), end)
-            : splitQuoted(bytes, lines.start(), end);
-    for (int cell = cells; cell < cellStarts.length; cell++) {
-      mark(cell, end, end);
-    }
-    return cells;
-  }
-
-  private int splitAtBlanks(byte[] bytes, int from, int end) {
-    int cells = 0;
-    int at = from;
-    while (true) {
-      while (at < end && isBlank(bytes[at])) {
-        at++;
-      }
-      if (at == end) {
-        filled = cells;
-        return cells;
-      }
-      int start = at;
-      while (at < end && !isBlank(bytes[at])) {
-        at++;
-      }
-      mark(cells++, start, at);
-    }
-  }
-
-  private int splitQuoted(byte[] bytes, int from, int end) {
-    byte separator = (byte) layout.separator();
-    int cells = 0;
-    int start = from;
-    boolean quoted = false;
-    for (int at = from; at <= end; at++) {
-      if (at < end && bytes[at] == '"') {
-        quoted = !quoted;
-      } else if (at == end || (bytes[at] == separator && !quoted)) {
-        int ink = start;
-        while (ink < at && isBlank(bytes[ink])) {
-          ink++;
-        }
-        mark(cells++, ink, at);
-        if (ink < at) {
-          filled = cells;
-        }
-        start = at + 1;
-      }
-    }
-    return cells > layout.columns() ? Math.max(filled, layout.columns()) : cells;
-  }
-
-  private void mark(int cell, int start, int end) {
-    if (cell < cellStarts.length) {
-      cellStarts[cell] = start;
-      cellEnds[cell] = end;
-    }
+    return Decimals.parse(lines.bytes(), cells.start(column), cells.end(column), layout.mark());
   }
 
   private boolean isInk() {
     byte[] bytes = lines.bytes();
     int at = lines.start();
     int end = lines.end();
-    while (at < end && (isBlank(bytes[at]) || bytes[at] == 0x1a || bytes[at] == '\f')) {
+    while (at < end && (Cells.isBlank(bytes[at]) || bytes[at] == 0x1a || bytes[at] == '\f')) {
       at++;
     }
     if (at == end) {
@@ -267,9 +198,5 @@ final class DataRows implements Closeable {
     }
     boolean slashes = bytes[at] == '/' && at + 1 < end && bytes[at + 1] == '/';
     return bytes[at] != '#' && bytes[at] != '%' && !slashes;
-  }
-
-  private static boolean isBlank(byte b) {
-    return b == ' ' || b == '\t';
   }
 }

@@ -54,68 +54,22 @@ final class TablePlanner {
           new Warning("decimalComma", "Commas are read as decimal marks: one number per line."));
     }
     Contents chosen = options.contents();
-    return switch (chosen != null ? chosen : contents()) {
+    return switch (chosen != null ? chosen : guessed()) {
       case WAVEFORM -> waveform();
       case EDGE_TIMES -> edges();
       case PERIODS -> periods();
     };
   }
 
-  private Contents contents() throws RejectedException {
+  private Contents guessed() throws RejectedException {
     List<Integer> values = values();
+    ContentsGuess contents = new ContentsGuess(layout, columns, options, stated != null);
     if (numeric.size() == 1 || (time >= 0 && values.isEmpty())) {
-      return contentsOfOne(time >= 0 ? time : numeric.get(0));
+      return contents.ofOne(time >= 0 ? time : numeric.get(0), guesses);
     }
-    boolean named = values.stream().anyMatch(c -> label(c).isPeriod());
-    if (time < 0) {
-      return named ? Contents.PERIODS : Contents.WAVEFORM;
-    }
-    boolean even = TableColumns.isEven(columns.get(time), digits(time));
-    boolean levels = values.stream().anyMatch(c -> columns.get(c).isLevel());
-    int value = channelColumn(values);
-    if (levels && columns.get(value).isLevel()) {
-      boolean edges = !even || columns.get(value).alternates();
-      if (edges && options.sampleStepSeconds() == null) {
-        guess(
-            "contents",
-            "edge times with levels: column "
-                + (value + 1)
-                + " holds only 0 and 1 at uneven times"
-                + (columns.get(time).value(0) == 0
-                    ? "; the first row, at time 0, is the level before the first edge"
-                    : ""));
-        return Contents.EDGE_TIMES;
-      }
-    } else if (!even && named && !label(time).isTime()) {
-      return Contents.PERIODS;
-    }
-    if (!label(time).isTime()) {
-      guess("contents", "waveform: the first column rises evenly, so it is taken as time");
-    }
-    return Contents.WAVEFORM;
-  }
-
-  private Contents contentsOfOne(int column) throws RejectedException {
-    Column numbers = columns.get(column);
-    ColumnLabel label = label(column);
-    if (label.isPeriod()) {
-      return Contents.PERIODS;
-    }
-    boolean namedTime = label.isTime() && numbers.mostlyRises();
-    if (!namedTime && (stated != null || options.sampleStepSeconds() != null)) {
-      return Contents.WAVEFORM;
-    }
-    if (numbers.mostlyRises()) {
-      if (!label.isTime()) {
-        guess("contents", "times of rising edges: the numbers grow from row to row");
-      }
-      return Contents.EDGE_TIMES;
-    }
-    if (numbers.isPositive() && !label.isOtherQuantity()) {
-      guess("contents", "periods: positive numbers that go up and down");
-      return Contents.PERIODS;
-    }
-    return Contents.WAVEFORM;
+    return time < 0
+        ? contents.withoutTimes(values)
+        : contents.withTimes(time, values, channelColumn(values), guesses);
   }
 
   private TablePlan waveform() throws RejectedException {
