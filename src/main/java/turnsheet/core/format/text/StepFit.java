@@ -45,6 +45,9 @@ record StepFit(double step, double rate, double relativeUncertainty) {
 
   /** 50000 of 2e-5: the reciprocal of the decimal that a double is printed as. */
   static double reciprocal(double value) {
+    if (value == 0 || !Double.isFinite(value)) {
+      return 1 / value;
+    }
     return BigDecimal.ONE
         .divide(BigDecimal.valueOf(value), new MathContext(30, RoundingMode.HALF_EVEN))
         .doubleValue();

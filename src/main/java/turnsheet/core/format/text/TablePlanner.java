@@ -19,6 +19,11 @@ final class TablePlanner {
   /** Printed times that leave the step this uncertain would show in a speed. */
   private static final double COARSE = 2e-5;
 
+  /** Beyond these a unit is wrong: a row in thirty years, a row in a picosecond. */
+  private static final double MIN_RATE_HERTZ = 1e-9;
+
+  private static final double MAX_RATE_HERTZ = 1e12;
+
   private final Layout layout;
   private final ReadOptions options;
   private final List<Column> columns;
@@ -96,7 +101,7 @@ final class TablePlanner {
     } else {
       throw sampleStepNeeded(values);
     }
-    return result(Contents.WAVEFORM, -1, value, new TickScale(1), 0, rate, values);
+    return result(Contents.WAVEFORM, -1, value, new TickScale(1), 0, plausible(rate), values);
   }
 
   private TablePlan timedWaveform(List<Integer> values, int value) throws RejectedException {
@@ -126,7 +131,19 @@ final class TablePlanner {
                   + Math.round(fit.relativeUncertainty() * 1e6)
                   + " ppm: export more digits or state the sampling step."));
     }
-    return result(Contents.WAVEFORM, time, value, scale, step, scale.hertz(fit.rate()), values);
+    return result(
+        Contents.WAVEFORM, time, value, scale, step, plausible(scale.hertz(fit.rate())), values);
+  }
+
+  private static double plausible(double rateHertz) throws RejectedException {
+    if (!(rateHertz >= MIN_RATE_HERTZ && rateHertz <= MAX_RATE_HERTZ)) {
+      throw new RejectedException(
+          "noSampleRate",
+          "The rows would be "
+              + (float) rateHertz
+              + " per second: state the unit of the times or the sampling step.");
+    }
+    return rateHertz;
   }
 
   private TablePlan edges() throws RejectedException {

@@ -283,6 +283,15 @@ class TableFormatTest {
   }
 
   @Test
+  void refusesARateThatNoRecorderHas() {
+    var source = TextSources.of("time,v\n" + waveform(",", ".", "\n"));
+    ReadOptions options = new ReadOptions(null, null, 1e-9, null);
+    assertThat(ReadBack.refused(source, options).code()).isEqualTo("noSampleRate");
+    ReadOptions step = new ReadOptions(null, null, null, Double.MIN_VALUE);
+    assertThat(ReadBack.refused(source, step).code()).isEqualTo("noSampleRate");
+  }
+
+  @Test
   void takesAColumnThatCountsAsNoTime() {
     String text = "Sample,CH1\n0,5\n1,4\n2,3\n3,-2\n4,1\n5,2\n6,3\n7,4\n";
     assertThat(ReadBack.refused(text).code()).isEqualTo("sampleStepNeeded");
