@@ -25,11 +25,18 @@ export const limits = {
         if (limit.value < y.min || limit.value > y.max) continue;
         const level = y.getPixelForValue(limit.value);
         ctx.setLineDash([10, 4]);
+        ctx.lineWidth = 1.3;
         ctx.beginPath();
         ctx.moveTo(area.left, level);
         ctx.lineTo(area.right, level);
         ctx.stroke();
-        ctx.fillText(limit.name, area.right - 4, level < area.top + 16 ? level + 13 : level - 4);
+        const foot = level < area.top + 16 ? level + 13 : level - 4;
+        ctx.setLineDash([]);
+        const wide = ctx.measureText(limit.name).width;
+        ctx.fillStyle = chart.$theme.sheet;
+        ctx.fillRect(area.right - 7 - wide, foot - 11, wide + 6, 14);
+        ctx.fillStyle = chart.$theme.signal;
+        ctx.fillText(limit.name, area.right - 4, foot);
       }
     });
   },

@@ -182,7 +182,7 @@ class Plot {
       min: range.from,
       max: range.to,
       title: { display: true, text: this.titles[axis], color: look.faint, font: { family: look.font } },
-      ticks: { color: look.faint, font: { family: look.font }, maxRotation: 0, includeBounds: false, autoSkipPadding: 14 },
+      ticks: { color: look.faint, font: { family: look.font }, maxRotation: 0, includeBounds: false, format: { useGrouping: false }, autoSkipPadding: 14 },
       grid: { display: grid, color: look.rule },
       border: { color: look.faint },
     };

@@ -28,6 +28,21 @@ final class Svg {
         .formatted(look, number(x), number(y), anchor, escape(words));
   }
 
+  /** A light stroke under a line, so that it is seen across a dark curve. */
+  static String ground(String path) {
+    return ("<path class=\"drawn-ground\" d=\"%s\" fill=\"none\" stroke=\"white\""
+            + " stroke-width=\"3.5\"/>")
+        .formatted(path);
+  }
+
+  /** Words that end at a place, on a light ground of about their length. */
+  static String grounded(String look, double x, double y, double length, String words) {
+    return ("<rect class=\"drawn-ground\" x=\"%s\" y=\"%s\" width=\"%s\" height=\"15\""
+                + " fill=\"white\"/>")
+            .formatted(number(x - length), number(y - 11.5), number(length + 4))
+        + words(look, x, y, "end", words);
+  }
+
   /** Words from bottom to top, centred. */
   static String upright(double x, double y, String words) {
     return ("<text class=\"drawn-name\" x=\"%1$s\" y=\"%2$s\" text-anchor=\"middle\""

@@ -109,9 +109,10 @@ public final class SvgChart {
           () -> {
             double level = top(value);
             double words = level < frameTop() + 16 ? level + 13 : level - 4;
-            return Svg.path(
-                    "drawn-limit", "M%d %sH%d".formatted(LEFT, n(level), RIGHT), 1.2, "10 4")
-                + Svg.words("drawn-limit", RIGHT - 4, words, "end", name);
+            String line = "M%d %sH%d".formatted(LEFT, n(level), RIGHT);
+            return Svg.ground(line)
+                + Svg.path("drawn-limit", line, 1.2, "10 4")
+                + Svg.grounded("drawn-limit", RIGHT - 4, words, name.length() * LETTER, name);
           });
     }
     return this;

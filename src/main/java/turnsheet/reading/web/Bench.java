@@ -51,14 +51,15 @@ final class Bench {
     return Standing.latest(captures).stream().anyMatch(c -> standing.worst(c) == Verdict.OUTSIDE);
   }
 
-  /** Measured after repair, nothing outside, and nothing still on its way. */
+  /** Last measured after the work at every speed setting, nothing outside, nothing on its way. */
   boolean isReady(List<CaptureResult> captures) {
     return !isOutside(captures)
         && captures.stream()
             .noneMatch(
                 c -> c.state() == CaptureState.RECOGNISED || c.state() == CaptureState.QUEUED)
+        && !Standing.latest(captures).isEmpty()
         && Standing.latest(captures).stream()
-            .anyMatch(c -> c.condition().equals(CaptureKey.AFTER_REPAIR));
+            .noneMatch(c -> c.condition().equals(CaptureKey.AS_RECEIVED));
   }
 
   private List<CaptureResult> captures(VisitSummary stay) {

@@ -46,6 +46,7 @@ class BenchView {
     Bench bench = new Bench(stays, byVisit, standing, words, times);
     List<BenchPage.Recording> waiting = bench.recordings(CaptureState.RECOGNISED);
     List<BenchPage.Recording> measuring = bench.recordings(CaptureState.QUEUED);
+    List<BenchPage.Recording> refused = bench.recordings(CaptureState.REFUSED, CaptureState.FAILED);
     List<BenchPage.Stay> outside = bench.stays(Bench::isOutside);
     List<BenchPage.Stay> ready = bench.stays(Bench::isReady);
     return new BenchPage(
@@ -54,12 +55,13 @@ class BenchView {
             Integer.toString(stays.size()),
             Integer.toString(waiting.size()),
             Integer.toString(measuring.size()),
+            Integer.toString(refused.size()),
             Integer.toString(outside.size()),
             Integer.toString(ready.size())),
         start(),
         waiting,
         measuring,
-        bench.recordings(CaptureState.REFUSED, CaptureState.FAILED),
+        refused,
         outside,
         ready,
         bench.stays((b, captures) -> true));

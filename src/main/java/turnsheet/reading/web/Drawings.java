@@ -4,6 +4,8 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.OptionalDouble;
+import java.util.stream.DoubleStream;
+import java.util.stream.Stream;
 import turnsheet.core.measure.Reading;
 import turnsheet.core.measure.Series;
 import turnsheet.document.CoreJson;
@@ -40,20 +42,14 @@ final class Drawings {
   Drawn trace(Curve whole, OptionalDouble deviationLimit) {
     Curve curve = whole.reducedTo(POINTS);
     Axis own = Axis.around("", "%", extremes(curve));
-    double reach = 2 * Math.max(Math.abs(own.from()), Math.abs(own.to()));
-    List<Level> levels = new ArrayList<>();
-    Axis y = percent("reading.chart.speed", own.from(), own.to());
-    if (deviationLimit.isPresent() && deviationLimit.getAsDouble() <= reach) {
-      double bound = deviationLimit.getAsDouble();
-      String shown = words.numbers().plain(bound) + "\u202f%";
-      levels.add(new Level(bound, words.text("reading.chart.limit", "+" + shown)));
-      levels.add(new Level(-bound, words.text("reading.chart.limit", "\u2212" + shown)));
-      y =
-          percent(
-              "reading.chart.speed",
-              Math.min(own.from(), -1.08 * bound),
-              Math.max(own.to(), 1.08 * bound));
-    }
+    List<Level> levels = levels(own, deviationLimit);
+    double[] bounds = levels.stream().mapToDouble(Level::value).toArray();
+    double air = 0.08 * (own.to() - own.from());
+    Axis y =
+        percent(
+            "reading.chart.speed",
+            Math.min(own.from(), DoubleStream.of(bounds).min().orElse(own.from()) - air),
+            Math.max(own.to(), DoubleStream.of(bounds).max().orElse(own.to()) + air));
     Axis x =
         Axis.linear(
             words.text("reading.chart.time"),
@@ -67,9 +63,10 @@ final class Drawings {
             HEIGHT,
             words.text("reading.chart.trace.title"),
             words.text("reading.chart.trace.more", n(x.to(), 1), n(own.from(), 3), n(own.to(), 3)));
+    chart.curve(curve);
     levels.forEach(level -> chart.limit(level.value(), level.name()));
     return new Drawn(
-        chart.curve(curve).toSvg(),
+        chart.toSvg(),
         source(SeriesName.TRACE),
         x.title(),
         y.title(),
@@ -161,6 +158,20 @@ final class Drawings {
         "{}",
         columns("reading.chart.period.us", "reading.chart.count"),
         rows);
+  }
+
+  /** The bounds that lie in the drawing or less than its height away. */
+  private List<Level> levels(Axis own, OptionalDouble limit) {
+    if (limit.isEmpty()) {
+      return List.of();
+    }
+    double reach = own.to() - own.from();
+    String shown = words.numbers().plain(limit.getAsDouble()) + "\u202f%";
+    return Stream.of(
+            new Level(limit.getAsDouble(), words.text("reading.chart.limit", "+" + shown)),
+            new Level(-limit.getAsDouble(), words.text("reading.chart.limit", "\u2212" + shown)))
+        .filter(l -> l.value() < own.to() + reach && l.value() > own.from() - reach)
+        .toList();
   }
 
   private List<Flag> flags(List<Reading.Line> lines, Axis x) {

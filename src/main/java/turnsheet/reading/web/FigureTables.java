@@ -30,7 +30,25 @@ final class FigureTables {
         judged.stream().collect(Collectors.toMap(j -> j.limit().figure(), Function.identity()));
   }
 
-  List<FigureRow> speed() {
+  List<ReadingPage.Group> main() {
+    return List.of(group("reading.page.speed", speed()), group("reading.page.flutter", flutter()));
+  }
+
+  /** Nothing for a tone. */
+  List<ReadingPage.Group> periods() {
+    List<FigureRow> rows = edges();
+    return rows.isEmpty() ? List.of() : List.of(group("reading.page.periods", rows));
+  }
+
+  List<ReadingPage.Group> recording() {
+    return List.of(group("reading.page.recording", signal()));
+  }
+
+  private ReadingPage.Group group(String key, List<FigureRow> rows) {
+    return new ReadingPage.Group(words.text(key), rows);
+  }
+
+  private List<FigureRow> speed() {
     Reading.Speed speed = reading.speed();
     return List.of(
         row(FigureName.DEVIATION),
@@ -40,7 +58,7 @@ final class FigureTables {
         plain("reading.figure.endDeviation", speed.endDeviationPercent(), "%", SIGNED));
   }
 
-  List<FigureRow> flutter() {
+  private List<FigureRow> flutter() {
     List<FigureRow> rows = new ArrayList<>();
     rows.add(row(FigureName.WEIGHTED_TWO_SIGMA));
     rows.add(row(FigureName.WEIGHTED_QUASI_PEAK));
@@ -60,7 +78,7 @@ final class FigureTables {
     return rows;
   }
 
-  List<FigureRow> edges() {
+  private List<FigureRow> edges() {
     Reading.Edges edges = reading.edges();
     if (edges == null) {
       return List.of();
@@ -77,7 +95,7 @@ final class FigureTables {
     return rows;
   }
 
-  List<FigureRow> signal() {
+  private List<FigureRow> signal() {
     return List.of(
         plain("reading.figure.snr", reading.signal().snrDb(), "dB", PLAIN),
         plain("reading.figure.floor", reading.signal().floorPercent(), "%", PLAIN));

@@ -8,6 +8,7 @@ import turnsheet.web.Shown;
 /**
  * One reading as its page shows it.
  *
+ * @param running what each printed sheet carries at its foot
  * @param histogram null for a tone
  * @param edges empty for a tone
  * @param others earlier or later readings of the same capture
@@ -18,10 +19,10 @@ record ReadingPage(
     List<Crumb> trail,
     String title,
     String sentence,
-    List<FigureRow> speed,
-    List<FigureRow> flutter,
-    List<FigureRow> edges,
-    List<FigureRow> signal,
+    String running,
+    List<Group> figures,
+    List<Group> edges,
+    List<Group> signal,
     String rule,
     @Nullable Drawn trace,
     @Nullable Drawn spectrum,
@@ -34,6 +35,9 @@ record ReadingPage(
     List<Fact> source,
     List<Fact> method,
     List<Other> others) {
+
+  /** Figures that belong together. */
+  record Group(String title, List<FigureRow> rows) {}
 
   /**
    * One line of the spectrum.

@@ -69,10 +69,15 @@ class ReadingView {
         trail(place, words),
         words.text("reading.page.title", place.settingLabel(), place.condition()),
         new Sentence(words).of(name -> name.of(reading), judged),
-        tables.speed(),
-        tables.flutter(),
-        tables.edges(),
-        tables.signal(),
+        words.text(
+            "reading.page.running",
+            place.modelName() + " " + place.serialNumber(),
+            place.fileName(),
+            times.minute(stored.madeAt()),
+            stored.id().toString()),
+        tables.main(),
+        tables.periods(),
+        tables.recording(),
         Verdicts.ruleSentence(),
         readings
             .curve(stored.id(), SeriesName.TRACE)
@@ -150,7 +155,7 @@ class ReadingView {
             .map(
                 s ->
                     new ReadingPage.StabilityRow(
-                        words.numbers().plain(s.tauSeconds()),
+                        words.numbers().show(s.tauSeconds(), null, "", PLAIN).value(),
                         words.numbers().show(s.allanDeviation(), "", PLAIN)))
             .toList();
   }

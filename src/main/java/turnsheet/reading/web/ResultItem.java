@@ -46,7 +46,7 @@ record ResultItem(
         result.fileName(),
         shortText(words, FigureName.DEVIATION, result),
         shortText(words, steady, result),
-        reading == null ? "" : words.nameOf(steady),
+        reading == null ? "" : words.inText(steady),
         worst == null ? null : FigureRow.word(worst),
         Math.round(100 * result.progress()),
         unusable && refusal != null ? refusal : "");

@@ -43,7 +43,7 @@ record UnitPage(
       String closed,
       String complaint,
       String workDone,
-      List<ResultItem> latest) {}
+      List<BenchPage.Latest> latest) {}
 
   record Choice(String value, String text, boolean chosen) {}
 

@@ -117,7 +117,12 @@ class UnitView {
                     visit.complaint(),
                     visit.workDone(),
                     Standing.latest(byVisit.getOrDefault(visit.id(), List.of())).stream()
-                        .map(r -> ResultItem.of(r, standing, words))
+                        .map(
+                            r ->
+                                new BenchPage.Latest(
+                                    r.settingLabel(),
+                                    r.condition(),
+                                    ResultItem.of(r, standing, words)))
                         .toList()))
         .toList();
   }
