@@ -107,9 +107,19 @@ class UnitsTest {
   @Test
   void findsAPageAmongAThousandUnits() {
     Unit first = shop.unit("0000");
+    StringBuilder rows = new StringBuilder();
     for (int i = 1; i < 1000; i++) {
-      units.add(first.modelId(), first.customerId(), String.format("%04d", i), "");
+      rows.append(i == 1 ? "" : ", ")
+          .append(
+              "('%s', '%s', '%s', '%04d', '', timestamp with time zone '2026-01-01 12:00:00Z')"
+                  .formatted(UnitId.next(), first.modelId(), first.customerId(), i));
     }
+    database
+        .jdbc()
+        .sql(
+            "insert into unit (id, model_id, customer_id, serial_number, note, created_at) values "
+                + rows)
+        .update();
     PageOf<UnitSummary> page = units.page(new PageQuery("", 20, 50));
     assertThat(page.items()).hasSize(50);
     assertThat(page.total()).isEqualTo(1000);

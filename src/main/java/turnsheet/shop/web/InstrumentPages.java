@@ -5,6 +5,7 @@ import java.util.Objects;
 import java.util.Optional;
 import java.util.UUID;
 import java.util.function.UnaryOperator;
+import org.jspecify.annotations.Nullable;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
 import org.springframework.validation.BindingResult;
@@ -18,6 +19,7 @@ import turnsheet.shop.Instruments;
 import turnsheet.shop.Media;
 import turnsheet.shop.RefusedChangeException;
 import turnsheet.web.NotFoundException;
+import turnsheet.web.Shown;
 
 /** What records and what is played: the list of both, and entering instruments. */
 @Controller
@@ -92,16 +94,20 @@ class InstrumentPages {
         .orElseThrow(() -> new NotFoundException("instrument"));
   }
 
-  /** A line of the list; empty where a number is unknown. */
+  /** A line of the list; no uncertainty and an empty day where they are unknown. */
   record InstrumentRow(
-      String id, String name, String clockErrorPpm, String uncertaintyPpm, String checkedOn) {
+      String id,
+      String name,
+      Shown clockErrorPpm,
+      @Nullable Shown uncertaintyPpm,
+      String checkedOn) {
 
     static InstrumentRow of(BenchInstrument instrument) {
       return new InstrumentRow(
           instrument.id().toString(),
           instrument.name(),
-          Typed.number(instrument.clockErrorPpm()).replace('-', '\u2212'),
-          Typed.number(instrument.clockExpandedUncertaintyPpm()),
+          Typed.cell(instrument.clockErrorPpm()),
+          Typed.cellOrNone(instrument.clockExpandedUncertaintyPpm()),
           Objects.toString(instrument.checkedOn(), ""));
     }
   }

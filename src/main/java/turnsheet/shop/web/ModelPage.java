@@ -2,6 +2,7 @@ package turnsheet.shop.web;
 
 import java.util.List;
 import org.jspecify.annotations.Nullable;
+import turnsheet.web.Shown;
 
 /**
  * A machine model as its page shows it; every number is text already.
@@ -42,7 +43,7 @@ record ModelPage(
       String setting,
       String figure,
       String figurePath,
-      String bound,
+      Shown bound,
       String unit,
       String origin) {}
 }

@@ -120,7 +120,7 @@ class ModelScreen {
         model.setting(limit.settingId()).map(SpeedSetting::label).orElseThrow(),
         limit.figure().name(),
         limit.figure().path(),
-        SpeedText.digits(limit.upperBound()),
+        Typed.cell(limit.upperBound()),
         limit.figure().unit(),
         limit.origin());
   }

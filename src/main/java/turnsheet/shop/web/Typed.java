@@ -6,6 +6,7 @@ import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import org.jspecify.annotations.Nullable;
 import org.springframework.validation.Errors;
+import turnsheet.web.Shown;
 
 /**
  * What people type into fields. Numbers have a decimal point, or are vulgar fractions as the trade
@@ -32,6 +33,22 @@ final class Typed {
     BigDecimal digits = BigDecimal.valueOf(value).stripTrailingZeros();
     return (digits.scale() < 0 ? digits.setScale(0, RoundingMode.UNNECESSARY) : digits)
         .toPlainString();
+  }
+
+  /** As a cell of a table, every digit that matters, cut at the point for the column. */
+  static Shown cell(double value) {
+    String digits = number(value).replace('-', '\u2212');
+    int at = digits.indexOf('.');
+    return new Shown(
+        at < 0 ? digits : digits.substring(0, at),
+        at < 0 ? "" : digits.substring(at),
+        "",
+        "",
+        null);
+  }
+
+  static @Nullable Shown cellOrNone(@Nullable Double value) {
+    return value == null ? null : cell(value);
   }
 
   static String number(@Nullable Integer value) {

@@ -71,7 +71,8 @@ class VisitPages {
   }
 
   /**
-   * @param verb what the pressed button says: {@code save}, {@code close} or {@code reopen}
+   * @param verb what the pressed button says: {@code save}, {@code close}, {@code reopen}, or
+   *     {@code reopenAndSave} for what was typed while somebody else closed the visit
    */
   @PostMapping("/visits/{id}/edit")
   String change(
@@ -91,12 +92,17 @@ class VisitPages {
         refusals.show(e, errors, null);
       }
     }
+    model.addAttribute("typed", true);
     return editPage(visit(id), model);
   }
 
   private void change(VisitId id, String verb, VisitForm form) {
     switch (verb) {
       case "reopen" -> visits.reopen(id);
+      case "reopenAndSave" -> {
+        visits.reopen(id);
+        visits.recordWork(id, form.complaint(), form.workDone());
+      }
       case "close" -> {
         visits.recordWork(id, form.complaint(), form.workDone());
         visits.close(id);

@@ -27,6 +27,13 @@ final class Browser {
     return result.getResponse().getContentAsString();
   }
 
+  /**
+   * What is read on the page: its text without tags, so that a number cut in two is whole again.
+   */
+  String text(String address) throws Exception {
+    return read(address).replaceAll("<[^>]*>", "");
+  }
+
   /** Sends a form; fields are name, value, name, value. */
   MvcTestResult send(String address, String... fields) {
     var request = mvc.post().uri(encoded(address)).with(csrf());
@@ -53,6 +60,6 @@ final class Browser {
   }
 
   private static URI encoded(String address) {
-    return URI.create(address.replace(' ', '+'));
+    return URI.create(address.replace(" ", "%20"));
   }
 }
