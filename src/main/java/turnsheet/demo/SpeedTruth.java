@@ -15,7 +15,8 @@ import turnsheet.core.synth.SpeedFunction;
 record SpeedTruth(
     double deviationPercent, double weightedTwoSigmaPercent, double unweightedRmsPercent) {
 
-  private static final double RATE_HERTZ = 2000;
+  /** No line of any sample is in step with this rate, so its phases are passed through evenly. */
+  private static final double RATE_HERTZ = 1000 * Math.PI;
 
   /**
    * Lines of unrelated rates take every relative phase in this time, so the start does not count.

@@ -14,8 +14,7 @@ import tools.jackson.databind.JsonNode;
 class KilledServiceIT {
 
   private static final Duration START = Duration.ofSeconds(90);
-  private static final Pattern OWNER =
-      Pattern.compile("Set up the owner's account: (http\\S+)");
+  private static final Pattern OWNER = Pattern.compile("Set up the owner's account: (http\\S+)");
   private static final Pattern READY = Pattern.compile("Started Turnsheet");
 
   /** Long enough that its measurement is under way when the first look at its job comes back. */

@@ -80,13 +80,11 @@ final class RestVisitor {
   }
 
   JsonNode upload(String path, BodyPublisher body) throws IOException, InterruptedException {
-    return send(
-        request(path).header("Content-Type", "application/octet-stream").POST(body), 201);
+    return send(request(path).header("Content-Type", "application/octet-stream").POST(body), 201);
   }
 
   private HttpRequest.Builder request(String path) {
-    return HttpRequest.newBuilder(URI.create(base + path))
-        .header("Authorization", "Bearer " + key);
+    return HttpRequest.newBuilder(URI.create(base + path)).header("Authorization", "Bearer " + key);
   }
 
   private JsonNode send(HttpRequest.Builder request, int status)
