@@ -7,10 +7,13 @@ import java.time.Duration;
 import java.util.List;
 import java.util.Map;
 import java.util.concurrent.TimeUnit;
+import java.util.logging.Level;
 import org.openqa.selenium.Dimension;
 import org.openqa.selenium.chrome.ChromeDriver;
 import org.openqa.selenium.chrome.ChromeDriverService;
 import org.openqa.selenium.chrome.ChromeOptions;
+import org.openqa.selenium.logging.LogType;
+import org.openqa.selenium.logging.LoggingPreferences;
 
 /**
  * A real Chromium for the browser tests: the one on the machine, or on Debian the one that apt
@@ -57,6 +60,9 @@ final class Chromium {
         "--user-data-dir=" + Files.createTempDirectory("turnsheet-chromium"));
     options.setExperimentalOption(
         "prefs", Map.of("download.default_directory", System.getProperty("java.io.tmpdir")));
+    LoggingPreferences console = new LoggingPreferences();
+    console.enable(LogType.BROWSER, Level.ALL);
+    options.setCapability(ChromeOptions.LOGGING_PREFS, console);
     ChromeDriver chrome =
         new ChromeDriver(
             new ChromeDriverService.Builder()

@@ -20,6 +20,7 @@ public final class RunningService implements AutoCloseable {
   private final Process process;
   private final int port;
   private final List<String> lines = new ArrayList<>();
+  private volatile boolean ending;
 
   private RunningService(Process process, int port) {
     this.process = process;
@@ -79,6 +80,7 @@ public final class RunningService implements AutoCloseable {
 
   /** Ends the process as a power cut would. */
   public void kill() throws InterruptedException {
+    ending = true;
     process.toHandle().destroyForcibly();
     process.waitFor();
   }
@@ -86,6 +88,7 @@ public final class RunningService implements AutoCloseable {
   /** Asks the process to end and waits; ends it by force where it does not. */
   @Override
   public void close() {
+    ending = true;
     process.destroy();
     if (process.onExit().completeOnTimeout(process, 10, TimeUnit.SECONDS).join().isAlive()) {
       process.toHandle().destroyForcibly();
@@ -103,7 +106,7 @@ public final class RunningService implements AutoCloseable {
         }
       }
     } catch (IOException e) {
-      if (process.isAlive()) {
+      if (!ending) {
         throw new UncheckedIOException(e);
       }
     }

@@ -1,0 +1,137 @@
+package turnsheet.browser;
+
+import static org.assertj.core.api.Assertions.assertThat;
+
+import java.nio.file.Path;
+import java.time.Duration;
+import java.util.ArrayDeque;
+import java.util.ArrayList;
+import java.util.HashMap;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Set;
+import java.util.regex.Pattern;
+import org.junit.jupiter.api.AfterAll;
+import org.junit.jupiter.api.BeforeAll;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.TestInstance;
+import org.junit.jupiter.api.io.TempDir;
+import turnsheet.jar.RunningService;
+
+/** Every page of the demo, one address of each shape, on a desktop and on a phone. */
+@TestInstance(TestInstance.Lifecycle.PER_CLASS)
+class AccessibilityIT {
+
+  private static final Pattern ADDRESS = Pattern.compile("Open the demo: (\\S+)");
+  private static final Pattern ID =
+      Pattern.compile("[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}|(?<=/)\\d+(?=/|$)");
+
+  /** Files rather than pages. */
+  private static final Pattern FILE =
+      Pattern.compile("/api/|\\.(csv|json|wav|yaml)$|/file$|/progress$|/webjars/");
+
+  /** Pages that look different from one recording or unit to the next. */
+  private static final Map<String, Integer> SEVERAL =
+      Map.of("/readings/{id}", 4, "/captures/{id}", 3, "/visits/{id}", 2, "/visits/{id}/sheet", 2);
+
+  private static final String LINKS =
+      "return [...document.querySelectorAll('a[href]')].map((a) => a.href.split('#')[0])";
+
+  private RunningService service;
+  private Visitor visitor;
+  private Audit audit;
+  private String linksPage = "";
+
+  @BeforeAll
+  void start(@TempDir Path folder) throws Exception {
+    service = RunningService.start("demo", folder);
+    visitor = new Visitor(1280, 900);
+    audit = new Audit(visitor);
+  }
+
+  @AfterAll
+  void stop() {
+    visitor.close();
+    service.close();
+  }
+
+  @Test
+  void everyPageOfTheDemoHolds() throws Exception {
+    String door = service.printed(ADDRESS, Duration.ofMinutes(3));
+    var wrong = new ArrayList<String>();
+
+    visitor.open(service.address("/sign-in"));
+    wrong.addAll(audit.of("/sign-in", 200));
+    visitor.open(door);
+    wrong.addAll(audit.of("/enter", 200));
+    visitor.pressButton("Sign in");
+    Set<String> shapes = crawl(wrong);
+    visitor.open(service.address("/no-such-page"));
+    wrong.addAll(audit.of("/no-such-page", 404));
+    wrong.addAll(sharing(shapes));
+
+    System.out.println("Pages looked at: " + String.join(" ", shapes));
+    assertThat(shapes)
+        .contains("/", "/units/{id}", "/visits/{id}", "/readings/{id}", "/models/{id}", "/shop");
+    assertThat(wrong).as(String.join("\n", wrong)).isEmpty();
+  }
+
+  private Set<String> crawl(List<String> wrong) {
+    var seen = new HashMap<String, Integer>();
+    var queued = new HashSet<String>();
+    var queue = new ArrayDeque<String>();
+    queue.add(service.address("/"));
+    while (!queue.isEmpty()) {
+      String address = queue.poll();
+      String shape = shape(address);
+      if (seen.getOrDefault(shape, 0) >= SEVERAL.getOrDefault(shape, 1)) {
+        continue;
+      }
+      seen.merge(shape, 1, Integer::sum);
+      visitor.open(address);
+      wrong.addAll(audit.of(shape, 200));
+      for (Object link : (List<?>) visitor.script(LINKS)) {
+        String next = String.valueOf(link);
+        if (next.startsWith(service.address("/"))
+            && !FILE.matcher(path(next)).find()
+            && queued.add(next)) {
+          queue.add(next);
+        }
+      }
+    }
+    return seen.keySet();
+  }
+
+  /** The customer's page, and what is left of it when the link is withdrawn. */
+  private List<String> sharing(Set<String> shapes) {
+    assertThat(shapes).contains("/visits/{id}/links");
+    var wrong = new ArrayList<String>();
+    visitor.open(service.address(linksPage));
+    visitor.pressButton("Make a link");
+    wrong.addAll(audit.of("/visits/{id}/links with a new link", 200));
+    String shared = visitor.find("#address").getDomProperty("value");
+    visitor.open(shared);
+    wrong.addAll(audit.of("/s/{token}", 200));
+    visitor.open(service.address("/s/none"));
+    wrong.addAll(audit.of("/s/none", 404));
+    return wrong;
+  }
+
+  private String shape(String address) {
+    String path = path(address);
+    String shape =
+        ID.matcher(path)
+            .replaceAll("{id}")
+            .replaceAll("/limits/\\{id}/[^/]+", "/limits/{id}/{figure}");
+    if (shape.equals("/visits/{id}/links")) {
+      linksPage = path;
+    }
+    String query = address.contains("?") ? address.substring(address.indexOf('?')) : "";
+    return shape + query.replaceAll("=[^&]*", "=");
+  }
+
+  private String path(String address) {
+    return address.substring(service.address("").length()).replaceAll("\\?.*", "");
+  }
+}
