@@ -221,7 +221,7 @@ class MainPathIT {
   }
 
   private WebElement cell(String condition) {
-    return visitor.find("td[data-condition='" + condition + "']");
+    return visitor.find("td[data-label='" + condition + "']");
   }
 
   /** The form of a cell that holds a recording already is folded away. */

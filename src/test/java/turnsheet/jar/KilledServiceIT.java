@@ -47,7 +47,7 @@ class KilledServiceIT {
       JsonNode readings = visitor.get("/api/v1/captures/" + capture + "/readings");
       assertThat(readings.size()).as("one reading, not two").isEqualTo(1);
       // the tone is exact; what is left is the rounding of single-precision traces
-      JsonNode reading = visitor.get("/api/v1/readings/" + id(readings.get(0)));
+      JsonNode reading = visitor.get("/api/v1/readings/" + readings.at("/0/readingId").asString());
       assertThat(reading.at("/speed/deviationPercent/value").asDouble()).isCloseTo(0, within(1e-5));
     }
   }
