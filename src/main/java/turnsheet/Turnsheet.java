@@ -1,6 +1,7 @@
 package turnsheet;
 
 import java.io.IOException;
+import java.net.URL;
 import java.util.Arrays;
 import org.springframework.boot.SpringApplication;
 import org.springframework.boot.SpringBootConfiguration;
@@ -9,6 +10,7 @@ import org.springframework.context.ConfigurableApplicationContext;
 import org.springframework.context.annotation.ComponentScan;
 import org.springframework.context.annotation.Import;
 import turnsheet.cli.MeasureCommand;
+import turnsheet.demo.Demo;
 import turnsheet.demo.SampleFolder;
 
 /** Starts what the command line asks for. */
@@ -19,7 +21,6 @@ import turnsheet.demo.SampleFolder;
 @ComponentScan({
   "turnsheet.access",
   "turnsheet.capture",
-  "turnsheet.demo",
   "turnsheet.job",
   "turnsheet.reading",
   "turnsheet.report",
@@ -28,6 +29,8 @@ import turnsheet.demo.SampleFolder;
   "turnsheet.web"
 })
 public class Turnsheet {
+
+  private static final String PREPARED = "spring.aot.enabled";
 
   /**
    * {@code measure} works on one file and {@code samples} writes the sample folder; both come first
@@ -40,16 +43,33 @@ public class Turnsheet {
     switch (first) {
       case "measure" -> System.exit(MeasureCommand.run(rest));
       case "samples" -> SampleFolder.run(rest);
-      case "demo" -> serve(rest, "demo");
+      case "demo" -> serveDemo(rest);
       case "rehearse" -> Rehearsal.run(serve(rest));
       case "serve" -> serve(rest);
       default -> serve(args);
     }
   }
 
-  private static ConfigurableApplicationContext serve(String[] args, String... profiles) {
-    SpringApplication application = new SpringApplication(Turnsheet.class);
-    application.setAdditionalProfiles(profiles);
-    return application.run(args);
+  /**
+   * The service as it was worked out when it was packaged: the environment still decides every
+   * value, but no longer which beans there are. Run from classes, it searches for them.
+   */
+  private static ConfigurableApplicationContext serve(String[] args) {
+    if (System.getProperty(PREPARED) == null && isPrepared()) {
+      System.setProperty(PREPARED, "true");
+    }
+    return new SpringApplication(Turnsheet.class).run(args);
+  }
+
+  /** Only in the jar: beside freshly compiled classes the definitions may be of an older build. */
+  private static boolean isPrepared() {
+    URL prepared = Turnsheet.class.getResource("Turnsheet__ApplicationContextInitializer.class");
+    return prepared != null && prepared.getProtocol().equals("jar");
+  }
+
+  private static void serveDemo(String[] args) {
+    SpringApplication application = new SpringApplication(Turnsheet.class, Demo.class);
+    application.setAdditionalProfiles("demo");
+    application.run(args);
   }
 }

@@ -9,8 +9,11 @@ import com.tngtech.archunit.core.domain.JavaClasses;
 import com.tngtech.archunit.core.importer.ClassFileImporter;
 import com.tngtech.archunit.core.importer.ImportOption;
 import java.util.List;
+import java.util.stream.Stream;
 import org.jspecify.annotations.NullMarked;
 import org.junit.jupiter.api.Test;
+import org.springframework.context.annotation.ComponentScan;
+import org.springframework.stereotype.Component;
 
 /** The house rules of the packages: who may know whom. */
 class ArchitectureTest {
@@ -40,7 +43,25 @@ class ArchitectureTest {
   private static final JavaClasses CLASSES =
       new ClassFileImporter()
           .withImportOption(new ImportOption.DoNotIncludeTests())
+          .withImportOption(location -> !location.contains("__") && !location.contains("$$"))
           .importPackages("turnsheet");
+
+  /** A component elsewhere would be missing from the service without a word. */
+  @Test
+  void everyComponentLivesWhereTheStartSearches() {
+    String[] searched =
+        Stream.concat(
+                Stream.of(Turnsheet.class.getAnnotation(ComponentScan.class).value())
+                    .map(p -> p + ".."),
+                Stream.of("turnsheet", "turnsheet.demo"))
+            .toArray(String[]::new);
+    classes()
+        .that()
+        .areMetaAnnotatedWith(Component.class)
+        .should()
+        .resideInAnyPackage(searched)
+        .check(CLASSES);
+  }
 
   @Test
   void theScanSeesTheProject() {

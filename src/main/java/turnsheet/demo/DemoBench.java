@@ -8,7 +8,6 @@ import java.time.Duration;
 import java.time.Instant;
 import java.time.ZoneOffset;
 import org.jspecify.annotations.Nullable;
-import org.springframework.context.annotation.Profile;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.stereotype.Component;
 import org.springframework.transaction.support.TransactionOperations;
@@ -28,7 +27,6 @@ import turnsheet.shop.Visits;
 
 /** Opens visits in the past and uploads the samples to them, the way of every upload. */
 @Component
-@Profile("demo")
 class DemoBench {
 
   private static final String BROUGHT_BY = "demo";

@@ -2,7 +2,6 @@ package turnsheet.demo;
 
 import java.time.LocalDate;
 import java.time.ZoneOffset;
-import org.springframework.context.annotation.Profile;
 import org.springframework.stereotype.Component;
 import turnsheet.capture.CaptureKey;
 import turnsheet.shop.BenchInstrument;
@@ -20,7 +19,6 @@ import turnsheet.shop.VisitId;
 
 /** Fills an empty service with the invented shop; its recordings go the way of every upload. */
 @Component
-@Profile("demo")
 class DemoShop {
 
   private final MachineModels models;

@@ -3,7 +3,6 @@ package turnsheet.demo;
 import java.time.Duration;
 import org.springframework.boot.context.event.ApplicationReadyEvent;
 import org.springframework.boot.context.event.ApplicationStartedEvent;
-import org.springframework.context.annotation.Profile;
 import org.springframework.context.event.EventListener;
 import org.springframework.core.env.Environment;
 import org.springframework.jdbc.core.simple.JdbcClient;
@@ -18,7 +17,6 @@ import turnsheet.access.ShopProfiles;
  * Loads the demo at its first start, tells how far its measurements are, and lets one visitor in.
  */
 @Component
-@Profile("demo")
 class DemoStart {
 
   private static final String SIGN_IN_NAME = "demo";
