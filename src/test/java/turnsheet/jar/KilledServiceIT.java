@@ -6,10 +6,13 @@ import static org.assertj.core.api.Assertions.within;
 import java.net.http.HttpRequest.BodyPublishers;
 import java.nio.file.Path;
 import java.time.Duration;
+import java.util.Map;
 import java.util.regex.Pattern;
-import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.EnumSource;
 import tools.jackson.databind.JsonNode;
+import turnsheet.testing.Database;
 
 class KilledServiceIT {
 
@@ -20,16 +23,18 @@ class KilledServiceIT {
   /** Long enough that its measurement is under way when the first look at its job comes back. */
   private static final long SAMPLES = 60L * 60 * 48_000;
 
-  @Test
-  void aCaptureThatWasBeingMeasuredWhenTheServiceWasKilledEndsMeasured(@TempDir Path folder)
-      throws Exception {
+  @ParameterizedTest
+  @EnumSource
+  void aCaptureThatWasBeingMeasuredWhenTheServiceWasKilledEndsMeasured(
+      Database database, @TempDir Path folder) throws Exception {
+    Map<String, String> settings = settings(database);
     Path data = folder.resolve("data");
     Path recording = folder.resolve("hour.wav");
     SteadyTone.write(recording, SAMPLES);
 
     RestVisitor visitor;
     String capture;
-    try (RunningService first = RunningService.start("serve", data)) {
+    try (RunningService first = RunningService.start("serve", data, settings)) {
       visitor = RestVisitor.firstRun(first.printed(OWNER, START));
       capture = uploaded(visitor, recording);
       visitor.post("/api/v1/captures/" + capture + "/measure", "{}", 202);
@@ -38,7 +43,7 @@ class KilledServiceIT {
       first.kill();
     }
 
-    try (RunningService second = RunningService.start("serve", data)) {
+    try (RunningService second = RunningService.start("serve", data, settings)) {
       second.printed(READY, START);
       visitor = visitor.at(second.address(""));
       JsonNode job = job(visitor, capture, "done");
@@ -50,6 +55,18 @@ class KilledServiceIT {
       JsonNode reading = visitor.get("/api/v1/readings/" + readings.at("/0/readingId").asString());
       assertThat(reading.at("/speed/deviationPercent/value").asDouble()).isCloseTo(0, within(1e-5));
     }
+  }
+
+  /** None for the built-in database; for the server what README.md says. */
+  private static Map<String, String> settings(Database database) {
+    return switch (database) {
+      case H2 -> Map.of();
+      case POSTGRESQL ->
+          Map.of(
+              "SPRING_PROFILES_ACTIVE", "postgresql",
+              "TURNSHEET_DATABASE_URL", database.newUrl(),
+              "TURNSHEET_DATABASE_USER", database.user());
+    };
   }
 
   private static String uploaded(RestVisitor visitor, Path recording) throws Exception {

@@ -10,6 +10,7 @@ import java.nio.file.Path;
 import java.time.Duration;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.concurrent.TimeUnit;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
@@ -36,20 +37,30 @@ public final class RunningService implements AutoCloseable {
    * @param subcommand {@code serve} or {@code demo}
    */
   public static RunningService start(String subcommand, Path dataFolder) throws IOException {
+    return start(subcommand, dataFolder, Map.of());
+  }
+
+  /**
+   * Starts the service on a data folder.
+   *
+   * @param settings environment variables beyond those of the tests
+   */
+  static RunningService start(String subcommand, Path dataFolder, Map<String, String> settings)
+      throws IOException {
     int port;
     try (var probe = new ServerSocket(0)) {
       port = probe.getLocalPort();
     }
-    Process process =
+    ProcessBuilder command =
         new ProcessBuilder(
                 BuiltJar.command(
                     List.of("-Xmx512m"),
                     subcommand,
                     "--server.port=" + port,
                     "--turnsheet.data-dir=" + dataFolder))
-            .redirectErrorStream(true)
-            .start();
-    return new RunningService(process, port);
+            .redirectErrorStream(true);
+    command.environment().putAll(settings);
+    return new RunningService(command.start(), port);
   }
 
   public String address(String path) {
