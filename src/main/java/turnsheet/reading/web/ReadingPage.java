@@ -36,6 +36,11 @@ record ReadingPage(
     List<Fact> method,
     List<Other> others) {
 
+  /** Whether a figure of these has a limit, so that limit and verdict need columns. */
+  public boolean judged(List<Group> groups) {
+    return groups.stream().flatMap(g -> g.rows().stream()).anyMatch(r -> !r.limit().isEmpty());
+  }
+
   /** Figures that belong together. */
   record Group(String title, List<FigureRow> rows) {}
 
