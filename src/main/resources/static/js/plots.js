@@ -5,7 +5,7 @@ import { Source } from "./plot-series.js";
 import { theme } from "./plot-theme.js";
 
 const { Chart } = window;
-const mouse = window.matchMedia("(pointer: fine)").matches;
+const fingers = window.matchMedia("(pointer: coarse)").matches; // they scroll the page
 const dark = window.matchMedia("(prefers-color-scheme: dark)");
 
 class Plot {
@@ -195,7 +195,7 @@ class Plot {
   }
 
   zoom() {
-    const able = mouse && (this.kind === "trace" || this.kind === "spectrum");
+    const able = !fingers && (this.kind === "trace" || this.kind === "spectrum");
     const finer = ({ chart }) => this.show(chart.scales.x.min, chart.scales.x.max, false);
     return {
       limits: { x: { min: this.whole.from, max: this.whole.to } },

@@ -22,6 +22,8 @@ for (const form of document.querySelectorAll("form.upload")) {
     event.preventDefault();
     cell.classList.remove("dropping");
     if (event.dataTransfer.files.length > 0) {
+      const folded = form.closest("details");
+      if (folded) folded.open = true; // what follows must be seen
       input.files = event.dataTransfer.files;
       form.requestSubmit();
     }

@@ -9,6 +9,7 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.time.Duration;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Base64;
 import java.util.List;
 import java.util.Map;
@@ -34,6 +35,7 @@ class MainPathIT {
 
   private RunningService service;
   private Visitor visitor;
+  private Hand hand;
   private Audit audit;
   private final List<String> wrong = new ArrayList<>();
   private String visit = "";
@@ -42,6 +44,7 @@ class MainPathIT {
   void start(@TempDir Path folder) throws Exception {
     service = RunningService.start("serve", folder);
     visitor = new Visitor(1280, 900);
+    hand = new Hand(visitor);
     audit = new Audit(visitor);
   }
 
@@ -56,7 +59,8 @@ class MainPathIT {
     theFirstAddressSetsUpTheOwner();
     aUnitIsEnteredWithItsCustomerModelAndLimit();
     aRecordingIsMeasuredWhileTheVisitorLooksOn();
-    theRepairIsMeasuredTheSameWay();
+    theCurveIsLookedAtCloserByHand();
+    theRepairIsDroppedOnThePageWithAnotherFile();
     theSheetComparesAndPrintsOnBothPapers();
     aShareLinkOpensTheSheetToAnyoneUntilItIsWithdrawn();
     aFileOfAnotherKindIsRefusedWithItsReason();
@@ -127,9 +131,32 @@ class MainPathIT {
     readsAsDocumented(BEFORE);
   }
 
-  private void theRepairIsMeasuredTheSameWay() throws Exception {
-    measure("after repair", AFTER);
+  private void theCurveIsLookedAtCloserByHand() {
+    WebElement curve = visitor.find("[data-plot=trace] canvas");
+    double[] whole = shown();
 
+    hand.draw(curve, 0.4, 0.6, false);
+    double[] closer = shownAfter(whole);
+    // the drawn fifth, in a plot that is somewhat narrower than its picture
+    assertThat(width(closer) / width(whole)).isBetween(0.19, 0.25);
+
+    hand.draw(curve, 0.6, 0.3, true);
+    double[] later = shownAfter(closer);
+    assertThat(later[0]).isGreaterThan(closer[0]);
+    assertThat(width(later)).isCloseTo(width(closer), within(1e-6 * width(whole)));
+  }
+
+  private void theRepairIsDroppedOnThePageWithAnotherFile() throws Exception {
+    visitor.open(visit);
+    WebElement page = visitor.find("html");
+    hand.drop(cell("after repair"), SAMPLES.resolve(AFTER), SAMPLES.resolve("renamed-zip.wav"));
+    visitor.awaitGone(page);
+
+    assertThat(visitor.address()).isEqualTo(visit);
+    assertThat(cell("after repair").getText()).contains("Refused").contains(AFTER);
+    visitor.press(cell("after repair").findElement(css(".item.recognised a")));
+    visitor.pressButton("Measure");
+    visitor.awaitAddress("/readings/");
     assertThat(visitor.find("main .lead").getText()).contains("within");
     readsAsDocumented(AFTER);
   }
@@ -231,6 +258,25 @@ class MainPathIT {
     if (!cell.findElement(css("input[type=file]")).isDisplayed()) {
       cell.findElement(css("details.add > summary")).click();
     }
+  }
+
+  /** The stretch of time that the curve shows, in seconds. */
+  private double[] shown() {
+    List<?> ends =
+        (List<?>)
+            visitor.script(
+                "const x = Chart.getChart(document.querySelector('[data-plot=trace] canvas'))"
+                    + ".scales.x; return [x.min, x.max].map(String)");
+    return ends.stream().mapToDouble(end -> Double.parseDouble(String.valueOf(end))).toArray();
+  }
+
+  private double[] shownAfter(double[] before) {
+    visitor.awaitTrue(() -> !Arrays.equals(shown(), before));
+    return shown();
+  }
+
+  private static double width(double[] ends) {
+    return ends[1] - ends[0];
   }
 
   private void readsAsDocumented(String file) throws IOException {

@@ -5,6 +5,7 @@ import java.time.Duration;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
+import java.util.function.BooleanSupplier;
 import java.util.logging.Level;
 import org.openqa.selenium.By;
 import org.openqa.selenium.WebElement;
@@ -61,7 +62,7 @@ final class Visitor implements AutoCloseable {
   void press(WebElement control) {
     WebElement before = find("html");
     control.click();
-    waiting().until(ExpectedConditions.stalenessOf(before));
+    awaitGone(before);
   }
 
   void pressButton(String text) {
@@ -70,6 +71,15 @@ final class Visitor implements AutoCloseable {
 
   WebElement awaitVisible(String css) {
     return waiting().until(ExpectedConditions.visibilityOfElementLocated(By.cssSelector(css)));
+  }
+
+  /** Waits until another document stands in place of the one whose root this is. */
+  void awaitGone(WebElement root) {
+    waiting().until(ExpectedConditions.stalenessOf(root));
+  }
+
+  void awaitTrue(BooleanSupplier fact) {
+    waiting().until(any -> fact.getAsBoolean());
   }
 
   void awaitAddress(String pattern) {
