@@ -22,6 +22,7 @@ import turnsheet.capture.Previews;
 import turnsheet.capture.Proposal;
 import turnsheet.capture.Surroundings;
 import turnsheet.web.RefusedRequestException;
+import turnsheet.web.Times;
 
 /** The page of one capture. */
 @Controller
@@ -30,11 +31,13 @@ class CaptureController {
   private final Intake intake;
   private final CaptureDesk desk;
   private final Previews previews;
+  private final Times times;
 
-  CaptureController(Intake intake, CaptureDesk desk, Previews previews) {
+  CaptureController(Intake intake, CaptureDesk desk, Previews previews, Times times) {
     this.intake = intake;
     this.desk = desk;
     this.previews = previews;
+    this.times = times;
   }
 
   @GetMapping("/captures/{id}")
@@ -112,7 +115,7 @@ class CaptureController {
             ? null
             : previews.of(capture.bytes(), looked).map(PreviewDrawing::of).orElse(null);
     WishForm form = typed == null ? WishForm.prefilled(capture, proposal) : typed;
-    model.addAttribute("page", CapturePage.of(capture, around, proposal, drawing, form));
+    model.addAttribute("page", CapturePage.of(capture, around, proposal, drawing, form, times));
     model.addAttribute("progress", desk.progress(capture.id().value()));
     return "capture/capture";
   }

@@ -2,9 +2,6 @@ package turnsheet.capture.web;
 
 import java.math.BigDecimal;
 import java.math.MathContext;
-import java.time.Instant;
-import java.time.ZoneId;
-import java.time.format.DateTimeFormatter;
 import java.util.List;
 import java.util.Locale;
 import java.util.UUID;
@@ -18,6 +15,7 @@ import turnsheet.core.format.api.Contents;
 import turnsheet.core.format.api.Recognised;
 import turnsheet.core.measure.CaptureKind;
 import turnsheet.core.signal.Rejection;
+import turnsheet.web.Times;
 
 /** Everything the capture page says, ready to be shown. */
 record CapturePage(
@@ -38,9 +36,6 @@ record CapturePage(
     @Nullable Rejection refusal,
     @Nullable Seen seen,
     WishForm form) {
-
-  private static final DateTimeFormatter MINUTE =
-      DateTimeFormatter.ofPattern("yyyy-MM-dd HH:mm", Locale.ROOT);
 
   /** What was recognised and is proposed. */
   record Seen(
@@ -80,7 +75,8 @@ record CapturePage(
       Surroundings around,
       @Nullable Proposal proposal,
       @Nullable PreviewDrawing drawing,
-      WishForm form) {
+      WishForm form,
+      Times times) {
     Looked looked = capture.looked();
     return new CapturePage(
         capture.id().value(),
@@ -93,7 +89,7 @@ record CapturePage(
         around.instrument() == null ? null : around.instrument().name(),
         around.medium() == null ? null : around.medium().name(),
         size(capture.bytes().length()),
-        minute(capture.receivedAt()),
+        times.minute(capture.receivedAt()),
         capture.receivedBy(),
         capture.bytes().sha256(),
         capture.state().word(),
@@ -123,10 +119,6 @@ record CapturePage(
         found.contents() == Contents.WAVEFORM,
         proposal,
         drawing);
-  }
-
-  private static String minute(Instant at) {
-    return MINUTE.format(at.atZone(ZoneId.systemDefault()));
   }
 
   private static String size(long bytes) {
