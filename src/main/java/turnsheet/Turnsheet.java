@@ -4,30 +4,27 @@ import java.io.IOException;
 import java.net.URL;
 import java.util.Arrays;
 import org.springframework.boot.SpringApplication;
-import org.springframework.boot.SpringBootConfiguration;
-import org.springframework.boot.autoconfigure.EnableAutoConfiguration;
+import org.springframework.boot.autoconfigure.SpringBootApplication;
 import org.springframework.context.ConfigurableApplicationContext;
-import org.springframework.context.annotation.ComponentScan;
 import org.springframework.context.annotation.Import;
 import turnsheet.cli.MeasureCommand;
 import turnsheet.demo.Demo;
 import turnsheet.demo.SampleFolder;
 
 /** Starts what the command line asks for. */
-@SpringBootConfiguration
-@EnableAutoConfiguration
+@SpringBootApplication(
+    // the packages that have components; searching the others as well costs the start
+    scanBasePackages = {
+      "turnsheet.access",
+      "turnsheet.capture",
+      "turnsheet.job",
+      "turnsheet.reading",
+      "turnsheet.report",
+      "turnsheet.share",
+      "turnsheet.shop",
+      "turnsheet.web"
+    })
 @Import(ServiceConfig.class)
-// the packages that have components; searching the others as well costs the start
-@ComponentScan({
-  "turnsheet.access",
-  "turnsheet.capture",
-  "turnsheet.job",
-  "turnsheet.reading",
-  "turnsheet.report",
-  "turnsheet.share",
-  "turnsheet.shop",
-  "turnsheet.web"
-})
 public class Turnsheet {
 
   private static final String PREPARED = "spring.aot.enabled";

@@ -12,7 +12,7 @@ import java.util.List;
 import java.util.stream.Stream;
 import org.jspecify.annotations.NullMarked;
 import org.junit.jupiter.api.Test;
-import org.springframework.context.annotation.ComponentScan;
+import org.springframework.boot.autoconfigure.SpringBootApplication;
 import org.springframework.stereotype.Component;
 
 /** The house rules of the packages: who may know whom. */
@@ -51,7 +51,10 @@ class ArchitectureTest {
   void everyComponentLivesWhereTheStartSearches() {
     String[] searched =
         Stream.concat(
-                Stream.of(Turnsheet.class.getAnnotation(ComponentScan.class).value())
+                Stream.of(
+                        Turnsheet.class
+                            .getAnnotation(SpringBootApplication.class)
+                            .scanBasePackages())
                     .map(p -> p + ".."),
                 Stream.of("turnsheet", "turnsheet.demo"))
             .toArray(String[]::new);

@@ -1,6 +1,7 @@
 package turnsheet.document;
 
 import com.fasterxml.jackson.annotation.JsonInclude;
+import java.util.List;
 import org.jspecify.annotations.Nullable;
 import tools.jackson.core.JacksonException;
 import tools.jackson.core.JsonGenerator;
@@ -15,6 +16,7 @@ import tools.jackson.databind.ValueSerializer;
 import tools.jackson.databind.annotation.JsonSerialize;
 import tools.jackson.databind.json.JsonMapper;
 import turnsheet.core.measure.Figure;
+import turnsheet.core.stats.Budget;
 
 /**
  * JSON of the records of the core: members in the order of the components, enums in lower camel
@@ -79,6 +81,9 @@ public final class CoreJson {
 
     @JsonInclude(JsonInclude.Include.NON_NULL)
     @Nullable String why();
+
+    @JsonInclude(JsonInclude.Include.NON_EMPTY)
+    List<Budget.Contribution> budget();
   }
 
   /** Writes 2 for 2.0. */

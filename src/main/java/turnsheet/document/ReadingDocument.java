@@ -7,7 +7,9 @@ import turnsheet.core.measure.Reading;
  * export give, and that the store keeps.
  *
  * <p>A figure is {@code {"value": x, "expandedUncertainty": u, "k": 2}}; where something of it
- * cannot be stated it is null and {@code "why"} says the reason. {@code edges} is null for a tone.
+ * cannot be stated it is null and {@code "why"} says the reason. What the uncertainty is made of
+ * stands in {@code "budget": [{"cause": c, "standardUncertainty": u}]}. {@code edges} is null for a
+ * tone.
  */
 public final class ReadingDocument {
 

@@ -37,7 +37,7 @@ class ReadingDocumentTest {
   void writesAFigureInFourShapes() {
     assertThat(CoreJson.toJson(KNOWN))
         .isEqualTo("{\"value\":0.0625,\"expandedUncertainty\":0.0025,\"k\":2}");
-    assertThat(CoreJson.toJson(new Figure(1.5, 0.25, 2.13, null)))
+    assertThat(CoreJson.toJson(new Figure(1.5, 0.25, 2.13, null, List.of())))
         .isEqualTo("{\"value\":1.5,\"expandedUncertainty\":0.25,\"k\":2.13}");
     assertThat(CoreJson.toJson(Figure.withoutUncertainty(1.5, "single value")))
         .isEqualTo(

@@ -93,7 +93,7 @@ class MeasureJobTest {
             "tone.wav",
             "technician",
             new ByteArrayInputStream(wav));
-    assertThat(capture.state()).isEqualTo(CaptureState.RECOGNISED);
+    assertThat(capture.state()).as("%s", capture.refusal()).isEqualTo(CaptureState.RECOGNISED);
     return intake.confirm(capture.id(), Wish.none()).id();
   }
 

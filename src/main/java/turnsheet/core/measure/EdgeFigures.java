@@ -45,8 +45,7 @@ final class EdgeFigures {
         mean,
         Budget.empty()
             .plus("recording clock", mean * clock)
-            .plus("noise of the first and last edge", mean * ends)
-            .expanded());
+            .plus("noise of the first and last edge", mean * ends));
   }
 
   private Figure spread(Moments periods) {
@@ -67,7 +66,11 @@ final class EdgeFigures {
     double value = seconds * 1e6;
     return Double.isNaN(relative)
         ? Figure.withoutUncertainty(value, "the recording is too short to tell how it varies")
-        : Figure.of(value, 2 * Math.hypot(relative, clock) * value);
+        : Figure.of(
+            value,
+            Budget.empty()
+                .plus("length of the recording", relative * value)
+                .plus("recording clock", clock * value));
   }
 
   /** Scatter of the mean, and how far the crossing level may be off where it is unknown. */
@@ -77,7 +80,11 @@ final class EdgeFigures {
       return null;
     }
     return Figure.of(
-        100 * high.mean(), 200 * high.sampleStdDev() / Math.sqrt((double) high.count()));
+        100 * high.mean(),
+        Budget.empty()
+            .plus(
+                "scatter of the mean",
+                100 * high.sampleStdDev() / Math.sqrt((double) high.count())));
   }
 
   private Reading.@Nullable Wheel wheel() {
@@ -89,7 +96,9 @@ final class EdgeFigures {
     Figure pattern =
         wheel == null || !wheel.known()
             ? Figure.absent("fewer than four whole turns without a repair, or a single tooth")
-            : Figure.of(100 * wheel.rmsPeriods(), 200 * wheel.rmsUncertaintyPeriods());
+            : Figure.of(
+                100 * wheel.rmsPeriods(),
+                Budget.empty().plus("scatter of the turns", 100 * wheel.rmsUncertaintyPeriods()));
     return new Reading.Wheel(teeth, pattern);
   }
 
@@ -100,6 +109,9 @@ final class EdgeFigures {
   private Reading.Stability stability(StabilityLadder.Rung rung) {
     double relative = 1 / Math.sqrt(2 * rung.independentTerms());
     return new Reading.Stability(
-        rung.tauSeconds(), Figure.of(rung.deviation(), 2 * relative * rung.deviation()));
+        rung.tauSeconds(),
+        Figure.of(
+            rung.deviation(),
+            Budget.empty().plus("length of the recording", relative * rung.deviation())));
   }
 }

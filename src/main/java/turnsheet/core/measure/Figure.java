@@ -1,6 +1,8 @@
 package turnsheet.core.measure;
 
+import java.util.List;
 import org.jspecify.annotations.Nullable;
+import turnsheet.core.stats.Budget;
 
 /**
  * One measured number; its unit stands in the name of the component that holds it.
@@ -10,14 +12,18 @@ import org.jspecify.annotations.Nullable;
  *     cases, in the unit of the value; null where it cannot be stated
  * @param k coverage factor of that interval; null with it
  * @param why the reason for whatever is null; null otherwise
+ * @param budget what the uncertainty is made of; empty where that was not told apart, as in
+ *     documents of the time before budgets were kept
  */
 public record Figure(
     @Nullable Double value,
     @Nullable Double expandedUncertainty,
     @Nullable Double k,
-    @Nullable String why) {
+    @Nullable String why,
+    List<Budget.Contribution> budget) {
 
   public Figure {
+    budget = budget == null ? List.of() : List.copyOf(budget); // documents of before have none
     requireFinite("value", value);
     requireFinite("uncertainty", expandedUncertainty);
     if (expandedUncertainty != null && expandedUncertainty < 0) {
@@ -34,17 +40,22 @@ public record Figure(
 
   /** A value with its uncertainty at k = 2. */
   public static Figure of(double value, double expandedUncertainty) {
-    return new Figure(value, expandedUncertainty, 2.0, null);
+    return new Figure(value, expandedUncertainty, Budget.K, null, List.of());
+  }
+
+  /** A value with what its uncertainty is made of, in the unit of the value. */
+  public static Figure of(double value, Budget budget) {
+    return new Figure(value, budget.expanded(), Budget.K, null, budget.contributions());
   }
 
   /** A value whose uncertainty cannot be stated. */
   public static Figure withoutUncertainty(double value, String why) {
-    return new Figure(value, null, null, why);
+    return new Figure(value, null, null, why, List.of());
   }
 
   /** No value at all. */
   public static Figure absent(String why) {
-    return new Figure(null, null, null, why);
+    return new Figure(null, null, null, why, List.of());
   }
 
   private static void requireFinite(String name, @Nullable Double number) {

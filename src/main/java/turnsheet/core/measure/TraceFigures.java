@@ -90,7 +90,7 @@ final class TraceFigures {
     double mean = residual.meanPercent();
     double own = meanUncertaintyPercent();
     Budget systematic = systematic(1 + mean / 100);
-    double deviationU = systematic.plus("noise and unsteadiness", own).expanded();
+    Budget deviation = systematic.plus("unsteadiness and noise", own);
     double nominal = settings.nominalHz();
     double seconds = clean.trace().durationSeconds();
     // the slope of a Hann-weighted line: its weights spread over 0.181 of the length
@@ -101,9 +101,11 @@ final class TraceFigures {
     int last = clean.pieces().get(clean.pieces().size() - 1).to();
     return new Reading.Speed(
         nominal,
-        Figure.of(nominal * (1 + mean / 100), nominal * deviationU / 100),
-        Figure.of(mean, deviationU),
-        Figure.of(60 * residual.slopePercentPerSecond(), Budget.K * slopeU),
+        Figure.of(nominal * (1 + mean / 100), deviation.times(nominal / 100)),
+        Figure.of(mean, deviation),
+        Figure.of(
+            60 * residual.slopePercentPerSecond(),
+            Budget.empty().plus("unsteadiness and noise", slopeU)),
         atEnd(residual.averagePercent(first, Math.min(last, first + ends)), scatter, systematic),
         atEnd(residual.averagePercent(Math.max(first, last - ends), last), scatter, systematic));
   }
@@ -121,7 +123,7 @@ final class TraceFigures {
     if (Double.isNaN(scatter)) {
       return Figure.withoutUncertainty(value, "the recording is too short to tell its scatter");
     }
-    return Figure.of(value, systematic.plus("fluctuation", scatter).expanded());
+    return Figure.of(value, systematic.plus("fluctuation", scatter));
   }
 
   private Budget systematic(double relativeSpeed) {
@@ -170,8 +172,7 @@ final class TraceFigures {
         Budget.empty()
             .plus("length of the recording", v.lengthUncertaintyPercent())
             .plusRectangular("weighting", WEIGHTING_SHARE * v.percent())
-            .plusRectangular("noise of the recording", noiseShare(v.percent(), floor))
-            .expanded());
+            .plusRectangular("noise of the recording", noiseShare(v.percent(), floor)));
   }
 
   private Reading.Band band(String name, double fromHertz, double toHertz) {
@@ -200,8 +201,7 @@ final class TraceFigures {
         rms,
         Budget.empty()
             .plus("length of the recording", length)
-            .plusRectangular("noise of the recording", noiseShare(rms, floor))
-            .expanded());
+            .plusRectangular("noise of the recording", noiseShare(rms, floor)));
   }
 
   /** How much of a reading the floor can account for; powers add. */
@@ -216,18 +216,16 @@ final class TraceFigures {
       // D. C. Rife and R. R. Boorstyn, IEEE Trans. Inf. Theory 20 (1974), 591-598: bound on the
       // rate of a sinusoid in noise, from memory; a hundredth of a bin for the interpolation
       double noiseHertz = 0.55 * resolution * f.noisePercent() / f.peakPercent() * Math.sqrt(2);
-      double rateU =
+      Budget rateU =
           Budget.empty()
               .plus("noise", noiseHertz)
               .plusRectangular("interpolation", 0.02 * resolution)
               .plus(
-                  "recording clock", f.rateHertz() * settings.clockStandardUncertaintyPpm() * 1e-6)
-              .expanded();
-      double peakU =
+                  "recording clock", f.rateHertz() * settings.clockStandardUncertaintyPpm() * 1e-6);
+      Budget peakU =
           Budget.empty()
               .plus("noise", f.noisePercent())
-              .plusRectangular("interpolation", INTERPOLATION_SHARE * f.peakPercent())
-              .expanded();
+              .plusRectangular("interpolation", INTERPOLATION_SHARE * f.peakPercent());
       lines.add(
           new Reading.Line(
               Figure.of(f.rateHertz(), rateU), Figure.of(f.peakPercent(), peakU), List.of()));

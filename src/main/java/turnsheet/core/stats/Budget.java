@@ -22,13 +22,13 @@ public record Budget(List<Contribution> contributions) {
   /**
    * One cause.
    *
-   * @param name for people
+   * @param cause for people
    * @param standardUncertainty in the unit of the figure
    */
-  public record Contribution(String name, double standardUncertainty) {
+  public record Contribution(String cause, double standardUncertainty) {
     public Contribution {
       if (!(standardUncertainty >= 0 && Double.isFinite(standardUncertainty))) {
-        throw new IllegalArgumentException(name + " " + standardUncertainty);
+        throw new IllegalArgumentException(cause + " " + standardUncertainty);
       }
     }
   }
@@ -39,15 +39,23 @@ public record Budget(List<Contribution> contributions) {
   }
 
   /** The same with one more contribution. */
-  public Budget plus(String name, double standardUncertainty) {
+  public Budget plus(String cause, double standardUncertainty) {
     var more = new ArrayList<>(contributions);
-    more.add(new Contribution(name, standardUncertainty));
+    more.add(new Contribution(cause, standardUncertainty));
     return new Budget(more);
   }
 
   /** A contribution known by its half width only, all values within being equally likely. */
-  public Budget plusRectangular(String name, double halfWidth) {
-    return plus(name, halfWidth / Math.sqrt(3));
+  public Budget plusRectangular(String cause, double halfWidth) {
+    return plus(cause, halfWidth / Math.sqrt(3));
+  }
+
+  /** The budget of the figure times a factor. */
+  public Budget times(double factor) {
+    return new Budget(
+        contributions.stream()
+            .map(c -> new Contribution(c.cause(), Math.abs(factor) * c.standardUncertainty()))
+            .toList());
   }
 
   /** Combined standard uncertainty. */

@@ -34,7 +34,8 @@ class DifferenceTest {
 
   @Test
   void bringsOtherCoverageFactorsToTwo() {
-    Difference d = Difference.of(new Figure(1.0, 4.5, 3.0, null), Figure.of(1, 4));
+    Difference d =
+        Difference.of(new Figure(1.0, 4.5, 3.0, null, java.util.List.of()), Figure.of(1, 4));
     assertThat(d.difference()).isEqualTo(Figure.of(0, 5));
   }
 
