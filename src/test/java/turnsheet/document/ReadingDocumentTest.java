@@ -16,6 +16,7 @@ import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.MeasureSettings;
 import turnsheet.core.measure.Reading;
 import turnsheet.core.signal.Warning;
+import turnsheet.core.stats.Budget;
 
 class ReadingDocumentTest {
 
@@ -45,6 +46,18 @@ class ReadingDocumentTest {
     assertThat(CoreJson.toJson(Figure.absent("too short")))
         .isEqualTo(
             "{\"value\":null,\"expandedUncertainty\":null,\"k\":null,\"why\":\"too short\"}");
+  }
+
+  @Test
+  void keepsWhatAnUncertaintyIsMadeOf() {
+    Figure figure = Figure.of(1.5, Budget.empty().plus("recording clock", 0.25).plus("noise", 0));
+    String json = CoreJson.toJson(figure);
+    assertThat(json)
+        .isEqualTo(
+            "{\"value\":1.5,\"expandedUncertainty\":0.5,\"k\":2,\"budget\":["
+                + "{\"cause\":\"recording clock\",\"standardUncertainty\":0.25},"
+                + "{\"cause\":\"noise\",\"standardUncertainty\":0.0}]}");
+    assertThat(CoreJson.fromJson(json, Figure.class)).isEqualTo(figure);
   }
 
   @Test

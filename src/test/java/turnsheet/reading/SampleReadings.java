@@ -7,6 +7,7 @@ import turnsheet.core.measure.Reading;
 import turnsheet.core.measure.Series;
 import turnsheet.core.signal.SpeedTrace;
 import turnsheet.core.signal.Warning;
+import turnsheet.core.stats.Budget;
 
 /** Readings made by hand, for tests of what is done with readings. */
 public final class SampleReadings {
@@ -33,7 +34,9 @@ public final class SampleReadings {
             Figure.of(deviationPercent - 0.01, 0.02),
             Figure.of(deviationPercent + 0.01, 0.02)),
         new Reading.Flutter(
-            Figure.of(0.067, 0.002),
+            Figure.of(
+                0.067,
+                Budget.empty().plus("length of the recording", 0.0006).plus("weighting", 0.0008)),
             Figure.of(0.071, 0.003),
             Figure.withoutUncertainty(0.031, "one stretch only"),
             Figure.of(0.052, 0.002),

@@ -29,6 +29,7 @@ record ReadingPage(
     @Nullable Drawn histogram,
     List<LineRow> lines,
     List<StabilityRow> stability,
+    BudgetTable budget,
     List<Fact> edgeFacts,
     List<Fact> signalFacts,
     List<String> warnings,

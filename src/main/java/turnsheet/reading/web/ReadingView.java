@@ -90,6 +90,7 @@ class ReadingView {
         readings.histogram(stored.id()).map(drawings::histogram).orElse(null),
         lines(reading, words),
         stability(reading, words),
+        BudgetTable.of(words, reading),
         edgeFacts(reading, words),
         signalFacts(reading, words),
         reading.warnings().stream().map(Warning::message).toList(),

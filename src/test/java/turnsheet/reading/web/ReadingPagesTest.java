@@ -67,6 +67,23 @@ class ReadingPagesTest {
   }
 
   @Test
+  void theBudgetOfAFigureStandsOnItsPage() throws Exception {
+    String page = page("/readings/" + reading);
+
+    // two contributions of 0.0006 and 0.0008 make 0.0010, and twice that 0.0020
+    assertThat(page.substring(page.indexOf("class=\"budget stack\"")))
+        .containsSubsequence(
+            "length of the recording",
+            "weighting",
+            "0.0006",
+            "largest",
+            "0.0008",
+            "0.001",
+            "0.002");
+    assertThat(page).containsOnlyOnce("number largest");
+  }
+
+  @Test
   void captureLeadsToItsNewestReading() throws Exception {
     ReadingId newer = readings.add(capture, SampleReadings.tone(0.2), SampleReadings.series());
 
