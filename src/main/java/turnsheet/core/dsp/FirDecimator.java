@@ -1,36 +1,82 @@
 package turnsheet.core.dsp;
 
 /**
- * Filters a stream with given taps and keeps every n-th value. Bits do not depend on how the stream
- * is cut.
+ * Filters a stream with given taps and keeps every n-th value; several filters of equal length may
+ * share the stream. Bits do not depend on how the stream is cut.
  *
  * <p>Shape: output m is the sum of {@code taps[i] * in[m * factor + i]}: it belongs to the middle
  * of its taps, and nothing is invented before the first or behind the last sample.
+ *
+ * <p>Cost: the sums run over rows of samples that lie {@code factor} apart, so that neighbouring
+ * outputs come from neighbouring places of every row. The inner loop reads whole arrays from index
+ * 0, the form that the just-in-time compiler turns into vector instructions; an offset in any index
+ * would undo that.
  */
 public final class FirDecimator {
 
-  private static final int ROOM = 4096;
+  /** Outputs and samples that are worked on together, so that they stay near the processor. */
+  private static final int MOST_OUTPUTS = 256;
 
-  private final double[] taps;
+  private static final int MOST_SAMPLES = 4096;
+
+  /** Fewer rows would leave too much to the last step, which is not done by vectors. */
+  private static final int LEAST_ROWS = 8;
+
+  private final int length;
   private final int factor;
+
+  /** Outputs by which the stream moves from one set of rows to the next. */
+  private final int stride;
+
+  /** For every filter and set of rows one tap per row; zeros in front make the sets whole. */
+  private final double[][][] taps;
+
+  private final int outputs;
+  private final double[][] rows;
+  private final double[] sums;
+
+  /** For every filter the outputs that still lack samples, the oldest first. */
+  private final double[][] open;
+
   private final double[] buffer;
   private int filled;
 
-  /** Where in the buffer the next output begins; may lie beyond what is filled. */
-  private int next;
+  /** Outputs that were begun and lack samples still. */
+  private int begun;
 
+  /** One filter. */
   public FirDecimator(double[] taps, int factor) {
-    if (taps.length == 0 || factor < 1) {
-      throw new IllegalArgumentException(taps.length + " taps, factor " + factor);
+    this(new double[][] {taps}, factor);
+  }
+
+  /** Several filters on one stream. */
+  FirDecimator(double[][] filters, int factor) {
+    length = filters[0].length;
+    if (length == 0 || factor < 1) {
+      throw new IllegalArgumentException(length + " taps, factor " + factor);
     }
-    this.taps = taps.clone();
     this.factor = factor;
-    this.buffer = new double[taps.length + Math.max(ROOM, factor)];
+    outputs = Math.max(1, Math.min(MOST_OUTPUTS, MOST_SAMPLES / factor));
+    stride = (LEAST_ROWS + factor - 1) / factor;
+    int used = stride * factor;
+    int sets = (length + used - 1) / used;
+    int lead = sets * used - length;
+    rows = new double[(used + 3) / 4 * 4][outputs];
+    taps = new double[filters.length][sets][rows.length];
+    for (int f = 0; f < filters.length; f++) {
+      for (int i = 0; i < length; i++) {
+        taps[f][(lead + i) / used][(lead + i) % used] = filters[f][i];
+      }
+    }
+    sums = new double[outputs];
+    open = new double[filters.length][outputs + (sets - 1) * stride];
+    buffer = new double[used + outputs * factor];
+    filled = lead;
   }
 
   /** Samples between the first input and the middle of the first output. */
   public double delaySamples() {
-    return (taps.length - 1) / 2.0;
+    return (length - 1) / 2.0;
   }
 
   /** How many values {@link #process} may write for a number read. */
@@ -39,13 +85,24 @@ public final class FirDecimator {
   }
 
   /**
-   * Filters samples.
+   * Filters samples through the only filter.
    *
    * @param in read from index 0, left alone
    * @param out written from index 0
    * @return how many were written
    */
   public int process(double[] in, int count, double[] out) {
+    return process(in, count, new double[][] {out});
+  }
+
+  /**
+   * Filters samples.
+   *
+   * @param in read from index 0, left alone
+   * @param out for every filter one array, written from index 0
+   * @return how many were written to each
+   */
+  int process(double[] in, int count, double[][] out) {
     int written = 0;
     int read = 0;
     while (read < count) {
@@ -53,34 +110,97 @@ public final class FirDecimator {
       System.arraycopy(in, read, buffer, filled, part);
       filled += part;
       read += part;
-      while (next + taps.length <= filled) {
-        out[written++] = sum(next);
-        next += factor;
+      int used = stride * factor;
+      int whole = filled < used ? 0 : Math.min(outputs, (filled - used) / factor + 1);
+      if (whole > 0) {
+        arrange(whole);
+        written += advance(whole, out, written);
+        int drop = whole * factor;
+        System.arraycopy(buffer, drop, buffer, 0, filled - drop);
+        filled -= drop;
       }
-      int drop = Math.min(next, filled);
-      System.arraycopy(buffer, drop, buffer, 0, filled - drop);
-      filled -= drop;
-      next -= drop;
     }
     return written;
   }
 
-  /** Four sums side by side keep the processor's adders busy. */
-  private double sum(int at) {
-    double a = 0;
-    double b = 0;
-    double c = 0;
-    double d = 0;
-    int i = 0;
-    for (; i + 3 < taps.length; i += 4) {
-      a += taps[i] * buffer[at + i];
-      b += taps[i + 1] * buffer[at + i + 1];
-      c += taps[i + 2] * buffer[at + i + 2];
-      d += taps[i + 3] * buffer[at + i + 3];
+  /** Lays the samples out in rows. */
+  private void arrange(int count) {
+    for (int r = 0; r < stride * factor; r++) {
+      double[] row = rows[r];
+      for (int m = 0, at = r; m < count; m++, at += factor) {
+        row[m] = buffer[at];
+      }
     }
-    for (; i < taps.length; i++) {
-      a += taps[i] * buffer[at + i];
+  }
+
+  private int advance(int count, double[][] out, int at) {
+    int sets = taps[0].length;
+    int held = (sets - 1) * stride;
+    int ready = Math.max(0, begun + count - held);
+    for (int f = 0; f < taps.length; f++) {
+      double[] sum = open[f];
+      java.util.Arrays.fill(sum, held, held + count, 0);
+      for (int s = 0; s < sets; s++) {
+        weigh(taps[f][s], count);
+        add(sums, count, sum, held - s * stride);
+      }
+      System.arraycopy(sum, count - ready, out[f], at, ready);
+      System.arraycopy(sum, count, sum, 0, held);
     }
-    return (a + b) + (c + d);
+    begun = Math.min(held, begun + count);
+    return ready;
+  }
+
+  /** Sums of one set of rows, each row times its tap. */
+  private void weigh(double[] weights, int count) {
+    for (int r = 0; r < rows.length; r += 4) {
+      double a = weights[r];
+      double b = weights[r + 1];
+      double c = weights[r + 2];
+      double d = weights[r + 3];
+      if (r == 0) {
+        begin(sums, count, a, b, c, d, rows[r], rows[r + 1], rows[r + 2], rows[r + 3]);
+      } else {
+        go(sums, count, a, b, c, d, rows[r], rows[r + 1], rows[r + 2], rows[r + 3]);
+      }
+    }
+  }
+
+  private static void begin(
+      double[] sums,
+      int n,
+      double a,
+      double b,
+      double c,
+      double d,
+      double[] w,
+      double[] x,
+      double[] y,
+      double[] z) {
+    for (int m = 0; m < n; m++) {
+      sums[m] = (a * w[m] + b * x[m]) + (c * y[m] + d * z[m]);
+    }
+  }
+
+  private static void go(
+      double[] sums,
+      int n,
+      double a,
+      double b,
+      double c,
+      double d,
+      double[] w,
+      double[] x,
+      double[] y,
+      double[] z) {
+    for (int m = 0; m < n; m++) {
+      sums[m] += (a * w[m] + b * x[m]) + (c * y[m] + d * z[m]);
+    }
+  }
+
+  private static void add(double[] sums, int n, double[] to, int at) {
+    for (int m = 0; m < n; m++) {
+      to[at + m] += sums[m];
+    }
   }
 }

@@ -16,17 +16,14 @@ public final class ToneDemodulator {
 
   private static final int BLOCK = 8192;
 
-  private final FirDecimator firstRe;
-  private final FirDecimator firstIm;
+  private final FirDecimator first;
   private final FirDecimator secondRe;
   private final FirDecimator secondIm;
-  private final double turnsPerStep;
+  private final Rotation rotation;
   private final double delaySeconds;
-  private final double[] midRe;
-  private final double[] midIm;
+  private final double[][] mid;
   private final double[] re;
   private final double[] im;
-  private double turns;
   private int count;
 
   public ToneDemodulator(ToneBand band) {
@@ -47,20 +44,18 @@ public final class ToneDemodulator {
       cosine[i] = 2 * shape[i] * StrictMath.cos(angle);
       sine[i] = -2 * shape[i] * StrictMath.sin(angle);
     }
-    firstRe = new FirDecimator(cosine, band.firstFactor());
-    firstIm = new FirDecimator(sine, band.firstFactor());
-    turnsPerStep = fraction(turnsPerSample * band.firstFactor());
+    first = new FirDecimator(new double[][] {cosine, sine}, band.firstFactor());
+    rotation = new Rotation(0, turnsPerSample * band.firstFactor());
     double[] taps =
         KaiserFir.lowPass(
             band.passHertz(), band.stopHertz(), ToneBand.ATTENUATION_DB, band.firstRateHertz());
     secondRe = new FirDecimator(taps, band.secondFactor());
     secondIm = new FirDecimator(taps, band.secondFactor());
     delaySeconds =
-        firstRe.delaySamples() / band.sampleRateHertz()
+        first.delaySamples() / band.sampleRateHertz()
             + secondRe.delaySamples() / band.firstRateHertz();
-    midRe = new double[firstRe.roomFor(BLOCK)];
-    midIm = new double[midRe.length];
-    re = new double[secondRe.roomFor(midRe.length)];
+    mid = new double[2][first.roomFor(BLOCK)];
+    re = new double[secondRe.roomFor(mid[0].length)];
     im = new double[re.length];
   }
 
@@ -81,16 +76,16 @@ public final class ToneDemodulator {
    * @return how many baseband values {@link #re} and {@link #im} now hold
    */
   public int process(double[] in, int samples) {
-    int n = firstRe.process(in, samples, midRe);
-    firstIm.process(in, samples, midIm);
+    int n = first.process(in, samples, mid);
+    double[] midRe = mid[0];
+    double[] midIm = mid[1];
     for (int i = 0; i < n; i++) {
-      double angle = 2 * Math.PI * turns;
-      double c = StrictMath.cos(angle);
-      double s = StrictMath.sin(angle);
+      rotation.advance();
+      double c = rotation.cosine();
+      double s = rotation.sine();
       double x = midRe[i];
       midRe[i] = x * c + midIm[i] * s;
       midIm[i] = midIm[i] * c - x * s;
-      turns = fraction(turns + turnsPerStep);
     }
     count = secondRe.process(midRe, n, re);
     secondIm.process(midIm, n, im);

@@ -24,11 +24,22 @@ public enum Window {
   /** The window of n values. */
   public double[] values(int n) {
     double[] w = new double[n];
-    for (int i = 0; i < n; i++) {
-      for (int k = 0; k < terms.length; k++) {
-        double sign = (k & 1) == 0 ? 1 : -1;
-        w[i] += sign * terms[k] * StrictMath.cos(2 * Math.PI * k * i / n);
+    for (int i = 0; i <= n / 2; i++) {
+      // higher terms from the first one: cos (k + 1) x = 2 cos x cos kx - cos (k - 1) x
+      double c = StrictMath.cos(2 * Math.PI * i / n);
+      double before = 1;
+      double now = c;
+      double sum = terms[0];
+      for (int k = 1; k < terms.length; k++) {
+        sum += (k & 1) == 0 ? terms[k] * now : -terms[k] * now;
+        double after = 2 * c * now - before;
+        before = now;
+        now = after;
       }
+      w[i] = sum;
+    }
+    for (int i = n / 2 + 1; i < n; i++) {
+      w[i] = w[n - i];
     }
     return w;
   }

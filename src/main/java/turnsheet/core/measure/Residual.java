@@ -1,6 +1,7 @@
 package turnsheet.core.measure;
 
 import java.util.Arrays;
+import turnsheet.core.dsp.Rotation;
 
 /**
  * A trace without its mean and its straight line, relative to its own mean speed: what is left is
@@ -31,10 +32,11 @@ final class Residual {
     double s2 = 0;
     double y0 = 0;
     double y1 = 0;
+    Rotation rotation = new Rotation(0.5 / n, 1.0 / n);
     for (int i = 0; i < n; i++) {
+      rotation.advance();
       if (clean.usable(i)) {
-        double sine = StrictMath.sin(Math.PI * (i + 0.5) / n);
-        double w = sine * sine;
+        double w = 0.5 - 0.5 * rotation.cosine();
         double t = (i - (n - 1) / 2.0) / clean.rateHertz();
         double y = clean.trace().percent(i);
         s0 += w;

@@ -78,7 +78,10 @@ final class ToneProbe {
   }
 
   private void judge() {
-    double mean = Arrays.stream(work).average().orElse(0);
+    double mean = 0;
+    for (double x : work) {
+      mean += x / work.length;
+    }
     double scale = 2 / (work.length * Window.BLACKMAN_HARRIS.coherentGain());
     for (int i = 0; i < work.length; i++) {
       work[i] = (work[i] - mean) * window[i] * scale;

@@ -16,18 +16,36 @@ class KernelsTest {
 
   @Test
   void decimatorIsTheSumThatDefinesIt() {
-    FirDecimator kernel = new FirDecimator(taps, 7);
-    double[] out = new double[kernel.roomFor(in.length)];
-    int n = kernel.process(in, in.length, out);
-    assertThat(n).isEqualTo((in.length - taps.length) / 7 + 1);
-    for (int m = 0; m < n; m += 97) {
-      double sum = 0;
-      for (int i = 0; i < taps.length; i++) {
-        sum += taps[i] * in[7 * m + i];
+    for (int factor : new int[] {1, 2, 3, 4, 7, 8, 14, 65, 400, 5000}) {
+      FirDecimator kernel = new FirDecimator(taps, factor);
+      double[] out = new double[kernel.roomFor(in.length)];
+      int n = kernel.process(in, in.length, out);
+      assertThat(n).isEqualTo((in.length - taps.length) / factor + 1);
+      for (int m = 0; m < n; m++) {
+        // order of summation
+        assertThat(out[m]).isCloseTo(sum(taps, factor * m), within(1e-12));
       }
-      // order of summation
-      assertThat(out[m]).isCloseTo(sum, within(1e-12));
     }
+  }
+
+  @Test
+  void decimatorAppliesSeveralFilters() {
+    double[] other = new Random(9).doubles(taps.length, -1, 1).toArray();
+    FirDecimator kernel = new FirDecimator(new double[][] {taps, other}, 14);
+    double[][] out = new double[2][kernel.roomFor(in.length)];
+    int n = kernel.process(in, in.length, out);
+    for (int m = 0; m < n; m += 97) {
+      assertThat(out[0][m]).isCloseTo(sum(taps, 14 * m), within(1e-12));
+      assertThat(out[1][m]).isCloseTo(sum(other, 14 * m), within(1e-12));
+    }
+  }
+
+  private double sum(double[] weights, int at) {
+    double sum = 0;
+    for (int i = 0; i < weights.length; i++) {
+      sum += weights[i] * in[at + i];
+    }
+    return sum;
   }
 
   @Test
@@ -48,10 +66,12 @@ class KernelsTest {
   void cuttingTheStreamChangesNoBit() {
     double[] whole = overlapSave(in.length);
     double[] decimated = decimate(in.length, 7);
+    double[] dense = decimate(in.length, 1);
     double[] sparse = decimate(in.length, 5000);
     for (int block : new int[] {1, 13, 4096, 9999}) {
       assertThat(overlapSave(block)).isEqualTo(whole);
       assertThat(decimate(block, 7)).isEqualTo(decimated);
+      assertThat(decimate(block, 1)).isEqualTo(dense);
       assertThat(decimate(block, 5000)).isEqualTo(sparse);
     }
   }

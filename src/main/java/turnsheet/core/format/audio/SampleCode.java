@@ -131,8 +131,15 @@ enum SampleCode {
     }
 
     static void s24Little(byte[] in, int at, int stride, double[] out, int from, int to) {
-      for (int i = from, p = at; i < to; i++, p += stride) {
-        out[i] = (in[p + 2] << 16 | (in[p + 1] & 0xff) << 8 | (in[p] & 0xff)) * STEP_24;
+      int i = from;
+      int p = at;
+      if (i < to && p == 0) {
+        out[i++] = (in[2] << 16 | (in[1] & 0xff) << 8 | (in[0] & 0xff)) * STEP_24;
+        p += stride;
+      }
+      // one read of four bytes, of which the first belongs to the sample before
+      for (; i < to; i++, p += stride) {
+        out[i] = ((int) INT_LITTLE.get(in, p - 1) >> 8) * STEP_24;
       }
     }
 
