@@ -11,4 +11,9 @@ record Stretch(double startSeconds, double endSeconds) {
   double durationSeconds() {
     return endSeconds - startSeconds;
   }
+
+  /** The same with so much more at either end. */
+  Stretch widened(double seconds) {
+    return new Stretch(startSeconds - seconds, endSeconds + seconds);
+  }
 }

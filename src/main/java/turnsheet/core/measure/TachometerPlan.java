@@ -32,7 +32,7 @@ final class TachometerPlan {
   private final SampleOpener opener;
   private final MeasureSettings settings;
   private List<Reading.MainsLine> mains = List.of();
-  private ClipCounter clips = new ClipCounter();
+  private ClipCounter clips = ClipCounter.atFullScale();
 
   /** Opens the same samples again and again, from the start each time. */
   @FunctionalInterface
@@ -59,7 +59,7 @@ final class TachometerPlan {
     double middle = (low + high) / 2;
     EdgeOpener edges =
         () -> {
-          clips = new ClipCounter();
+          clips = ClipCounter.atFullScale();
           return new CrossingReader(
               new ClipCountingReader(opener.open(), clips), middle, BAND_SHARE * swing);
         };

@@ -4,9 +4,9 @@ import java.util.ArrayList;
 import java.util.List;
 
 /**
- * Watches the level of a tone for drop-outs and mends the phase steps across them, so that the
- * noise of a drop-out does not reach the filters behind. Steps come out some milliseconds later
- * than they go in, because the trouble begins before the level has fallen.
+ * Watches a tone for drop-outs and clicks and mends the phase steps across them, so that their
+ * noise does not reach the filters behind. Steps come out some milliseconds later than they go in,
+ * because the trouble begins before the level has fallen, and a click is known when it is over.
  */
 final class ToneLevel {
 
@@ -15,21 +15,28 @@ final class ToneLevel {
 
   private static final double SHORTEST_SECONDS = 0.001;
   private static final double GUARD_SECONDS = 0.004;
+  private static final double DELAY_SECONDS =
+      GUARD_SECONDS + ClickWatch.LONGEST_SECONDS + ClickWatch.QUIET_SECONDS;
   private static final double LEVEL_SECONDS = 2;
   private static final double STEP_SECONDS = 0.05;
 
   private final double rate;
   private final double startSeconds;
   private final int guard;
+  private final int delay;
   private final double[] steps;
   private final boolean[] bad;
   private final List<Stretch> dropouts = new ArrayList<>();
+  private final List<Stretch> clicks = new ArrayList<>();
+  private final ClickWatch watch;
   private double level;
   private double calmStep;
   private long index;
   private int left;
   private long goneSince = -1;
+  private double lastAmplitude;
   private double amplitudeSum;
+  private double amplitudeSquares;
   private long amplitudeCount;
 
   /**
@@ -40,14 +47,17 @@ final class ToneLevel {
     this.rate = rate;
     this.startSeconds = startSeconds;
     this.level = amplitude;
+    this.lastAmplitude = amplitude;
     this.guard = (int) Math.ceil(GUARD_SECONDS * rate);
-    this.steps = new double[guard + 1];
-    this.bad = new boolean[guard + 1];
+    this.delay = (int) Math.ceil(DELAY_SECONDS * rate);
+    this.steps = new double[delay + 1];
+    this.bad = new boolean[delay + 1];
+    this.watch = new ClickWatch(rate);
   }
 
   /** How many steps come out later than they go in. */
   int delay() {
-    return guard;
+    return delay;
   }
 
   /** Takes a step and its amplitude and gives the step of {@link #delay} earlier, mended. */
@@ -58,17 +68,29 @@ final class ToneLevel {
         goneSince = index;
       }
       left = guard;
-      java.util.Arrays.fill(bad, true);
+      spoil(guard);
+      watch.interrupt();
     } else {
       ended();
       level += (amplitude - level) / (LEVEL_SECONDS * rate);
       amplitudeSum += amplitude;
+      amplitudeSquares += amplitude * amplitude;
       amplitudeCount++;
     }
     int slot = (int) (index % steps.length);
     steps[slot] = step;
     bad[slot] = gone || left-- > 0;
     left = Math.max(left, 0);
+    if (!bad[slot]) {
+      // a click turns the tone, or makes it longer or shorter, as its phase falls
+      int clicked = watch.next(Math.hypot(step - calmStep, (amplitude - lastAmplitude) / level));
+      if (clicked > 0) {
+        spoil(clicked + guard);
+        left = guard;
+        clicks.add(new Stretch(time(index - clicked), time(index)));
+      }
+    }
+    lastAmplitude = amplitude;
     index++;
     int oldest = (int) (index % steps.length);
     if (bad[oldest]) {
@@ -76,6 +98,17 @@ final class ToneLevel {
     }
     calmStep += (steps[oldest] - calmStep) / (STEP_SECONDS * rate);
     return steps[oldest];
+  }
+
+  private double time(long at) {
+    return startSeconds + at / rate;
+  }
+
+  /** Marks the latest steps that have not gone out yet. */
+  private void spoil(int count) {
+    for (long i = Math.max(0, index - Math.min(count, delay)); i <= index; i++) {
+      bad[(int) (i % bad.length)] = true;
+    }
   }
 
   /** Whether the latest value belongs to a drop-out. */
@@ -99,6 +132,18 @@ final class ToneLevel {
 
   List<Stretch> dropouts() {
     return dropouts;
+  }
+
+  List<Stretch> clicks() {
+    return clicks;
+  }
+
+  /** Peak of a sine that would swing the level outside drop-outs as much, as a share of it. */
+  double swing() {
+    double mean = amplitude();
+    return mean == 0
+        ? 0
+        : Math.sqrt(2 * Math.max(0, amplitudeSquares / amplitudeCount / (mean * mean) - 1));
   }
 
   /** Mean amplitude outside drop-outs. */

@@ -124,7 +124,7 @@ final class TonePlan {
     NoiseProbe noise = new NoiseProbe(band);
     ToneLevel level =
         new ToneLevel(band.phaseRateHertz(), demodulator.delaySeconds(), tone.amplitude());
-    ClipCounter clips = new ClipCounter();
+    ClipCounter clips = ClipCounter.ofSine(rate / tone.hertz());
     SpeedTrace.Builder trace = new SpeedTrace.Builder();
     double[] block = new double[ToneDemodulator.blockSamples()];
     double[] steps = new double[block.length];
@@ -185,8 +185,9 @@ final class TonePlan {
     List<Reading.Dropout> dropouts = new ArrayList<>();
     for (Stretch s : level.dropouts()) {
       dropouts.add(new Reading.Dropout(s.startSeconds(), s.durationSeconds()));
-      excluded.add(new Stretch(s.startSeconds() - GUARD_SECONDS, s.endSeconds() + GUARD_SECONDS));
+      excluded.add(s.widened(GUARD_SECONDS));
     }
+    level.clicks().forEach(s -> excluded.add(s.widened(GUARD_SECONDS)));
     if (TraceFigures.longestUsableSeconds(speed, excluded) < TraceFigures.SHORTEST_SECONDS) {
       throw new RejectedException(
           "noTone",
@@ -218,7 +219,7 @@ final class TonePlan {
     List<Warning> warnings = new ArrayList<>(reader.warnings());
     warnings.addAll(RunUp.warnings(ends, speed.startSeconds()));
     warnings.addAll(figures.warnings());
-    warnings.addAll(ToneWarnings.of(band, signal));
+    warnings.addAll(ToneWarnings.of(band, signal, level));
     return new Result(
         figures, speed, reader.sampleRateHertz(), seconds, signal, List.copyOf(warnings));
   }

@@ -11,10 +11,11 @@ final class ToneWarnings {
 
   private static final double FULL_FLUTTER_HERTZ = 200;
   private static final double MAINS_DB = -40;
+  private static final double SWING_SHARE = 0.15;
 
   private ToneWarnings() {}
 
-  static List<Warning> of(ToneBand band, Reading.Signal signal) {
+  static List<Warning> of(ToneBand band, Reading.Signal signal, ToneLevel level) {
     List<Warning> warnings = new ArrayList<>();
     if (band.flutterHertz() < FULL_FLUTTER_HERTZ) {
       warnings.add(
@@ -30,7 +31,7 @@ final class ToneWarnings {
       warnings.add(
           warning(
               "clipped",
-              "%d samples are clipped at full scale: speed figures bear this, but record at a lower"
+              "%d samples lie on clipped tops: speed figures bear this, but record at a lower"
                   + " level.",
               signal.clippedSamples()));
     }
@@ -45,6 +46,23 @@ final class ToneWarnings {
               signal.dropouts().size(),
               seconds,
               signal.dropouts().get(0).startSeconds()));
+    }
+    if (!level.clicks().isEmpty()) {
+      warnings.add(
+          warning(
+              "clicks",
+              "%d clicks were heard, first at %.2f s: some milliseconds around each are left out of"
+                  + " the figures.",
+              level.clicks().size(),
+              level.clicks().get(0).startSeconds()));
+    }
+    if (level.swing() > SWING_SHARE) {
+      warnings.add(
+          warning(
+              "unsteadyLevel",
+              "The level of the tone swings by \u00b1%.0f %%: speed figures bear this, but look at"
+                  + " head contact and at how the tape is guided.",
+              100 * level.swing()));
     }
     for (Reading.MainsLine line : signal.mains()) {
       if (line.relativeDb() > MAINS_DB) {

@@ -1,0 +1,79 @@
+package turnsheet.core.measure;
+
+/**
+ * Finds clicks in a tone: bursts that stand out of what its phase and level do otherwise and are
+ * over sooner than a machine with any mass could change its speed and back.
+ *
+ * <p>The bounds are our own. Ten times the root mean square is far beyond the crest of fluctuation
+ * and of Gaussian noise; a burst that lasts longer than {@value #LONGEST_SECONDS} s is a change of
+ * speed and is left alone.
+ */
+final class ClickWatch {
+
+  /** The longest click with the ringing of the filters before. */
+  static final double LONGEST_SECONDS = 0.004;
+
+  /** A click is over when nothing stood out for so long. */
+  static final double QUIET_SECONDS = 0.001;
+
+  private static final double OUTSTANDING = 10;
+  private static final double MEMORY_SECONDS = 1;
+  private static final double SETTLING_SECONDS = 0.3;
+
+  private final double rate;
+  private double power;
+  private long count;
+  private long start = -1;
+  private long latest = -1;
+  private boolean tooLong;
+  private int clicks;
+
+  ClickWatch(double rateHertz) {
+    this.rate = rateHertz;
+  }
+
+  /**
+   * Takes how far the tone went off its slow course in one step, as a share of its length.
+   *
+   * @return how many of the latest steps belong to a click that is over with this one; 0 where none
+   */
+  int next(double swing) {
+    long now = count++;
+    boolean learning = now < SETTLING_SECONDS * rate;
+    if (!learning && swing * swing > OUTSTANDING * OUTSTANDING * power) {
+      start = start < 0 ? now : start;
+      latest = now;
+      tooLong = tooLong || now - start > LONGEST_SECONDS * rate;
+      if (tooLong) {
+        learn(swing);
+      }
+      return 0;
+    }
+    if (start < 0 || tooLong) {
+      learn(swing);
+    }
+    if (start < 0 || now - latest < QUIET_SECONDS * rate) {
+      return 0;
+    }
+    int length = tooLong ? 0 : (int) (now - start + 1);
+    start = -1;
+    tooLong = false;
+    clicks += length > 0 ? 1 : 0;
+    return length;
+  }
+
+  /** The tone is gone or back: whatever stood out belongs to that. */
+  void interrupt() {
+    start = -1;
+    tooLong = false;
+  }
+
+  int clicks() {
+    return clicks;
+  }
+
+  private void learn(double swing) {
+    double share = 1 / Math.min((double) count, MEMORY_SECONDS * rate);
+    power += (swing * swing - power) * share;
+  }
+}
