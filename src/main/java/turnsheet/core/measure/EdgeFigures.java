@@ -40,37 +40,47 @@ final class EdgeFigures {
   /** Of the stretch recorded: what the unit does at other times is not in its uncertainty. */
   private Figure meanPeriod() {
     double mean = scan.periods.meanSeconds() * 1e6;
-    double ends = Math.sqrt(2) * noise.floorSeconds() / scan.periods.spanSeconds();
+    double ends = mean * Math.sqrt(2) / scan.periods.spanSeconds();
     return Figure.of(
         mean,
         Budget.empty()
             .plus("recording clock", mean * clock)
-            .plus("noise of the first and last edge", mean * ends));
+            .plus("noise of the first and last edge", ends * noise.beyondGridSeconds())
+            .plus("step of the timer", ends * noise.gridSeconds()));
   }
 
   private Figure spread(Moments periods) {
     if (periods.count() < 2) {
       return Figure.absent("fewer than two periods needed no repair");
     }
-    return scattered(periods.sampleStdDev(), scan.spread.relativeUncertainty());
+    // each end of a period lies somewhere in its step
+    return scattered(periods.sampleStdDev(), scan.spread.relativeUncertainty(), 2);
   }
 
   private Figure cycleToCycle(PeriodStatistics periods) {
     double value = periods.cycleToCycleSeconds();
     return Double.isNaN(value)
         ? Figure.absent("no two periods follow each other without a repair")
-        : scattered(value, scan.steps.relativeUncertainty());
+        : scattered(value, scan.steps.relativeUncertainty(), 6); // the edge between counts twice
   }
 
-  private Figure scattered(double seconds, double relative) {
+  /**
+   * A scatter of the edges.
+   *
+   * @param gridParts how many times the variance of one step of the timer is in its square
+   */
+  private Figure scattered(double seconds, double relative, int gridParts) {
     double value = seconds * 1e6;
+    double grid = gridParts * noise.gridSeconds() * noise.gridSeconds();
+    double without = Math.sqrt(Math.max(0, seconds * seconds - grid)) * 1e6;
     return Double.isNaN(relative)
         ? Figure.withoutUncertainty(value, "the recording is too short to tell how it varies")
         : Figure.of(
             value,
             Budget.empty()
                 .plus("length of the recording", relative * value)
-                .plus("recording clock", clock * value));
+                .plus("recording clock", clock * value)
+                .plusRectangular("step of the timer", value - without));
   }
 
   /** Scatter of the mean, and how far the crossing level may be off where it is unknown. */

@@ -32,6 +32,12 @@ record EdgeNoise(double seconds, double relativeUncertainty, double gridSeconds)
     return Double.isNaN(seconds) ? gridSeconds : Math.max(seconds, gridSeconds);
   }
 
+  /** What of it the clock's step does not explain. */
+  double beyondGridSeconds() {
+    double floor = floorSeconds();
+    return Math.sqrt(Math.max(0, floor * floor - gridSeconds * gridSeconds));
+  }
+
   Figure microseconds() {
     return Double.isNaN(seconds)
         ? Figure.absent("fewer than six edges follow each other without a repair")

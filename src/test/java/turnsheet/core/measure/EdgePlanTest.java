@@ -135,6 +135,15 @@ class EdgePlanTest {
     assertThat(value(edges(r).edgeNoiseMicroseconds()))
         .isCloseTo(expected, within(0.016 * expected));
     assertThat(value(r.lines().get(0).peakPercent())).isCloseTo(0.2996, within(0.003));
+    // two edges bound the 30 s; each lies within its step like a rectangle (JCGM 100, F.2.2.1)
+    double mean = value(edges(r).meanPeriodMicroseconds());
+    assertThat(edges(r).meanPeriodMicroseconds().budget())
+        .filteredOn(c -> c.cause().equals("step of the timer"))
+        .singleElement()
+        .satisfies(
+            c ->
+                assertThat(c.standardUncertainty())
+                    .isCloseTo(mean * Math.sqrt(2) * 4e-6 / Math.sqrt(12) / 30, within(1e-7)));
   }
 
   @Test
