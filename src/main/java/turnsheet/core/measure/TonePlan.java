@@ -4,6 +4,7 @@ import java.io.IOException;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import turnsheet.core.dsp.Angle;
 import turnsheet.core.dsp.NoiseProbe;
 import turnsheet.core.dsp.SpeedSmoother;
 import turnsheet.core.dsp.ToneBand;
@@ -142,7 +143,7 @@ final class TonePlan {
       for (int i = 0; i < count; i++) {
         double re = demodulator.re(i);
         double im = demodulator.im(i);
-        double step = StrictMath.atan2(im * lastRe - re * lastIm, re * lastRe + im * lastIm);
+        double step = Angle.of(im * lastRe - re * lastIm, re * lastRe + im * lastIm);
         lastRe = re;
         lastIm = im;
         double mended = level.next(step, Math.sqrt(re * re + im * im));
