@@ -24,8 +24,14 @@ public final class EdgeSpeed {
   private final int half;
   private final double stepSeconds;
   private final float[][] taps;
+
+  /** The latest edges twice in a row, so that they always lie somewhere in one piece. */
   private final double[] ring;
+
+  private final double[] places;
+  private final int width;
   private final Output output;
+  private int oldest;
   private long index;
   private long nextOutput;
   private double startSeconds = Double.NaN;
@@ -51,7 +57,12 @@ public final class EdgeSpeed {
     double transition = 2 * Math.PI * (stop - pass);
     this.half = (int) Math.ceil((ATTENUATION_DB - 8) / (2.285 * transition) / 2);
     this.taps = derivatives(pass + stop, half, Math.max(16, FINENESS / decimation));
-    this.ring = new double[2 * half + 2];
+    this.width = 2 * half + 2;
+    this.ring = new double[2 * width];
+    this.places = new double[width];
+    for (int i = 0; i < width; i++) {
+      places[i] = i - half;
+    }
     this.output = output;
   }
 
@@ -80,14 +91,16 @@ public final class EdgeSpeed {
 
   /** Takes the next edge of the repaired train. */
   public void edge(double seconds) {
-    ring[(int) (index % ring.length)] = seconds;
+    ring[oldest] = seconds;
+    ring[oldest + width] = seconds;
+    oldest = oldest + 1 == width ? 0 : oldest + 1;
     index++;
-    if (index < ring.length) {
+    if (index < width) {
       return;
     }
     // the moments between the two middle edges
-    double from = at(index - half - 2);
-    double to = at(index - half - 1);
+    double from = ring[oldest + half];
+    double to = ring[oldest + half + 1];
     if (Double.isNaN(startSeconds)) {
       startSeconds = from;
     }
@@ -99,23 +112,20 @@ public final class EdgeSpeed {
     }
   }
 
-  private double at(long number) {
-    return ring[(int) (number % ring.length)];
-  }
-
   /** Seconds per edge at a share of the way between the two middle edges. */
   private double slope(double share) {
     float[] weights = taps[(int) Math.round(share * (taps.length - 1))];
-    long first = index - ring.length;
-    double origin = at(first + half);
-    double even = (at(index - 1) - at(first)) / (ring.length - 1);
+    double origin = ring[oldest + half];
+    double even = (ring[oldest + width - 1] - ring[oldest]) / (width - 1);
     double sum = 0;
-    for (int i = 0; i < ring.length; i++) {
+    double other = 0;
+    for (int i = 0; i < width; i += 2) {
       // only the departure from an even train is filtered: rounding of the weights then costs
       // nothing
-      sum += weights[i] * (at(first + i) - origin - (i - half) * even);
+      sum += weights[i] * (ring[oldest + i] - origin - places[i] * even);
+      other += weights[i + 1] * (ring[oldest + i + 1] - origin - places[i + 1] * even);
     }
-    return even + sum;
+    return even + (sum + other);
   }
 
   /** For every phase the derivative of the windowed sinc at the distance of each edge. */

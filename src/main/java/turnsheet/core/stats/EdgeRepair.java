@@ -45,6 +45,7 @@ public final class EdgeRepair {
       throw new IllegalArgumentException("period " + periodSeconds + " s");
     }
     Arrays.fill(recent, periodSeconds);
+    Arrays.fill(sorted, periodSeconds);
     this.expected = periodSeconds;
     this.sink = sink;
     this.gaps = gaps;
@@ -106,14 +107,28 @@ public final class EdgeRepair {
         sink.edge(last + distance * i / (lost + 1), false);
       }
     } else {
+      replace(recent[next], distance);
       recent[next] = distance;
       next = (next + 1) % RECENT;
-      System.arraycopy(recent, 0, sorted, 0, RECENT);
-      Arrays.sort(sorted);
       expected = sorted[RECENT / 2];
     }
     sink.edge(candidate, true);
     last = candidate;
     candidate = Double.NaN;
+  }
+
+  /** Keeps the recent distances in order: sorting them anew would cost more than all the rest. */
+  private void replace(double oldest, double newest) {
+    int at = 0;
+    while (sorted[at] != oldest) {
+      at++;
+    }
+    for (; at > 0 && sorted[at - 1] > newest; at--) {
+      sorted[at] = sorted[at - 1];
+    }
+    for (; at < RECENT - 1 && sorted[at + 1] < newest; at++) {
+      sorted[at] = sorted[at + 1];
+    }
+    sorted[at] = newest;
   }
 }

@@ -36,7 +36,7 @@ public final class StabilityLadder implements EdgeSink {
     last = seconds;
     for (Level level : levels) {
       // strides are powers of two: a level that does not take this edge ends the loop
-      if (index % level.stride != 0) {
+      if ((index & (level.stride - 1)) != 0) {
         break;
       }
       level.add(seconds - first);
@@ -75,7 +75,8 @@ public final class StabilityLadder implements EdgeSink {
     private final long stride;
     private final double[] ring;
     private final int lag;
-    private long taken;
+    private int next;
+    private boolean full;
     private double sum;
     private long terms;
 
@@ -87,11 +88,16 @@ public final class StabilityLadder implements EdgeSink {
     }
 
     void add(double time) {
-      ring[(int) (taken % ring.length)] = time;
-      taken++;
-      if (taken >= ring.length) {
-        double oldest = ring[(int) (taken % ring.length)];
-        double middle = ring[(int) ((taken + lag) % ring.length)];
+      ring[next] = time;
+      next++;
+      if (next == ring.length) {
+        next = 0;
+        full = true;
+      }
+      if (full) {
+        double oldest = ring[next];
+        int half = next + lag;
+        double middle = ring[half < ring.length ? half : half - ring.length];
         double d = time - 2 * middle + oldest;
         sum += d * d;
         terms++;
