@@ -1,8 +1,9 @@
 package turnsheet.reading.web;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
@@ -81,10 +82,10 @@ record BudgetTable(List<String> causes, List<Row> rows) {
 
   /** Two significant digits are all that an uncertainty can bear (GUM 7.2.6). */
   private static String shortly(Wording words, double uncertainty) {
-    return uncertainty == 0
-        ? "0"
-        : words
-            .numbers()
-            .plain(Double.parseDouble(String.format(Locale.ROOT, "%.1e", uncertainty)));
+    if (uncertainty == 0) {
+      return "0";
+    }
+    int places = new BigDecimal(uncertainty).round(new MathContext(2)).scale();
+    return words.numbers().fixed(uncertainty, Math.max(0, places));
   }
 }
