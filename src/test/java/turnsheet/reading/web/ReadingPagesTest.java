@@ -75,11 +75,11 @@ class ReadingPagesTest {
         .containsSubsequence(
             "length of the recording",
             "weighting",
-            "0.0006",
+            "0.00060",
             "largest",
-            "0.0008",
-            "0.001",
-            "0.002");
+            "0.00080",
+            "0.0010",
+            "0.0020");
     assertThat(page).containsOnlyOnce("number largest");
   }
 
