@@ -42,24 +42,26 @@ final class ClipCounter {
   }
 
   void add(double[] samples, int count) {
+    double near = largest - 1e-4;
     for (int i = 0; i < count; i++) {
       double x = samples[i];
       double magnitude = Math.abs(x);
-      if (magnitude < largest - 1e-4) {
+      if (magnitude < near) {
         run = 0;
       } else {
         if (magnitude > largest + 1e-4) {
           clipped = 0; // what was flat lower down was not clipped
         }
         largest = Math.max(largest, magnitude);
+        near = largest - 1e-4;
         run = x == last && run > 0 ? run + 1 : 1;
         if (run == shortestRun) {
           clipped += shortestRun;
         } else if (run > shortestRun) {
           clipped++;
         }
+        last = x; // means nothing after a smaller sample, as the run is over then
       }
-      last = x;
     }
   }
 
