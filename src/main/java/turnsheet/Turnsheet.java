@@ -16,6 +16,7 @@ import turnsheet.demo.SampleFolder;
     // the packages that have components; searching the others as well costs the start
     scanBasePackages = {
       "turnsheet.access",
+      "turnsheet.bench",
       "turnsheet.capture",
       "turnsheet.job",
       "turnsheet.reading",

@@ -85,6 +85,11 @@ public class CaptureStore {
     };
   }
 
+  /** Whether such bytes lie here. */
+  public boolean holds(StoredBytes bytes) {
+    return pathOf(bytes).toFile().length() == bytes.length() && Files.isRegularFile(pathOf(bytes));
+  }
+
   private static StoredBytes write(InputStream in, Path part)
       throws IOException, BrokenUploadException {
     MessageDigest digest = sha256();

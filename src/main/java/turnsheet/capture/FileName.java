@@ -3,12 +3,16 @@ package turnsheet.capture;
 import turnsheet.web.RefusedRequestException;
 
 /** What a file may be called. */
-final class FileName {
+public final class FileName {
 
   private FileName() {}
 
-  /** The name itself without blanks around it; anything that could mean a place is refused. */
-  static String checked(String given) {
+  /**
+   * The name itself without blanks around it; anything that could mean a place is refused.
+   *
+   * @throws RefusedRequestException if it is odd, empty or too long
+   */
+  public static String checked(String given) {
     String name = given.strip();
     boolean odd =
         name.chars().anyMatch(c -> c == '/' || c == '\\' || Character.isISOControl(c))

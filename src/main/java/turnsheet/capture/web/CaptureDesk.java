@@ -5,8 +5,6 @@ import java.io.InputStream;
 import java.nio.charset.StandardCharsets;
 import java.security.Principal;
 import java.util.UUID;
-import org.slf4j.Logger;
-import org.slf4j.LoggerFactory;
 import org.springframework.core.io.InputStreamResource;
 import org.springframework.core.io.Resource;
 import org.springframework.http.ContentDisposition;
@@ -21,6 +19,7 @@ import turnsheet.capture.CaptureStore;
 import turnsheet.capture.Captures;
 import turnsheet.capture.Intake;
 import turnsheet.capture.StoreException;
+import turnsheet.capture.UploadTrouble;
 import turnsheet.job.JobId;
 import turnsheet.job.Jobs;
 import turnsheet.web.NotFoundException;
@@ -29,8 +28,6 @@ import turnsheet.web.RefusedRequestException;
 /** What the pages and the REST resource ask alike. */
 @Component
 class CaptureDesk {
-
-  private static final Logger log = LoggerFactory.getLogger(CaptureDesk.class);
 
   private final Intake intake;
   private final Captures captures;
@@ -56,15 +53,8 @@ class CaptureDesk {
   Capture receive(CaptureKey key, String fileName, Principal visitor, InputStream in) {
     try {
       return intake.receive(key, fileName, visitor.getName(), in);
-    } catch (BrokenUploadException e) {
-      throw new RefusedRequestException(
-          "uploadBroken", "The transfer broke off and nothing was stored: upload it again.");
-    } catch (StoreException e) {
-      log.error("cannot store a capture", e);
-      throw new RefusedRequestException(
-          "notStored",
-          "The disk of the service did not take the recording, and nothing of it was stored: make"
-              + " room in the data folder, then upload it again.");
+    } catch (BrokenUploadException | StoreException e) {
+      throw UploadTrouble.refused(e);
     }
   }
 

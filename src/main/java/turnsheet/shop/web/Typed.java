@@ -12,7 +12,7 @@ import turnsheet.web.Shown;
  * What people type into fields. Numbers have a decimal point, or are vulgar fractions as the trade
  * writes speeds ({@code 33 1/3}). A comma is not taken: it may mean either of two numbers.
  */
-final class Typed {
+public final class Typed {
 
   private static final Pattern DECIMAL = Pattern.compile("[-+\u2212]?\\d{1,12}(\\.\\d{1,15})?");
   private static final Pattern FRACTION =
@@ -21,12 +21,12 @@ final class Typed {
   private Typed() {}
 
   /** The text without spaces around it and with plain line ends; empty where nothing was sent. */
-  static String text(@Nullable String sent) {
+  public static String text(@Nullable String sent) {
     return sent == null ? "" : sent.replace("\r\n", "\n").replace("\0", "").strip();
   }
 
   /** As a number to edit again: every digit that matters, none besides. */
-  static String number(@Nullable Double value) {
+  public static String number(@Nullable Double value) {
     if (value == null) {
       return "";
     }
@@ -36,7 +36,7 @@ final class Typed {
   }
 
   /** As a cell of a table, every digit that matters, cut at the point for the column. */
-  static Shown cell(double value) {
+  public static Shown cell(double value) {
     String digits = number(value).replace('-', '\u2212');
     int at = digits.indexOf('.');
     return new Shown(
@@ -56,7 +56,7 @@ final class Typed {
   }
 
   /** Reads a number above zero; a sentence goes to the field where there is none. */
-  static @Nullable Double positive(Errors errors, String field, String typed) {
+  public static @Nullable Double positive(Errors errors, String field, String typed) {
     Double value = number(errors, field, typed);
     if (value != null && !(value > 0)) {
       errors.rejectValue(field, "shop.form.positive");
@@ -69,7 +69,8 @@ final class Typed {
     return typed.isEmpty() ? null : positive(errors, field, typed);
   }
 
-  static @Nullable Double notNegativeOrNone(Errors errors, String field, String typed) {
+  /** Reads a number that may be left out, and is zero or more. */
+  public static @Nullable Double notNegativeOrNone(Errors errors, String field, String typed) {
     Double value = typed.isEmpty() ? null : number(errors, field, typed);
     if (value != null && value < 0) {
       errors.rejectValue(field, "shop.form.notNegative");
@@ -78,7 +79,8 @@ final class Typed {
     return value;
   }
 
-  static @Nullable Integer countOrNone(Errors errors, String field, String typed) {
+  /** Reads a whole number above zero that may be left out. */
+  public static @Nullable Integer countOrNone(Errors errors, String field, String typed) {
     if (typed.isEmpty()) {
       return null;
     }
