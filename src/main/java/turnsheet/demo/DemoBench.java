@@ -1,6 +1,7 @@
 package turnsheet.demo;
 
 import java.io.ByteArrayInputStream;
+import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.io.UncheckedIOException;
 import java.time.Clock;
@@ -11,12 +12,20 @@ import org.jspecify.annotations.Nullable;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.stereotype.Component;
 import org.springframework.transaction.support.TransactionOperations;
+import turnsheet.bench.ClockChecking;
+import turnsheet.bench.ClockQuestion;
+import turnsheet.bench.KeptFile;
 import turnsheet.capture.Capture;
 import turnsheet.capture.CaptureKey;
 import turnsheet.capture.CaptureState;
 import turnsheet.capture.Intake;
 import turnsheet.capture.Wish;
 import turnsheet.core.format.api.ReadOptions;
+import turnsheet.core.measure.CaptureKind;
+import turnsheet.core.measure.ClockError;
+import turnsheet.core.synth.SignalSynth;
+import turnsheet.core.synth.SpeedFunction;
+import turnsheet.core.synth.WavWriter;
 import turnsheet.shop.InstrumentId;
 import turnsheet.shop.MachineModel;
 import turnsheet.shop.MediumId;
@@ -31,13 +40,23 @@ class DemoBench {
 
   private static final String BROUGHT_BY = "demo";
 
+  /** What the clock of the invented sound card shows. */
+  private static final double CLOCK_PPM = 1.8;
+
   private final Intake intake;
+  private final ClockChecking clocks;
   private final JdbcClient jdbc;
   private final TransactionOperations transactions;
   private final Clock clock;
 
-  DemoBench(Intake intake, JdbcClient jdbc, TransactionOperations transactions, Clock clock) {
+  DemoBench(
+      Intake intake,
+      ClockChecking clocks,
+      JdbcClient jdbc,
+      TransactionOperations transactions,
+      Clock clock) {
     this.intake = intake;
+    this.clocks = clocks;
     this.jdbc = jdbc;
     this.transactions = transactions;
     this.clock = clock;
@@ -81,6 +100,33 @@ class DemoBench {
         setup.key(visit, CaptureKey.AS_RECEIVED),
         SampleUploads.RENAMED_ZIP,
         SampleUploads.refused(SampleUploads.RENAMED_ZIP));
+  }
+
+  /**
+   * Checks a clock by half a minute of a true 1000 Hz; whether to take it is left to the visitor.
+   */
+  void checkClock(InstrumentId instrument) {
+    int rate = 8000;
+    double[] tone =
+        SignalSynth.tone(
+            SpeedFunction.constant(0), 1000, rate * (1 + CLOCK_PPM * 1e-6), 30, 0.3, 50, 1);
+    ByteArrayOutputStream out = new ByteArrayOutputStream();
+    try {
+      WavWriter.write(out, rate, 16, tone);
+      KeptFile file = clocks.keep("kilohertz.wav", new ByteArrayInputStream(out.toByteArray()));
+      clocks.check(
+          instrument,
+          new ClockQuestion(
+              "Invented reference oscillator",
+              new ClockError.Reference(1000, 0.05),
+              1,
+              CaptureKind.TONE,
+              null),
+          file,
+          BROUGHT_BY);
+    } catch (IOException e) {
+      throw new UncheckedIOException("the demo cannot be stored", e);
+    }
   }
 
   private Visits visitsAt(int daysAgo) {

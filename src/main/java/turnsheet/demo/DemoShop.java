@@ -71,6 +71,7 @@ class DemoShop {
                     MediumId.next(), "Test record 3150 Hz", SampleUploads.TONE_HZ, 0.1, null, ""))
             .id();
 
+    bench.checkClock(recorder);
     reelTransport(recorder, controller, tape);
     recordPlayer(recorder, disc);
     dictationMachine(controller);

@@ -33,7 +33,12 @@ class AccessibilityIT {
 
   /** Pages that look different from one recording or unit to the next. */
   private static final Map<String, Integer> SEVERAL =
-      Map.of("/readings/{id}", 2, "/captures/{id}", 3, "/visits/{id}", 2, "/visits/{id}/sheet", 2);
+      Map.of(
+          "/readings/{id}", 2,
+          "/captures/{id}", 3,
+          "/visits/{id}", 2,
+          "/visits/{id}/sheet", 2,
+          "/instruments/{id}", 2);
 
   private static final String LINKS =
       "return [...document.querySelectorAll('a[href]')].map((a) => a.href.split('#')[0])";
@@ -73,7 +78,8 @@ class AccessibilityIT {
 
     System.out.println("Pages looked at: " + String.join(" ", shapes));
     assertThat(shapes)
-        .contains("/", "/units/{id}", "/visits/{id}", "/readings/{id}", "/models/{id}", "/shop");
+        .contains("/", "/units/{id}", "/visits/{id}", "/readings/{id}", "/models/{id}", "/shop")
+        .contains("/instruments/{id}/clock-checks/{id}", "/instruments/{id}/clock-checks/new");
     assertThat(wrong).as(String.join("\n", wrong)).isEmpty();
   }
 

@@ -116,11 +116,14 @@ record ClockPage(
   private static List<String> remarks(ClockCheck check, ClockCheck.Before before, Wording words) {
     List<String> remarks = new ArrayList<>();
     String own = plusMinus(check.found().expandedUncertaintyPpm(), words);
-    if (check.isWorseThan(before)) {
+    boolean open = check.taken() == null;
+    if (open && check.isWorseThan(before)) {
       remarks.add(words.text("bench.check.worse", own, reckoned(before, words)));
     }
     if (check.contradicts(before)) {
-      remarks.add(words.text("bench.check.contradicts"));
+      remarks.add(
+          words.text("bench.check.contradicts")
+              + (open ? " " + words.text("bench.check.again") : ""));
     }
     if (check.isShort()) {
       remarks.add(
