@@ -102,7 +102,7 @@ public final class Ratios {
 
   /** The smallest heap in which two hours can be measured, within two megabytes. */
   private static void heap() throws IOException, InterruptedException {
-    Recordings.tone(120, 192_000, 2);
+    Recordings.tone(120, 192_000, 2); // made by a process that has the memory for it
     int enough = 512;
     int tooSmall = 16;
     while (enough - tooSmall > 2) {

@@ -13,15 +13,25 @@ public final class MagnitudeHistogram {
 
   private static final int DROPPED_BITS = 11;
 
-  private final int[] counts = new int[1 << (31 - DROPPED_BITS)];
+  /** Classes of one power of two; a stream meets a few dozen of the 256 there are. */
+  private static final int OCTAVE = 1 << (23 - DROPPED_BITS);
+
+  private static final int CLASSES = 1 << (31 - DROPPED_BITS);
+
+  private final int[][] octaves = new int[CLASSES / OCTAVE][0];
   private long total;
-  private int lowest = counts.length;
+  private int lowest = CLASSES;
   private int highest = -1;
 
   /** Counts |x|; x is finite. */
   public void add(double x) {
     int index = Float.floatToRawIntBits((float) Math.abs(x)) >>> DROPPED_BITS;
-    counts[index]++;
+    int[] octave = octaves[index / OCTAVE];
+    if (octave.length == 0) {
+      octave = new int[OCTAVE];
+      octaves[index / OCTAVE] = octave;
+    }
+    octave[index % OCTAVE]++;
     total++;
     lowest = Math.min(lowest, index);
     highest = Math.max(highest, index);
@@ -44,23 +54,29 @@ public final class MagnitudeHistogram {
     double wanted = share * total;
     long below = 0;
     for (int i = lowest; i <= highest; i++) {
-      if (below + counts[i] >= wanted && counts[i] > 0) {
+      int count = count(i);
+      if (below + count >= wanted && count > 0) {
         double from = Float.intBitsToFloat(i << DROPPED_BITS);
         double to = Float.intBitsToFloat((i + 1) << DROPPED_BITS);
-        return from + (to - from) * (wanted - below) / counts[i];
+        return from + (to - from) * (wanted - below) / count;
       }
-      below += counts[i];
+      below += count;
     }
     throw new IllegalStateException("share " + share);
   }
 
+  private int count(int index) {
+    int[] octave = octaves[index / OCTAVE];
+    return octave.length == 0 ? 0 : octave[index % OCTAVE];
+  }
+
   /** Forgets everything. */
   public void clear() {
-    if (highest >= lowest) {
-      Arrays.fill(counts, lowest, highest + 1, 0);
+    for (int[] octave : octaves) {
+      Arrays.fill(octave, 0);
     }
     total = 0;
-    lowest = counts.length;
+    lowest = CLASSES;
     highest = -1;
   }
 }
