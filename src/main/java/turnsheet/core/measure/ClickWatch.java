@@ -20,7 +20,10 @@ final class ClickWatch {
   private static final double MEMORY_SECONDS = 1;
   private static final double SETTLING_SECONDS = 0.3;
 
-  private final double rate;
+  private final long settling;
+  private final long longest;
+  private final long quiet;
+  private final double memory;
   private double power;
   private long count;
   private long start = -1;
@@ -29,30 +32,34 @@ final class ClickWatch {
   private int clicks;
 
   ClickWatch(double rateHertz) {
-    this.rate = rateHertz;
+    this.settling = Math.round(SETTLING_SECONDS * rateHertz);
+    this.longest = Math.round(LONGEST_SECONDS * rateHertz);
+    this.quiet = Math.round(QUIET_SECONDS * rateHertz);
+    this.memory = MEMORY_SECONDS * rateHertz;
   }
 
   /**
-   * Takes how far the tone went off its slow course in one step, as a share of its length.
+   * Takes how far the tone went off its slow course in one step.
    *
+   * @param squared that way as a share of the tone's length, squared
    * @return how many of the latest steps belong to a click that is over with this one; 0 where none
    */
-  int next(double swing) {
+  int next(double squared) {
     long now = count++;
-    boolean learning = now < SETTLING_SECONDS * rate;
-    if (!learning && swing * swing > OUTSTANDING * OUTSTANDING * power) {
+    boolean learning = now < settling;
+    if (!learning && squared > OUTSTANDING * OUTSTANDING * power) {
       start = start < 0 ? now : start;
       latest = now;
-      tooLong = tooLong || now - start > LONGEST_SECONDS * rate;
+      tooLong = tooLong || now - start > longest;
       if (tooLong) {
-        learn(swing);
+        learn(squared);
       }
       return 0;
     }
     if (start < 0 || tooLong) {
-      learn(swing);
+      learn(squared);
     }
-    if (start < 0 || now - latest < QUIET_SECONDS * rate) {
+    if (start < 0 || now - latest < quiet) {
       return 0;
     }
     int length = tooLong ? 0 : (int) (now - start + 1);
@@ -72,8 +79,7 @@ final class ClickWatch {
     return clicks;
   }
 
-  private void learn(double swing) {
-    double share = 1 / Math.min((double) count, MEMORY_SECONDS * rate);
-    power += (swing * swing - power) * share;
+  private void learn(double squared) {
+    power += (squared - power) / Math.min((double) count, memory);
   }
 }

@@ -22,6 +22,8 @@ final class ToneLevel {
 
   private final double rate;
   private final double startSeconds;
+  private final double levelShare;
+  private final double stepShare;
   private final int guard;
   private final int delay;
   private final double[] steps;
@@ -32,6 +34,7 @@ final class ToneLevel {
   private double level;
   private double calmStep;
   private long index;
+  private int slot;
   private int left;
   private long goneSince = -1;
   private double lastAmplitude;
@@ -46,6 +49,8 @@ final class ToneLevel {
   ToneLevel(double rate, double startSeconds, double amplitude) {
     this.rate = rate;
     this.startSeconds = startSeconds;
+    this.levelShare = 1 / (LEVEL_SECONDS * rate);
+    this.stepShare = 1 / (STEP_SECONDS * rate);
     this.level = amplitude;
     this.lastAmplitude = amplitude;
     this.guard = (int) Math.ceil(GUARD_SECONDS * rate);
@@ -72,18 +77,19 @@ final class ToneLevel {
       watch.interrupt();
     } else {
       ended();
-      level += (amplitude - level) / (LEVEL_SECONDS * rate);
+      level += (amplitude - level) * levelShare;
       amplitudeSum += amplitude;
       amplitudeSquares += amplitude * amplitude;
       amplitudeCount++;
     }
-    int slot = (int) (index % steps.length);
     steps[slot] = step;
     bad[slot] = gone || left-- > 0;
     left = Math.max(left, 0);
     if (!bad[slot]) {
       // a click turns the tone, or makes it longer or shorter, as its phase falls
-      int clicked = watch.next(Math.hypot(step - calmStep, (amplitude - lastAmplitude) / level));
+      double turned = step - calmStep;
+      double grown = (amplitude - lastAmplitude) / level;
+      int clicked = watch.next(turned * turned + grown * grown);
       if (clicked > 0) {
         spoil(clicked + guard);
         left = guard;
@@ -92,12 +98,13 @@ final class ToneLevel {
     }
     lastAmplitude = amplitude;
     index++;
-    int oldest = (int) (index % steps.length);
-    if (bad[oldest]) {
+    slot = slot + 1 == steps.length ? 0 : slot + 1;
+    // the oldest one stands where the next will go
+    if (bad[slot]) {
       return calmStep;
     }
-    calmStep += (steps[oldest] - calmStep) / (STEP_SECONDS * rate);
-    return steps[oldest];
+    calmStep += (steps[slot] - calmStep) * stepShare;
+    return steps[slot];
   }
 
   private double time(long at) {
@@ -106,8 +113,8 @@ final class ToneLevel {
 
   /** Marks the latest steps that have not gone out yet. */
   private void spoil(int count) {
-    for (long i = Math.max(0, index - Math.min(count, delay)); i <= index; i++) {
-      bad[(int) (i % bad.length)] = true;
+    for (int i = 0; i <= Math.min(count, delay); i++) {
+      bad[Math.floorMod(slot - i, bad.length)] = true;
     }
   }
 

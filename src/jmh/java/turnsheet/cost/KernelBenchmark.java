@@ -1,4 +1,4 @@
-package turnsheet.bench;
+package turnsheet.cost;
 
 import java.util.Random;
 import java.util.concurrent.TimeUnit;

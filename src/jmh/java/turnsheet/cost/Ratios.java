@@ -1,4 +1,4 @@
-package turnsheet.bench;
+package turnsheet.cost;
 
 import com.sun.management.OperatingSystemMXBean;
 import de.siegmar.fastcsv.reader.CsvReader;

@@ -1,5 +1,5 @@
 /** What a measurement costs; see docs/performance.md. Not part of the service. */
 @NullMarked
-package turnsheet.bench;
+package turnsheet.cost;
 
 import org.jspecify.annotations.NullMarked;

@@ -1,4 +1,4 @@
-package turnsheet.bench;
+package turnsheet.cost;
 
 import java.io.IOException;
 import java.io.InputStream;

@@ -1,4 +1,4 @@
-package turnsheet.bench;
+package turnsheet.cost;
 
 import java.io.BufferedOutputStream;
 import java.io.BufferedWriter;
