@@ -55,7 +55,7 @@ class UnitView {
   /**
    * The page with the chart that was asked for.
    *
-   * @param settingId chosen speed setting; null or unknown for the first that was measured
+   * @param settingId chosen speed setting; null or unknown for the one measured most often
    * @param path chosen figure; null or unknown for one that has a limit, else two-sigma
    */
   Optional<UnitPage> find(
@@ -132,14 +132,10 @@ class UnitView {
     List<SpeedSetting> settings = model.settings();
     Optional<SpeedSetting> asked =
         settings.stream().filter(s -> s.id().toString().equals(settingId)).findFirst();
+    // of equals the first on the selector
     Optional<SpeedSetting> measured =
-        settings.stream()
-            .filter(
-                s ->
-                    all.stream()
-                        .anyMatch(r -> r.readingId() != null && r.settingId().equals(s.id())))
-            .findFirst();
-    return asked.or(() -> measured).or(() -> settings.stream().findFirst()).orElse(null);
+        settings.stream().reduce((a, b) -> measured(all, b) > measured(all, a) ? b : a);
+    return asked.or(() -> measured).orElse(null);
   }
 
   private static FigureName chosenFigure(
@@ -165,6 +161,10 @@ class UnitView {
             .filter(l -> l.figure() == figure)
             .findFirst()
             .orElse(null);
+  }
+
+  private static long measured(List<CaptureResult> all, SpeedSetting at) {
+    return all.stream().filter(r -> r.readingId() != null && r.settingId().equals(at.id())).count();
   }
 
   private static List<UnitPage.Choice> settingChoices(
