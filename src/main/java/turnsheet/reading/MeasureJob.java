@@ -2,6 +2,7 @@ package turnsheet.reading;
 
 import java.io.IOException;
 import java.util.List;
+import java.util.Optional;
 import java.util.UUID;
 import org.slf4j.Logger;
 import org.slf4j.LoggerFactory;
@@ -13,11 +14,13 @@ import turnsheet.capture.CaptureId;
 import turnsheet.capture.CaptureState;
 import turnsheet.capture.CaptureStore;
 import turnsheet.capture.Captures;
+import turnsheet.capture.Looked;
 import turnsheet.core.diagnose.RotatingPart;
 import turnsheet.core.diagnose.Suspects;
 import turnsheet.core.measure.Measurement;
 import turnsheet.core.measure.Outcome;
 import turnsheet.core.measure.Reading;
+import turnsheet.core.signal.Rejection;
 import turnsheet.job.JobHandler;
 import turnsheet.job.JobRun;
 import turnsheet.shop.MachineModel;
@@ -67,6 +70,15 @@ class MeasureJob implements JobHandler {
     CaptureChoices choices = capture == null ? null : capture.choices();
     if (capture == null || choices == null || capture.state() != CaptureState.QUEUED) {
       log.info("capture {} does not wait to be measured", id.value());
+      return;
+    }
+    Looked looked = capture.looked();
+    Optional<Rejection> tooLong =
+        looked == null
+            ? Optional.empty()
+            : HeapNeed.refusal(looked.recognised(), Runtime.getRuntime().maxMemory());
+    if (tooLong.isPresent()) {
+      captures.refused(id, tooLong.get());
       return;
     }
     Outcome outcome =
