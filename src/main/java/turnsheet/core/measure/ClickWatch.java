@@ -29,7 +29,6 @@ final class ClickWatch {
   private long start = -1;
   private long latest = -1;
   private boolean tooLong;
-  private int clicks;
 
   ClickWatch(double rateHertz) {
     this.settling = Math.round(SETTLING_SECONDS * rateHertz);
@@ -65,7 +64,6 @@ final class ClickWatch {
     int length = tooLong ? 0 : (int) (now - start + 1);
     start = -1;
     tooLong = false;
-    clicks += length > 0 ? 1 : 0;
     return length;
   }
 
@@ -73,10 +71,6 @@ final class ClickWatch {
   void interrupt() {
     start = -1;
     tooLong = false;
-  }
-
-  int clicks() {
-    return clicks;
   }
 
   private void learn(double squared) {
