@@ -2,6 +2,7 @@ package turnsheet.reading;
 
 import java.util.List;
 import java.util.function.Function;
+import turnsheet.core.diagnose.DecisionRule;
 import turnsheet.core.diagnose.Judgement;
 import turnsheet.core.diagnose.Verdict;
 import turnsheet.core.diagnose.Verdicts;
@@ -13,9 +14,10 @@ import turnsheet.shop.ServiceLimit;
 public record Judged(ServiceLimit limit, Figure figure, Judgement judgement) {
 
   /** Judges each figure that has a value and a limit, in the order of the limits. */
-  public static List<Judged> all(List<ServiceLimit> limits, Function<FigureName, Figure> figures) {
+  public static List<Judged> all(
+      List<ServiceLimit> limits, Function<FigureName, Figure> figures, DecisionRule rule) {
     return limits.stream()
-        .map(limit -> of(limit, figures.apply(limit.figure())))
+        .map(limit -> of(limit, figures.apply(limit.figure()), rule))
         .filter(judged -> judged.figure().value() != null)
         .toList();
   }
@@ -24,7 +26,7 @@ public record Judged(ServiceLimit limit, Figure figure, Judgement judgement) {
     return judgement.verdict() == verdict;
   }
 
-  private static Judged of(ServiceLimit limit, Figure figure) {
-    return new Judged(limit, figure, Verdicts.judge(figure, limit.upperBound()));
+  public static Judged of(ServiceLimit limit, Figure figure, DecisionRule rule) {
+    return new Judged(limit, figure, Verdicts.judge(figure, limit.upperBound(), rule));
   }
 }

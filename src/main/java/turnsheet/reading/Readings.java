@@ -32,6 +32,9 @@ public final class Readings {
         and (later.made_at > r.made_at or (later.made_at = r.made_at and later.id > r.id)))
       """;
 
+  private static final String FLUCTUATION_BLOCKS = "fluctuation-blocks";
+  private static final String INDICATION_BLOCKS = "indication-blocks";
+
   private final JdbcClient jdbc;
   private final TransactionOperations transactions;
   private final Clock clock;
@@ -114,11 +117,24 @@ public final class Readings {
     if (name == SeriesName.HISTOGRAM) {
       throw new IllegalArgumentException("a histogram is no curve");
     }
-    return content(id, name).map(SeriesCodec::decodeCurve);
+    return content(id, name.word()).map(SeriesCodec::decodeCurve);
   }
 
   public Optional<Series.Histogram> histogram(ReadingId id) {
-    return content(id, SeriesName.HISTOGRAM).map(SeriesCodec::decodeHistogram);
+    return content(id, SeriesName.HISTOGRAM.word()).map(SeriesCodec::decodeHistogram);
+  }
+
+  /** The fluctuation in blocks; empty for readings of the time before it was kept. */
+  public Optional<Series.Blocks> blocks(ReadingId id) {
+    return content(id, FLUCTUATION_BLOCKS)
+        .flatMap(
+            fluctuation ->
+                content(id, INDICATION_BLOCKS)
+                    .map(
+                        indication ->
+                            new Series.Blocks(
+                                SeriesCodec.decodeBlocks(fluctuation),
+                                SeriesCodec.decodeBlocks(indication))));
   }
 
   private ReadingId addOnce(CaptureId capture, Reading reading, Series series) {
@@ -140,12 +156,14 @@ public final class Readings {
     for (FigureName name : FigureName.values()) {
       addFigure(id, name, name.of(reading));
     }
-    addSeries(id, SeriesName.TRACE, SeriesCodec.encode(Curve.of(series.trace())));
-    addSeries(id, SeriesName.SPECTRUM, SeriesCodec.encode(Curve.of(series.spectrum())));
+    addSeries(id, SeriesName.TRACE.word(), SeriesCodec.encode(Curve.of(series.trace())));
+    addSeries(id, SeriesName.SPECTRUM.word(), SeriesCodec.encode(Curve.of(series.spectrum())));
     Series.Histogram histogram = series.histogram();
     if (histogram != null) {
-      addSeries(id, SeriesName.HISTOGRAM, SeriesCodec.encode(histogram));
+      addSeries(id, SeriesName.HISTOGRAM.word(), SeriesCodec.encode(histogram));
     }
+    addSeries(id, FLUCTUATION_BLOCKS, SeriesCodec.encode(series.blocks().fluctuation()));
+    addSeries(id, INDICATION_BLOCKS, SeriesCodec.encode(series.blocks().indication()));
     return id;
   }
 
@@ -158,17 +176,17 @@ public final class Readings {
         .update();
   }
 
-  private void addSeries(ReadingId id, SeriesName name, byte[] content) {
+  private void addSeries(ReadingId id, String name, byte[] content) {
     jdbc.sql("insert into reading_series values (:reading, :name, :content)")
         .param("reading", id.value())
-        .param("name", name.word())
+        .param("name", name)
         .param("content", content)
         .update();
   }
 
-  private Optional<byte[]> content(ReadingId id, SeriesName name) {
+  private Optional<byte[]> content(ReadingId id, String name) {
     return jdbc.sql("select content from reading_series where reading_id = ? and name = ?")
-        .params(id.value(), name.word())
+        .params(id.value(), name)
         .query((row, number) -> row.getBytes(1))
         .optional();
   }

@@ -2,6 +2,7 @@ package turnsheet.reading;
 
 import java.nio.ByteBuffer;
 import turnsheet.core.measure.Series;
+import turnsheet.core.stats.MagnitudeBlocks;
 import turnsheet.reading.chart.Curve;
 
 /**
@@ -9,8 +10,9 @@ import turnsheet.reading.chart.Curve;
  *
  * <p>A curve: layout number (int), start and step (double), samples per point (int), points (int),
  * then single precision values, all low ones and, where points are buckets, all high ones. A
- * histogram: layout number (int), start and width (double), classes (int), then counts (long). Big
- * endian.
+ * histogram: layout number (int), start and width (double), classes (int), then counts (long).
+ * Blocks: layout number, first class, blocks, classes (int), then each block's mean square (double)
+ * and counts (int). Big endian.
  */
 final class SeriesCodec {
 
@@ -19,6 +21,7 @@ final class SeriesCodec {
 
   private static final int CURVE = 1;
   private static final int HISTOGRAM = 2;
+  private static final int BLOCKS = 3;
   private static final int CURVE_HEADER_BYTES = 4 + 8 + 8 + 4 + 4;
   private static final int HISTOGRAM_HEADER_BYTES = 4 + 8 + 8 + 4;
 
@@ -73,6 +76,38 @@ final class SeriesCodec {
     long[] counts = new long[in.getInt()];
     in.asLongBuffer().get(counts);
     return new Series.Histogram(from, width, counts);
+  }
+
+  static byte[] encode(MagnitudeBlocks blocks) {
+    int blockBytes = Double.BYTES + blocks.classes() * Integer.BYTES;
+    ByteBuffer out =
+        ByteBuffer.allocate(4 * Integer.BYTES + blocks.size() * blockBytes)
+            .putInt(BLOCKS)
+            .putInt(blocks.firstClass())
+            .putInt(blocks.size())
+            .putInt(blocks.classes());
+    for (int b = 0; b < blocks.size(); b++) {
+      out.putDouble(blocks.meanSquare(b));
+      for (int k = 0; k < blocks.classes(); k++) {
+        out.putInt(blocks.count(b, k));
+      }
+    }
+    return out.array();
+  }
+
+  static MagnitudeBlocks decodeBlocks(byte[] content) {
+    ByteBuffer in = ByteBuffer.wrap(content);
+    requireLayout(BLOCKS, in.getInt());
+    int firstClass = in.getInt();
+    int[][] counts = new int[in.getInt()][in.getInt()];
+    double[] meanSquares = new double[counts.length];
+    for (int b = 0; b < counts.length; b++) {
+      meanSquares[b] = in.getDouble();
+      for (int k = 0; k < counts[b].length; k++) {
+        counts[b][k] = in.getInt();
+      }
+    }
+    return new MagnitudeBlocks(firstClass, counts, meanSquares);
   }
 
   private static float[] floats(ByteBuffer in, int count) {

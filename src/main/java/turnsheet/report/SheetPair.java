@@ -2,8 +2,12 @@ package turnsheet.report;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Set;
 import org.jspecify.annotations.Nullable;
+import turnsheet.core.diagnose.DecisionRule;
 import turnsheet.core.diagnose.Difference;
+import turnsheet.core.diagnose.Run;
+import turnsheet.core.diagnose.Runs;
 import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.FigureName;
 import turnsheet.core.measure.Reading;
@@ -45,11 +49,15 @@ public record SheetPair(
   }
 
   static SheetPair of(
-      SpeedSetting setting, List<ServiceLimit> limits, VisitReading before, VisitReading after) {
+      SpeedSetting setting,
+      List<ServiceLimit> limits,
+      DecisionRule rule,
+      VisitReading before,
+      VisitReading after) {
     Reading from = before.stored().reading();
     Reading to = after.stored().reading();
-    List<Judged> judgedFrom = Judged.all(limits, name -> name.of(from));
-    List<Judged> judgedTo = Judged.all(limits, name -> name.of(to));
+    List<Judged> judgedFrom = Judged.all(limits, name -> name.of(from), rule);
+    List<Judged> judgedTo = Judged.all(limits, name -> name.of(to), rule);
     List<Comparison> figures = new ArrayList<>();
     for (FigureName name : FigureName.values()) {
       Figure one = name.of(from);
@@ -62,10 +70,14 @@ public record SheetPair(
                 other,
                 judged(judgedFrom, name),
                 judged(judgedTo, name),
-                Difference.of(one, other)));
+                Difference.of(run(name, one), run(name, other), 0)));
       }
     }
     return new SheetPair(setting, before, after, figures, cautions(from, to));
+  }
+
+  private static Runs run(FigureName name, Figure figure) {
+    return new Runs(List.of(Run.of(name, figure, null, Set.of())));
   }
 
   private static List<Caution> cautions(Reading from, Reading to) {

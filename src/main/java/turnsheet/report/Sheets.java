@@ -10,6 +10,7 @@ import org.springframework.stereotype.Service;
 import turnsheet.access.ShopProfiles;
 import turnsheet.access.ShopProfiles.ShopProfile;
 import turnsheet.capture.CaptureKey;
+import turnsheet.core.diagnose.DecisionRule;
 import turnsheet.core.measure.CaptureKind;
 import turnsheet.reading.Judged;
 import turnsheet.reading.Readings;
@@ -17,6 +18,7 @@ import turnsheet.reading.VisitReading;
 import turnsheet.shop.MachineModel;
 import turnsheet.shop.MachineModels;
 import turnsheet.shop.ServiceLimit;
+import turnsheet.shop.ShopRules;
 import turnsheet.shop.SpeedSetting;
 import turnsheet.shop.VisitId;
 import turnsheet.shop.VisitSummary;
@@ -30,14 +32,21 @@ public class Sheets {
   private final MachineModels models;
   private final Readings readings;
   private final ShopProfiles profiles;
+  private final ShopRules rules;
   private final Clock clock;
 
   Sheets(
-      Visits visits, MachineModels models, Readings readings, ShopProfiles profiles, Clock clock) {
+      Visits visits,
+      MachineModels models,
+      Readings readings,
+      ShopProfiles profiles,
+      ShopRules rules,
+      Clock clock) {
     this.visits = visits;
     this.models = models;
     this.readings = readings;
     this.profiles = profiles;
+    this.rules = rules;
     this.clock = clock;
   }
 
@@ -61,11 +70,11 @@ public class Sheets {
         VisitReading before = newest(here, CaptureKey.AS_RECEIVED);
         VisitReading after = newest(here, CaptureKey.AFTER_REPAIR);
         if (before != null && after != null) {
-          pairs.add(SheetPair.of(setting, limits, before, after));
+          pairs.add(SheetPair.of(setting, limits, rules.get().rule(), before, after));
         }
         here.stream()
             .filter(r -> before == null || after == null || isFreeLabel(r))
-            .map(r -> single(setting, limits, r))
+            .map(r -> single(setting, limits, rules.get().rule(), r))
             .forEach(singles::add);
       }
     }
@@ -74,9 +83,9 @@ public class Sheets {
   }
 
   private static SheetSingle single(
-      SpeedSetting setting, List<ServiceLimit> limits, VisitReading reading) {
+      SpeedSetting setting, List<ServiceLimit> limits, DecisionRule rule, VisitReading reading) {
     return new SheetSingle(
-        setting, reading, Judged.all(limits, name -> name.of(reading.stored().reading())));
+        setting, reading, Judged.all(limits, name -> name.of(reading.stored().reading()), rule));
   }
 
   private static boolean isFreeLabel(VisitReading reading) {

@@ -1,7 +1,10 @@
 package turnsheet.web;
 
 import java.util.Locale;
+import org.jspecify.annotations.Nullable;
 import org.springframework.context.MessageSource;
+import turnsheet.core.diagnose.DecisionRule;
+import turnsheet.core.diagnose.Judgement;
 import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.FigureName;
 
@@ -49,6 +52,39 @@ public final class Wording {
   /** A bound with its unit. */
   public String limit(FigureName name, double upperBound) {
     return bound(name, upperBound) + "\u202f" + name.unit();
+  }
+
+  /** The decision rule in one sentence, to stand beside every verdict. */
+  public String rule(DecisionRule rule) {
+    return text("web.rule." + rule.name().toLowerCase(Locale.ROOT));
+  }
+
+  /** Why a figure is undecided; null where it is decided. */
+  public @Nullable String undecided(Judgement judgement) {
+    Judgement.Why why = judgement.why();
+    if (why == null) {
+      return null;
+    }
+    return switch (why) {
+      case NO_UNCERTAINTY -> judgement.detail();
+      case LIMIT_IN_INTERVAL -> text("web.undecided.interval");
+      case NOT_RESOLVED -> text("web.undecided.resolution");
+    };
+  }
+
+  /** The probability of conformity, whole percents, never 0 or 100; empty where there is none. */
+  public String probability(Judgement judgement) {
+    Double probability = judgement.conformanceProbability();
+    if (probability == null) {
+      return "";
+    }
+    if (probability < 0.01) {
+      return text("web.probability.below", "1");
+    }
+    if (probability > 0.99) {
+      return text("web.probability.above", "99");
+    }
+    return text("web.probability", numbers.fixed(100 * probability, 0));
   }
 
   public static Numbers.Sign signOf(FigureName name) {

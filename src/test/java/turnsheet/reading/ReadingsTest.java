@@ -7,6 +7,7 @@ import java.util.List;
 import org.junit.jupiter.api.Test;
 import turnsheet.capture.CaptureId;
 import turnsheet.capture.CaptureState;
+import turnsheet.core.diagnose.DecisionRule;
 import turnsheet.core.diagnose.Verdict;
 import turnsheet.core.measure.FigureName;
 import turnsheet.core.measure.Reading;
@@ -117,7 +118,8 @@ class ReadingsTest {
     List<Judged> judged =
         Judged.all(
             results.limitsOnTheBench().getOrDefault(bench.setting, List.of()),
-            results.onTheBench().get(0)::figure);
+            results.onTheBench().get(0)::figure,
+            DecisionRule.GUARDED);
 
     // 0.37 keeps 0.5; 0.067 with U = 0.002 breaks 0.06
     assertThat(judged)

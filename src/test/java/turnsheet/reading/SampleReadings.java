@@ -8,6 +8,7 @@ import turnsheet.core.measure.Series;
 import turnsheet.core.signal.SpeedTrace;
 import turnsheet.core.signal.Warning;
 import turnsheet.core.stats.Budget;
+import turnsheet.core.stats.MagnitudeBlocks;
 
 /** Readings made by hand, for tests of what is done with readings. */
 public final class SampleReadings {
@@ -56,6 +57,15 @@ public final class SampleReadings {
         List.of(new Warning("shortCapture", "The recording lasts 4 s: record 60 s or more.")));
   }
 
+  /** Eight blocks of a sine of 0.05 %. */
+  public static Series.Blocks blocks() {
+    MagnitudeBlocks.Collector collector = new MagnitudeBlocks.Collector(125);
+    for (int i = 0; i < 1000; i++) {
+      collector.add(0.05 * Math.sin(2 * Math.PI * 9.98 * i / 500));
+    }
+    return new Series.Blocks(collector.blocks(), collector.blocks());
+  }
+
   public static Series series() {
     float[] speed = new float[2000];
     for (int i = 0; i < speed.length; i++) {
@@ -66,6 +76,7 @@ public final class SampleReadings {
     return new Series(
         SpeedTrace.of(0, 500, speed),
         new Series.Spectrum(0.25, peaks),
-        new Series.Histogram(300, 0.5, new long[] {1, 5, 2}));
+        new Series.Histogram(300, 0.5, new long[] {1, 5, 2}),
+        blocks());
   }
 }

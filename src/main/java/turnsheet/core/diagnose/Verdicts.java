@@ -3,12 +3,7 @@ package turnsheet.core.diagnose;
 import org.hipparchus.distribution.continuous.NormalDistribution;
 import turnsheet.core.measure.Figure;
 
-/**
- * The decision rule for figures against an upper bound of their magnitude.
- *
- * <p>Non-binary with guard band after ILAC-G8:09/2019 clause 4.2, guard band w = U. The guide's
- * conditional pass and conditional fail are told as one word, undecided.
- */
+/** Figures against an upper bound of their magnitude, by the rule that the shop has chosen. */
 public final class Verdicts {
 
   private static final NormalDistribution STANDARD_NORMAL = new NormalDistribution();
@@ -18,33 +13,41 @@ public final class Verdicts {
   /**
    * Judges a figure.
    *
+   * <p>A capture whose uncertainty reaches the limit cannot tell whether the limit is kept: the
+   * figure is undecided by either rule, unless it is beyond the limit by more than its interval.
+   * The floor of a capture needs no rule of its own, as what it may have added to a figure stands
+   * in the figure's uncertainty: of a figure at its floor, 1.15 times the value.
+   *
    * @param upperBound limit of the magnitude, in the unit of the figure, not negative
    */
-  public static Judgement judge(Figure figure, double upperBound) {
+  public static Judgement judge(Figure figure, double upperBound, DecisionRule rule) {
     if (!(upperBound >= 0 && Double.isFinite(upperBound))) {
       throw new IllegalArgumentException("limit " + upperBound);
     }
     Double value = figure.value();
     Double uncertainty = figure.expandedUncertainty();
     if (value == null || uncertainty == null) {
-      return new Judgement(Verdict.UNDECIDED, figure.why());
+      return new Judgement(Verdict.UNDECIDED, null, Judgement.Why.NO_UNCERTAINTY, figure.why());
     }
     double magnitude = Math.abs(value);
-    if (magnitude + uncertainty <= upperBound) {
-      return new Judgement(Verdict.WITHIN, null);
-    }
+    double standard = Coverage.standardUncertainty(figure);
+    Double probability =
+        standard > 0
+            ? conformanceProbability(value, standard, -upperBound, upperBound)
+            : Double.valueOf(magnitude <= upperBound ? 1 : 0);
     if (magnitude - uncertainty > upperBound) {
-      return new Judgement(Verdict.OUTSIDE, null);
+      return new Judgement(Verdict.OUTSIDE, probability, null, null);
     }
-    return new Judgement(
-        Verdict.UNDECIDED, "the limit lies inside the interval of the figure's uncertainty");
-  }
-
-  /** The rule in one sentence, to be printed beside every verdict. */
-  public static String ruleSentence() {
-    return "Decision rule: guard band equal to the expanded uncertainty U (k = 2) on both sides of"
-        + " the limit, after ILAC-G8:09/2019, non-binary; within where value plus U keeps the"
-        + " limit, outside where value minus U is beyond it, otherwise undecided.";
+    if (uncertainty >= upperBound) {
+      return new Judgement(Verdict.UNDECIDED, probability, Judgement.Why.NOT_RESOLVED, null);
+    }
+    if (rule == DecisionRule.SIMPLE) {
+      Verdict verdict = magnitude <= upperBound ? Verdict.WITHIN : Verdict.OUTSIDE;
+      return new Judgement(verdict, probability, null, null);
+    }
+    return magnitude + uncertainty <= upperBound
+        ? new Judgement(Verdict.WITHIN, probability, null, null)
+        : new Judgement(Verdict.UNDECIDED, probability, Judgement.Why.LIMIT_IN_INTERVAL, null);
   }
 
   /**
@@ -58,5 +61,12 @@ public final class Verdicts {
       throw new IllegalArgumentException("standard uncertainty " + standardUncertainty);
     }
     return STANDARD_NORMAL.cumulativeProbability((upperLimit - value) / standardUncertainty);
+  }
+
+  /** The same for two limits. */
+  public static double conformanceProbability(
+      double value, double standardUncertainty, double lowerLimit, double upperLimit) {
+    return conformanceProbability(value, standardUncertainty, upperLimit)
+        - conformanceProbability(value, standardUncertainty, lowerLimit);
   }
 }

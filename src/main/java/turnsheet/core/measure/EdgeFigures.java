@@ -44,7 +44,7 @@ final class EdgeFigures {
     return Figure.of(
         mean,
         Budget.empty()
-            .plus("recording clock", mean * clock)
+            .plus(Causes.CLOCK, mean * clock)
             .plus("noise of the first and last edge", ends * noise.beyondGridSeconds())
             .plus("step of the timer", ends * noise.gridSeconds()));
   }
@@ -78,8 +78,8 @@ final class EdgeFigures {
         : Figure.of(
             value,
             Budget.empty()
-                .plus("length of the recording", relative * value)
-                .plus("recording clock", clock * value)
+                .plus(Causes.LENGTH, relative * value)
+                .plus(Causes.CLOCK, clock * value)
                 .plusRectangular("step of the timer", value - without));
   }
 
@@ -121,7 +121,6 @@ final class EdgeFigures {
     return new Reading.Stability(
         rung.tauSeconds(),
         Figure.of(
-            rung.deviation(),
-            Budget.empty().plus("length of the recording", relative * rung.deviation())));
+            rung.deviation(), Budget.empty().plus(Causes.LENGTH, relative * rung.deviation())));
   }
 }

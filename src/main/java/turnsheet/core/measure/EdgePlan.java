@@ -101,7 +101,8 @@ final class EdgePlan {
                 noise.floorFigure(figures.floorPercent())),
             warnings);
     return new Outcome.Measured(
-        reading, new Series(trace, figures.spectrum(), histogram(scan.histogram)));
+        reading,
+        new Series(trace, figures.spectrum(), histogram(scan.histogram), figures.blocks()));
   }
 
   private void requireSteady(EdgeScan scan, EdgeProbe probe) throws RejectedException {

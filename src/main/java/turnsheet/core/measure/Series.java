@@ -2,15 +2,26 @@ package turnsheet.core.measure;
 
 import org.jspecify.annotations.Nullable;
 import turnsheet.core.signal.SpeedTrace;
+import turnsheet.core.stats.MagnitudeBlocks;
 
 /**
- * The curves behind a reading, for drawing.
+ * The curves behind a reading, for drawing, and its fluctuation in blocks, for comparing.
  *
  * @param trace unweighted speed relative to nominal, in percent
  * @param spectrum of the speed, relative to the mean
  * @param histogram of the periods; null for a tone
+ * @param blocks of the weighted fluctuation
  */
-public record Series(SpeedTrace trace, Spectrum spectrum, @Nullable Histogram histogram) {
+public record Series(
+    SpeedTrace trace, Spectrum spectrum, @Nullable Histogram histogram, Blocks blocks) {
+
+  /**
+   * The weighted fluctuation of a capture in blocks of 2.5 s or more.
+   *
+   * @param fluctuation percent of the mean speed
+   * @param indication what the quasi-peak indicator read, in percent
+   */
+  public record Blocks(MagnitudeBlocks fluctuation, MagnitudeBlocks indication) {}
 
   /** Amplitude spectrum: bin k is at {@code k * stepHz} and reads the peak of a line in percent. */
   public static final class Spectrum {

@@ -71,7 +71,8 @@ final class TonePlan {
             null,
             result.signal,
             result.warnings);
-    return new Outcome.Measured(reading, new Series(result.trace, figures.spectrum(), null));
+    return new Outcome.Measured(
+        reading, new Series(result.trace, figures.spectrum(), null, figures.blocks()));
   }
 
   Result measure(Recording recording) throws IOException, RejectedException {

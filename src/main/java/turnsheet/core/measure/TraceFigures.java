@@ -128,8 +128,8 @@ final class TraceFigures {
 
   private Budget systematic(double relativeSpeed) {
     return Budget.empty()
-        .plus("recording clock", settings.clockStandardUncertaintyPpm() * 1e-4 * relativeSpeed)
-        .plus("reference medium", settings.mediumStandardUncertaintyPercent());
+        .plus(Causes.CLOCK, settings.clockStandardUncertaintyPpm() * 1e-4 * relativeSpeed)
+        .plus(Causes.MEDIUM, settings.mediumStandardUncertaintyPercent());
   }
 
   /**
@@ -170,8 +170,8 @@ final class TraceFigures {
     return Figure.of(
         v.percent(),
         Budget.empty()
-            .plus("length of the recording", v.lengthUncertaintyPercent())
-            .plusRectangular("weighting", WEIGHTING_SHARE * v.percent())
+            .plus(Causes.LENGTH, v.lengthUncertaintyPercent())
+            .plusRectangular(Causes.WEIGHTING, WEIGHTING_SHARE * v.percent())
             .plusRectangular("noise of the recording", noiseShare(v.percent(), floor)));
   }
 
@@ -200,7 +200,7 @@ final class TraceFigures {
     return Figure.of(
         rms,
         Budget.empty()
-            .plus("length of the recording", length)
+            .plus(Causes.LENGTH, length)
             .plusRectangular("noise of the recording", noiseShare(rms, floor)));
   }
 
@@ -220,8 +220,7 @@ final class TraceFigures {
           Budget.empty()
               .plus("noise", noiseHertz)
               .plusRectangular("interpolation", 0.02 * resolution)
-              .plus(
-                  "recording clock", f.rateHertz() * settings.clockStandardUncertaintyPpm() * 1e-6);
+              .plus(Causes.CLOCK, f.rateHertz() * settings.clockStandardUncertaintyPpm() * 1e-6);
       Budget peakU =
           Budget.empty()
               .plus("noise", f.noisePercent())
@@ -247,6 +246,11 @@ final class TraceFigures {
       peaks[k] = Math.sqrt(highest);
     }
     return new Series.Spectrum(group * sharp.stepHertz(), peaks);
+  }
+
+  /** The weighted fluctuation and the indicator's readings in blocks. */
+  Series.Blocks blocks() {
+    return new Series.Blocks(weighted.fluctuation(), weighted.indication());
   }
 
   /** What the noise of the recording alone would show as unweighted figure. */

@@ -5,6 +5,7 @@ import java.util.List;
 import turnsheet.core.dsp.OverlapSaveFir;
 import turnsheet.core.dsp.QuasiPeakDetector;
 import turnsheet.core.dsp.Weighting;
+import turnsheet.core.stats.MagnitudeBlocks;
 import turnsheet.core.stats.MagnitudeHistogram;
 
 /**
@@ -18,12 +19,19 @@ final class WeightedFigures {
   private static final double SETTLING_SECONDS = 2;
   private static final double SETTLING_SHARE = 0.2;
 
+  /** Long against the memory of the weighting above 0.4 Hz, short against the usual minute. */
+  private static final double RESAMPLED_SECONDS = 2.5;
+
+  private static final int MOST_RESAMPLED = 60;
+
   private final double rateHertz;
   private final double[] response;
   private final Tally whole = new Tally();
   private final Tally block = new Tally();
   private final List<double[]> blocks = new ArrayList<>();
   private final long blockSamples;
+  private final MagnitudeBlocks.Collector fluctuation;
+  private final MagnitudeBlocks.Collector indication;
 
   private static final class Tally {
     final MagnitudeHistogram magnitude = new MagnitudeHistogram();
@@ -58,6 +66,10 @@ final class WeightedFigures {
     }
     long count = Math.max(3, Math.min(12, (long) (settled / rateHertz)));
     blockSamples = Math.max(1, settled / count);
+    long resampled =
+        Math.max((long) Math.ceil(RESAMPLED_SECONDS * rateHertz), settled / MOST_RESAMPLED);
+    fluctuation = new MagnitudeBlocks.Collector(resampled);
+    indication = new MagnitudeBlocks.Collector(resampled);
     for (CleanTrace.Piece piece : residual.clean().pieces()) {
       run(residual, piece);
     }
@@ -98,11 +110,13 @@ final class WeightedFigures {
       QuasiPeakDetector detector) {
     int settled = piece.from() + settling(piece);
     for (int i = 0; i < count; i++) {
-      double indication = detector.next(out[i]);
+      double indicated = detector.next(out[i]);
       long index = at + i;
       if (index >= settled && clean.usable((int) index)) {
-        whole.add(out[i], indication);
-        block.add(out[i], indication);
+        whole.add(out[i], indicated);
+        block.add(out[i], indicated);
+        fluctuation.add(out[i]);
+        indication.add(indicated);
         if (block.magnitude.total() >= blockSamples) {
           blocks.add(block.readings());
           block.clear();
@@ -117,6 +131,16 @@ final class WeightedFigures {
 
   double settledSeconds() {
     return whole.magnitude.total() / rateHertz;
+  }
+
+  /** The weighted fluctuation in blocks. */
+  MagnitudeBlocks fluctuation() {
+    return fluctuation.blocks();
+  }
+
+  /** The indicator's readings in blocks. */
+  MagnitudeBlocks indication() {
+    return indication.blocks();
   }
 
   Value twoSigma() {

@@ -12,6 +12,7 @@ import turnsheet.reading.CaptureResult;
 import turnsheet.reading.CaptureResults;
 import turnsheet.shop.PageOf;
 import turnsheet.shop.PageQuery;
+import turnsheet.shop.ShopRules;
 import turnsheet.shop.VisitId;
 import turnsheet.shop.VisitSummary;
 import turnsheet.shop.Visits;
@@ -25,14 +26,21 @@ class BenchView {
   private final Visits visits;
   private final CaptureResults results;
   private final JdbcClient jdbc;
+  private final ShopRules rules;
   private final MessageSource messages;
   private final Times times;
 
   BenchView(
-      Visits visits, CaptureResults results, JdbcClient jdbc, MessageSource messages, Times times) {
+      Visits visits,
+      CaptureResults results,
+      JdbcClient jdbc,
+      ShopRules rules,
+      MessageSource messages,
+      Times times) {
     this.visits = visits;
     this.results = results;
     this.jdbc = jdbc;
+    this.rules = rules;
     this.messages = messages;
     this.times = times;
   }
@@ -42,7 +50,7 @@ class BenchView {
     List<VisitSummary> stays = visits.open(PageQuery.first(PageOf.LARGEST)).items();
     Map<VisitId, List<CaptureResult>> byVisit =
         results.onTheBench().stream().collect(Collectors.groupingBy(CaptureResult::visitId));
-    Standing standing = new Standing(results.limitsOnTheBench());
+    Standing standing = new Standing(results.limitsOnTheBench(), rules.get().rule());
     Bench bench = new Bench(stays, byVisit, standing, words, times);
     List<BenchPage.Recording> waiting = bench.recordings(CaptureState.RECOGNISED);
     List<BenchPage.Recording> measuring = bench.recordings(CaptureState.QUEUED);

@@ -43,7 +43,7 @@ record FigureRow(
             words.bound(name, judged.limit().upperBound()),
             judged.limit().origin(),
             word(judged.judgement().verdict()),
-            judged.judgement().why());
+            words.undecided(judged.judgement()));
   }
 
   static String word(Verdict verdict) {

@@ -8,7 +8,6 @@ import java.util.OptionalDouble;
 import org.jspecify.annotations.Nullable;
 import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
-import turnsheet.core.diagnose.Verdicts;
 import turnsheet.core.measure.FigureName;
 import turnsheet.core.measure.MeasureSettings;
 import turnsheet.core.measure.Reading;
@@ -23,6 +22,7 @@ import turnsheet.reading.StoredReading;
 import turnsheet.shop.MachineModel;
 import turnsheet.shop.MachineModels;
 import turnsheet.shop.ServiceLimit;
+import turnsheet.shop.ShopRules;
 import turnsheet.web.Crumb;
 import turnsheet.web.Numbers;
 import turnsheet.web.Times;
@@ -37,6 +37,7 @@ class ReadingView {
   private final Readings readings;
   private final CapturePlaces places;
   private final MachineModels models;
+  private final ShopRules rules;
   private final MessageSource messages;
   private final Times times;
 
@@ -44,11 +45,13 @@ class ReadingView {
       Readings readings,
       CapturePlaces places,
       MachineModels models,
+      ShopRules rules,
       MessageSource messages,
       Times times) {
     this.readings = readings;
     this.places = places;
     this.models = models;
+    this.rules = rules;
     this.messages = messages;
     this.times = times;
   }
@@ -60,7 +63,7 @@ class ReadingView {
   private ReadingPage page(StoredReading stored, Wording words) {
     Reading reading = stored.reading();
     CapturePlace place = places.find(stored.captureId()).orElseThrow();
-    List<Judged> judged = Judged.all(limits(place), name -> name.of(reading));
+    List<Judged> judged = Judged.all(limits(place), name -> name.of(reading), rules.get().rule());
     FigureTables tables = new FigureTables(words, reading, judged);
     Drawings drawings = new Drawings(words, stored.id());
     return new ReadingPage(
@@ -78,7 +81,7 @@ class ReadingView {
         tables.main(),
         tables.periods(),
         tables.recording(),
-        Verdicts.ruleSentence(),
+        words.rule(rules.get().rule()),
         readings
             .curve(stored.id(), SeriesName.TRACE)
             .map(curve -> drawings.trace(curve, deviationLimit(judged)))

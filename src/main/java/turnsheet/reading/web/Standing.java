@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.Map;
 import org.jspecify.annotations.Nullable;
 import turnsheet.capture.CaptureState;
+import turnsheet.core.diagnose.DecisionRule;
 import turnsheet.core.diagnose.Verdict;
 import turnsheet.reading.CaptureResult;
 import turnsheet.reading.Judged;
@@ -16,13 +17,15 @@ import turnsheet.shop.SpeedSettingId;
 final class Standing {
 
   private final Map<SpeedSettingId, List<ServiceLimit>> limits;
+  private final DecisionRule rule;
 
-  Standing(Map<SpeedSettingId, List<ServiceLimit>> limits) {
+  Standing(Map<SpeedSettingId, List<ServiceLimit>> limits, DecisionRule rule) {
     this.limits = limits;
+    this.rule = rule;
   }
 
   List<Judged> judged(CaptureResult result) {
-    return Judged.all(limits.getOrDefault(result.settingId(), List.of()), result::figure);
+    return Judged.all(limits.getOrDefault(result.settingId(), List.of()), result::figure, rule);
   }
 
   /** The worst of all verdicts of a capture; null where nothing is limited. */

@@ -15,6 +15,7 @@ import turnsheet.reading.CaptureResults;
 import turnsheet.shop.MachineModel;
 import turnsheet.shop.MachineModels;
 import turnsheet.shop.ServiceLimit;
+import turnsheet.shop.ShopRules;
 import turnsheet.shop.SpeedSetting;
 import turnsheet.shop.UnitId;
 import turnsheet.shop.UnitSummary;
@@ -34,6 +35,7 @@ class UnitView {
   private final Visits visits;
   private final MachineModels models;
   private final CaptureResults results;
+  private final ShopRules rules;
   private final MessageSource messages;
   private final Times times;
 
@@ -42,12 +44,14 @@ class UnitView {
       Visits visits,
       MachineModels models,
       CaptureResults results,
+      ShopRules rules,
       MessageSource messages,
       Times times) {
     this.units = units;
     this.visits = visits;
     this.models = models;
     this.results = results;
+    this.rules = rules;
     this.messages = messages;
     this.times = times;
   }
@@ -71,7 +75,7 @@ class UnitView {
     MachineModel model = models.find(summary.unit().modelId()).orElseThrow();
     List<CaptureResult> all = results.ofUnit(id);
     List<Visit> stays = visits.ofUnit(id);
-    Standing standing = new Standing(VisitView.limits(List.of(model)));
+    Standing standing = new Standing(VisitView.limits(List.of(model)), rules.get().rule());
     SpeedSetting setting = chosenSetting(model, all, settingId);
     FigureName figure = chosenFigure(model, setting, path);
     History history = new History(words, times, standing);

@@ -16,6 +16,7 @@ import turnsheet.reading.CaptureResults;
 import turnsheet.shop.MachineModel;
 import turnsheet.shop.MachineModels;
 import turnsheet.shop.ServiceLimit;
+import turnsheet.shop.ShopRules;
 import turnsheet.shop.SpeedSetting;
 import turnsheet.shop.SpeedSettingId;
 import turnsheet.shop.Visit;
@@ -33,6 +34,7 @@ class VisitView {
   private final Visits visits;
   private final MachineModels models;
   private final CaptureResults results;
+  private final ShopRules rules;
   private final MessageSource messages;
   private final Times times;
 
@@ -40,11 +42,13 @@ class VisitView {
       Visits visits,
       MachineModels models,
       CaptureResults results,
+      ShopRules rules,
       MessageSource messages,
       Times times) {
     this.visits = visits;
     this.models = models;
     this.results = results;
+    this.rules = rules;
     this.messages = messages;
     this.times = times;
   }
@@ -58,7 +62,7 @@ class VisitView {
     MachineModel model = models.find(summary.modelId()).orElseThrow();
     List<CaptureResult> all = results.ofVisit(visit.id());
     List<String> conditions = conditions(all);
-    Standing standing = new Standing(limits(List.of(model)));
+    Standing standing = new Standing(limits(List.of(model)), rules.get().rule());
     List<VisitPage.Row> rows =
         model.settings().stream().map(s -> row(s, conditions, all, standing, words)).toList();
     String unitName = summary.modelName() + " " + summary.serialNumber();

@@ -94,6 +94,7 @@ class SheetApi {
           switch (c.difference().change()) {
             case IMPROVED -> "improved";
             case WORSE -> "worse";
+            case TOO_SMALL_TO_MATTER -> "tooSmallToMatter";
             case NO_CHANGE_SHOWN -> "noChangeShown";
           },
           judged == null ? null : judged.limit().upperBound(),

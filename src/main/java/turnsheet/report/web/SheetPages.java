@@ -7,7 +7,6 @@ import org.jspecify.annotations.Nullable;
 import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
 import turnsheet.core.diagnose.Difference;
-import turnsheet.core.diagnose.Verdicts;
 import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.FigureName;
 import turnsheet.core.measure.Reading;
@@ -18,6 +17,7 @@ import turnsheet.report.Comparison;
 import turnsheet.report.Sheet;
 import turnsheet.report.SheetPair;
 import turnsheet.report.SheetSingle;
+import turnsheet.shop.ShopRules;
 import turnsheet.shop.Visit;
 import turnsheet.web.Times;
 import turnsheet.web.Wording;
@@ -31,11 +31,13 @@ public class SheetPages {
   private final MessageSource messages;
   private final Times times;
   private final Readings readings;
+  private final ShopRules rules;
 
-  SheetPages(MessageSource messages, Times times, Readings readings) {
+  SheetPages(MessageSource messages, Times times, Readings readings, ShopRules rules) {
     this.messages = messages;
     this.times = times;
     this.readings = readings;
+    this.rules = rules;
   }
 
   /** The sheet in the language of a reader. */
@@ -55,7 +57,7 @@ public class SheetPages {
         times.minute(sheet.madeAt()),
         sheet.pairs().stream().map(pair -> pair(words, pair)).toList(),
         sheet.singles().stream().map(single -> single(words, single)).toList(),
-        Verdicts.ruleSentence());
+        words.rule(rules.get().rule()));
   }
 
   private SheetPage.Pair pair(Wording words, SheetPair pair) {
@@ -154,6 +156,7 @@ public class SheetPages {
     return switch (difference.change()) {
       case IMPROVED -> "improved";
       case WORSE -> "worse";
+      case TOO_SMALL_TO_MATTER -> "small";
       case NO_CHANGE_SHOWN -> "same";
     };
   }
