@@ -5,11 +5,13 @@ import java.time.Instant;
 /**
  * One machine with a serial number.
  *
+ * @param code on its label; no other unit has it, and it stays for good
  * @param serialNumber no other unit of the model has it
  * @param note may be empty
  */
 public record Unit(
     UnitId id,
+    UnitCode code,
     ModelId modelId,
     CustomerId customerId,
     String serialNumber,

@@ -52,6 +52,14 @@ public final class Units {
         .optional();
   }
 
+  /** The unit whose label says this. */
+  public Optional<Unit> coded(UnitCode code) {
+    return jdbc.sql("select * from unit where code = ?")
+        .param(code.letters())
+        .query(Units::unit)
+        .optional();
+  }
+
   /** The unit with the names of its model and customer. */
   public Optional<UnitSummary> summary(UnitId id) {
     return jdbc.sql(SUMMARY + JOINED + " where u.id = ?")
@@ -90,16 +98,24 @@ public final class Units {
    */
   public Unit add(ModelId model, CustomerId customer, String serialNumber, String note) {
     Unit added =
-        new Unit(UnitId.next(), model, customer, serialNumber, note, Columns.kept(clock.instant()));
+        new Unit(
+            UnitId.next(),
+            freeCode(),
+            model,
+            customer,
+            serialNumber,
+            note,
+            Columns.kept(clock.instant()));
     refuseTakenNumber(added);
     try {
       jdbc.sql(
               """
-              insert into unit (id, model_id, customer_id, serial_number, note, created_at)
-              values (?, ?, ?, ?, ?, ?)
+              insert into unit (id, code, model_id, customer_id, serial_number, note, created_at)
+              values (?, ?, ?, ?, ?, ?, ?)
               """)
           .params(
               added.id().value(),
+              added.code().letters(),
               model.value(),
               customer.value(),
               serialNumber,
@@ -126,8 +142,17 @@ public final class Units {
               if (!old.modelId().equals(model) && hasCaptures(id)) {
                 throw new RefusedChangeException("modelHasCaptures", old.serialNumber());
               }
-              return write(new Unit(id, model, customer, serialNumber, note, old.createdAt()));
+              return write(
+                  new Unit(id, old.code(), model, customer, serialNumber, note, old.createdAt()));
             });
+  }
+
+  private UnitCode freeCode() {
+    UnitCode code = UnitCode.next();
+    while (coded(code).isPresent()) {
+      code = UnitCode.next();
+    }
+    return code;
   }
 
   private Unit write(Unit changed) {
@@ -190,6 +215,7 @@ public final class Units {
   private static Unit unit(ResultSet row, int number) throws SQLException {
     return new Unit(
         new UnitId(Columns.uuid(row, "id")),
+        new UnitCode(row.getString("code")),
         new ModelId(Columns.uuid(row, "model_id")),
         new CustomerId(Columns.uuid(row, "customer_id")),
         row.getString("serial_number"),

@@ -5,6 +5,7 @@ import static org.assertj.core.api.Assertions.assertThatThrownBy;
 
 import java.time.Clock;
 import java.time.Duration;
+import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import turnsheet.testing.Database;
 import turnsheet.testing.OnEachDatabase;
@@ -27,6 +28,14 @@ class UnitsTest {
     Unit added = shop.unit("1001");
     assertThat(units.find(added.id())).contains(added);
     assertThat(units.find(UnitId.next())).isEmpty();
+  }
+
+  @Test
+  void isFoundByItsCodeWhichStaysThroughAChange() {
+    Unit unit = shop.unit("1001");
+    units.change(unit.id(), unit.modelId(), unit.customerId(), "1002", "");
+    assertThat(units.coded(unit.code())).map(Unit::serialNumber).contains("1002");
+    assertThat(units.coded(UnitCode.next())).isEmpty();
   }
 
   @Test
@@ -108,16 +117,18 @@ class UnitsTest {
   void findsAPageAmongAThousandUnits() {
     Unit first = shop.unit("0000");
     StringBuilder rows = new StringBuilder();
+    var codes = Stream.generate(UnitCode::next).distinct().iterator();
     for (int i = 1; i < 1000; i++) {
       rows.append(i == 1 ? "" : ", ")
           .append(
-              "('%s', '%s', '%s', '%04d', '', timestamp with time zone '2026-01-01 12:00:00Z')"
-                  .formatted(UnitId.next(), first.modelId(), first.customerId(), i));
+              "('%s', '%s', '%s', '%s', '%04d', '', timestamp with time zone '2026-01-01 12:00:00Z')"
+                  .formatted(UnitId.next(), codes.next(), first.modelId(), first.customerId(), i));
     }
     database
         .jdbc()
         .sql(
-            "insert into unit (id, model_id, customer_id, serial_number, note, created_at) values "
+            "insert into unit (id, code, model_id, customer_id, serial_number, note, created_at)"
+                + " values "
                 + rows)
         .update();
     PageOf<UnitSummary> page = units.page(new PageQuery("", 20, 50));

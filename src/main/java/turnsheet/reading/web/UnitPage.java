@@ -8,6 +8,7 @@ import turnsheet.web.Shown;
 /**
  * One unit as its page shows it.
  *
+ * @param code on its label, in two groups
  * @param note may be empty
  * @param openVisitId the visit that the unit is here for; null where it is not on the bench
  * @param chart null where no reading has the chosen figure
@@ -20,6 +21,7 @@ record UnitPage(
     String modelId,
     String modelName,
     String serialNumber,
+    String code,
     String customerId,
     String customerName,
     String note,

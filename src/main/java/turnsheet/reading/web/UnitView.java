@@ -89,6 +89,7 @@ class UnitView {
         summary.unit().modelId().toString(),
         summary.modelName(),
         summary.unit().serialNumber(),
+        summary.unit().code().grouped(),
         summary.unit().customerId().toString(),
         summary.customerName(),
         summary.unit().note(),

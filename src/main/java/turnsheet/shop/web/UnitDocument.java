@@ -12,10 +12,12 @@ import turnsheet.shop.Unit;
  * A unit in JSON.
  *
  * @param id given by the service
+ * @param code on the unit's label, given by the service
  * @param createdAt given by the service
  */
 record UnitDocument(
     @Nullable UUID id,
+    @Nullable String code,
     @NotNull UUID modelId,
     @NotNull UUID customerId,
     @NotBlank @Size(max = Unit.SERIAL_LENGTH) String serialNumber,
@@ -30,6 +32,7 @@ record UnitDocument(
   static UnitDocument of(Unit unit) {
     return new UnitDocument(
         unit.id().value(),
+        unit.code().letters(),
         unit.modelId().value(),
         unit.customerId().value(),
         unit.serialNumber(),
