@@ -2,6 +2,7 @@ package turnsheet.capture;
 
 import java.time.Instant;
 import org.jspecify.annotations.Nullable;
+import turnsheet.core.measure.CaptureKind;
 import turnsheet.core.signal.Rejection;
 import turnsheet.job.JobId;
 
@@ -29,4 +30,11 @@ public record Capture(
     @Nullable JobId job) {
 
   public static final int FILE_NAME_LENGTH = 300;
+
+  /** Whether it is a played tone: as confirmed, else as far as the look tells. */
+  public boolean mayBeTone() {
+    return choices != null
+        ? choices.settings().kind() == CaptureKind.TONE
+        : looked != null && looked.mayBeTone();
+  }
 }

@@ -12,13 +12,15 @@ import turnsheet.shop.VisitId;
  * @param condition {@link #AS_RECEIVED}, {@link #AFTER_REPAIR} or a label of the bench's own
  * @param instrument what recorded it; null where not said
  * @param medium the test tape or record that was played; null where none was or not said
+ * @param toneMethod how a tone came onto it; null for whatever is not a tone, and where not said
  */
 public record CaptureKey(
     VisitId visit,
     SpeedSettingId setting,
     String condition,
     @Nullable InstrumentId instrument,
-    @Nullable MediumId medium) {
+    @Nullable MediumId medium,
+    @Nullable ToneMethod toneMethod) {
 
   public static final String AS_RECEIVED = "as received";
   public static final String AFTER_REPAIR = "after repair";
@@ -29,5 +31,20 @@ public record CaptureKey(
     if (condition.isEmpty() || condition.length() > CONDITION_LENGTH) {
       throw new IllegalArgumentException("condition of " + condition.length() + " characters");
     }
+  }
+
+  /** Nothing said about the tone. */
+  public CaptureKey(
+      VisitId visit,
+      SpeedSettingId setting,
+      String condition,
+      @Nullable InstrumentId instrument,
+      @Nullable MediumId medium) {
+    this(visit, setting, condition, instrument, medium, null);
+  }
+
+  /** The same with another method. */
+  public CaptureKey by(@Nullable ToneMethod method) {
+    return new CaptureKey(visit, setting, condition, instrument, medium, method);
   }
 }

@@ -13,6 +13,7 @@ import java.util.function.Function;
 import org.jspecify.annotations.Nullable;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.stereotype.Repository;
+import turnsheet.core.measure.CaptureKind;
 import turnsheet.core.signal.Rejection;
 import turnsheet.document.CoreJson;
 import turnsheet.job.JobId;
@@ -75,8 +76,8 @@ public class Captures {
             """
             insert into capture (id, visit_id, speed_setting_id, bench_condition, instrument_id,
               medium_id, file_name, sha256, byte_length, received_at, received_by, state,
-              recognition, refusal_code, refusal_message)
-            values (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)
+              recognition, refusal_code, refusal_message, tone_method)
+            values (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)
             """)
         .param(1, capture.id().value())
         .param(2, capture.key().visit().value())
@@ -93,7 +94,17 @@ public class Captures {
         .param(13, valueOf(capture.looked(), CoreJson::toJson), Types.VARCHAR)
         .param(14, valueOf(capture.refusal(), Rejection::code), Types.VARCHAR)
         .param(15, valueOf(capture.refusal(), Captures::sentence), Types.VARCHAR)
+        .param(16, valueOf(capture.key().toneMethod(), ToneMethod::word), Types.VARCHAR)
         .update();
+  }
+
+  /** Corrects how the tone came onto what was played; no figure depends on it. */
+  boolean name(CaptureId id, @Nullable ToneMethod method) {
+    return jdbc.sql("update capture set tone_method = ? where id = ?")
+            .param(1, valueOf(method, ToneMethod::word), Types.VARCHAR)
+            .param(2, id.value())
+            .update()
+        == 1;
   }
 
   /** Another look, with other options, has shown what the file holds. */
@@ -116,12 +127,13 @@ public class Captures {
   boolean queue(CaptureId id, Looked looked, CaptureChoices choices, JobId job) {
     return jdbc.sql(
                 "update capture set state = 'queued', recognition = :looked, choices = :choices,"
-                    + " job_id = :job,"
+                    + " job_id = :job, tone_method = case when :tone then tone_method end,"
                     + " refusal_code = null, refusal_message = null where id = :id"
                     + " and state in ('recognised', 'refused', 'measured', 'failed')")
             .param("looked", CoreJson.toJson(looked))
             .param("choices", CoreJson.toJson(choices))
             .param("job", job.value())
+            .param("tone", choices.settings().kind() == CaptureKind.TONE)
             .param("id", id.value())
             .update()
         == 1;
@@ -185,7 +197,13 @@ public class Captures {
         new SpeedSettingId(row.getObject("speed_setting_id", UUID.class)),
         row.getString("bench_condition"),
         id(row, "instrument_id", InstrumentId::new),
-        id(row, "medium_id", MediumId::new));
+        id(row, "medium_id", MediumId::new),
+        toneMethod(row));
+  }
+
+  private static @Nullable ToneMethod toneMethod(ResultSet row) throws SQLException {
+    String word = row.getString("tone_method");
+    return word == null ? null : ToneMethod.ofWord(word).orElse(null);
   }
 
   private static <T> @Nullable T id(ResultSet row, String column, Function<UUID, T> id)

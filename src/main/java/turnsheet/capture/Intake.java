@@ -64,10 +64,7 @@ public class Intake {
   public Capture receive(CaptureKey key, String fileName, String receivedBy, InputStream in)
       throws BrokenUploadException, StoreException {
     Surroundings around = shelf.of(key);
-    if (!around.visit().visit().isOpen()) {
-      throw new RefusedRequestException(
-          "visitClosed", "This visit is closed: take it up again before adding captures to it.");
-    }
+    refuseClosed(around);
     String name = FileName.checked(fileName);
     StoredBytes bytes = store.receive(in);
     Looker.Result result = look(bytes, ReadOptions.none(), around);
@@ -118,6 +115,23 @@ public class Intake {
     return captures.find(id).orElseThrow();
   }
 
+  /**
+   * Corrects how the tone came onto what was played.
+   *
+   * @param method null where it is not known
+   * @throws RefusedRequestException if the visit is closed, or the capture is not of a tone
+   */
+  public Capture nameMethod(CaptureId id, @Nullable ToneMethod method) {
+    Capture capture = captures.find(id).orElseThrow(() -> new NotFoundException("capture"));
+    refuseClosed(shelf.of(capture.key()));
+    if (method != null && !capture.mayBeTone()) {
+      throw new RefusedRequestException(
+          "notATone", "Only a played tone was recorded here or elsewhere: this is none.");
+    }
+    captures.name(id, method);
+    return captures.find(id).orElseThrow();
+  }
+
   /** What is taken for a capture unless the bench says otherwise. */
   public Proposal proposal(Looked looked, Surroundings around) {
     return Proposal.of(looked, around.model(), around.setting(), around.medium());
@@ -161,13 +175,27 @@ public class Intake {
     }
   }
 
+  private static void refuseClosed(Surroundings around) {
+    if (!around.visit().visit().isOpen()) {
+      throw new RefusedRequestException(
+          "visitClosed",
+          "This visit is closed: take it up again before adding or changing captures.");
+    }
+  }
+
   private Capture received(
       CaptureKey key, String name, String receivedBy, StoredBytes bytes, Looker.Result result) {
     @Nullable Looked looked = result instanceof Looker.Seen seen ? seen.looked() : null;
+    ToneMethod method = key.toneMethod();
+    if (looked == null || !looked.mayBeTone()) {
+      method = null;
+    } else if (method == null && key.medium() != null) {
+      method = ToneMethod.REPLAY; // a test tape or record was made elsewhere
+    }
     @Nullable Rejection why = result instanceof Looker.Unusable unusable ? unusable.why() : null;
     return new Capture(
         CaptureId.next(),
-        key,
+        key.by(method),
         name,
         bytes,
         clock.instant().truncatedTo(ChronoUnit.MICROS),

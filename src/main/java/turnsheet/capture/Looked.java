@@ -1,8 +1,10 @@
 package turnsheet.capture;
 
 import org.jspecify.annotations.Nullable;
+import turnsheet.core.format.api.Contents;
 import turnsheet.core.format.api.ReadOptions;
 import turnsheet.core.format.api.Recognised;
+import turnsheet.core.measure.CaptureKind;
 import turnsheet.core.measure.KindGuess;
 
 /**
@@ -12,4 +14,11 @@ import turnsheet.core.measure.KindGuess;
  * @param recognised what the file holds
  * @param guess what it may be a recording of
  */
-public record Looked(ReadOptions options, Recognised recognised, @Nullable KindGuess guess) {}
+public record Looked(ReadOptions options, Recognised recognised, @Nullable KindGuess guess) {
+
+  /** Whether it is, as far as the look tells, the recording of a played tone. */
+  public boolean mayBeTone() {
+    return recognised.contents() == Contents.WAVEFORM
+        && (guess == null || guess.kind() == CaptureKind.TONE);
+  }
+}

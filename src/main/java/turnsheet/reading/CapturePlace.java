@@ -3,6 +3,7 @@ package turnsheet.reading;
 import java.time.Instant;
 import org.jspecify.annotations.Nullable;
 import turnsheet.capture.CaptureId;
+import turnsheet.capture.ToneMethod;
 import turnsheet.shop.ModelId;
 import turnsheet.shop.SpeedSettingId;
 import turnsheet.shop.UnitId;
@@ -13,6 +14,7 @@ import turnsheet.shop.VisitId;
  *
  * @param instrumentName null where not said
  * @param mediumName null where none was or not said
+ * @param toneMethod how a tone came onto what was played; null for others and where not said
  */
 public record CapturePlace(
     CaptureId captureId,
@@ -30,4 +32,5 @@ public record CapturePlace(
     String modelName,
     String customerName,
     @Nullable String instrumentName,
-    @Nullable String mediumName) {}
+    @Nullable String mediumName,
+    @Nullable ToneMethod toneMethod) {}

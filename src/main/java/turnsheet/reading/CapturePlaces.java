@@ -5,9 +5,11 @@ import java.sql.SQLException;
 import java.time.OffsetDateTime;
 import java.util.Optional;
 import java.util.UUID;
+import org.jspecify.annotations.Nullable;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.stereotype.Component;
 import turnsheet.capture.CaptureId;
+import turnsheet.capture.ToneMethod;
 import turnsheet.shop.ModelId;
 import turnsheet.shop.SpeedSettingId;
 import turnsheet.shop.UnitId;
@@ -26,7 +28,7 @@ public final class CapturePlaces {
   public Optional<CapturePlace> find(CaptureId id) {
     return jdbc.sql(
             """
-            select c.id, c.file_name, c.byte_length, c.received_at, c.bench_condition,
+            select c.id, c.file_name, c.byte_length, c.received_at, c.bench_condition, c.tone_method,
               c.speed_setting_id, s.label as setting_label, v.id as visit_id, v.opened_at,
               u.id as unit_id, u.serial_number, m.id as model_id, m.name as model_name,
               o.name as customer_name, i.name as instrument_name, d.name as medium_name
@@ -40,6 +42,12 @@ public final class CapturePlaces {
         .param(id.value())
         .query(CapturePlaces::place)
         .optional();
+  }
+
+  /** Also for lists of captures: the column of a row of captures. */
+  static @Nullable ToneMethod method(ResultSet row) throws SQLException {
+    String word = row.getString("tone_method");
+    return word == null ? null : ToneMethod.ofWord(word).orElse(null);
   }
 
   private static CapturePlace place(ResultSet row, int number) throws SQLException {
@@ -59,6 +67,7 @@ public final class CapturePlaces {
         row.getString("model_name"),
         row.getString("customer_name"),
         row.getString("instrument_name"),
-        row.getString("medium_name"));
+        row.getString("medium_name"),
+        method(row));
   }
 }

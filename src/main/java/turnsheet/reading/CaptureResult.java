@@ -5,6 +5,7 @@ import java.util.Map;
 import org.jspecify.annotations.Nullable;
 import turnsheet.capture.CaptureId;
 import turnsheet.capture.CaptureState;
+import turnsheet.capture.ToneMethod;
 import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.FigureName;
 import turnsheet.shop.SpeedSettingId;
@@ -13,6 +14,7 @@ import turnsheet.shop.VisitId;
 /**
  * How a capture stands, with the figures of the reading that stands for it.
  *
+ * @param toneMethod how a tone came onto what was played; null for others and where not said
  * @param refusal sentence of a capture that is refused or failed; null otherwise
  * @param progress 0 to 1, of the job that measures it; 0 where none runs
  * @param readingId null until it is measured
@@ -27,6 +29,7 @@ public record CaptureResult(
     String fileName,
     Instant receivedAt,
     CaptureState state,
+    @Nullable ToneMethod toneMethod,
     @Nullable String refusal,
     double progress,
     @Nullable ReadingId readingId,
@@ -51,6 +54,7 @@ public record CaptureResult(
         fileName,
         receivedAt,
         state,
+        toneMethod,
         refusal,
         progress,
         readingId,

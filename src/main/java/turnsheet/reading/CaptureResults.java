@@ -145,6 +145,7 @@ public final class CaptureResults {
         row.getString("file_name"),
         row.getObject("received_at", OffsetDateTime.class).toInstant(),
         CaptureState.valueOf(row.getString("state").toUpperCase(Locale.ROOT)),
+        CapturePlaces.method(row),
         text(row, "refusal_message"),
         row.getDouble("progress"),
         reading == null ? null : new ReadingId(reading),

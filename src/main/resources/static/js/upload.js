@@ -49,7 +49,7 @@ for (const form of document.querySelectorAll("form.upload")) {
 
   function put(file, said) {
     const query = new URLSearchParams({ fileName: file.name });
-    for (const name of ["speedSettingId", "condition", "instrumentId", "mediumId"]) {
+    for (const name of ["speedSettingId", "condition", "instrumentId", "mediumId", "toneMethod"]) {
       if (said.get(name)) {
         query.set(name, said.get(name));
       }

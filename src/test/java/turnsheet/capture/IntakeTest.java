@@ -96,6 +96,18 @@ class IntakeTest {
   }
 
   @Test
+  void aTestTapeImpliesThatTheToneWasOnlyReplayed() throws IOException {
+    ReferenceMedium tape =
+        media.add(new ReferenceMedium(MediumId.next(), "A tape", 3150.0, 0.1, null, ""));
+    CaptureKey played = new CaptureKey(key.visit(), key.setting(), "as received", null, tape.id());
+    Capture capture = intake.receive(played, "a.wav", "bench", bytes("tone"));
+    assertThat(capture.key().toneMethod()).isEqualTo(ToneMethod.REPLAY);
+    assertThat(captures.find(capture.id())).contains(capture);
+    assertThat(intake.nameMethod(capture.id(), null).key().toneMethod()).isNull();
+    assertThat(receive("tone").key().toneMethod()).isNull();
+  }
+
+  @Test
   void recognisesAToneAndWaits() throws IOException {
     Capture capture = receive("tone");
     assertThat(capture.state()).isEqualTo(CaptureState.RECOGNISED);

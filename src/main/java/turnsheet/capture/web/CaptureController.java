@@ -1,6 +1,7 @@
 package turnsheet.capture.web;
 
 import jakarta.servlet.http.HttpServletResponse;
+import jakarta.validation.Valid;
 import java.io.IOException;
 import java.util.UUID;
 import org.jspecify.annotations.Nullable;
@@ -71,6 +72,12 @@ class CaptureController {
       HttpServletResponse response) {
     return act(
         id, wish, binding, model, response, () -> intake.confirm(new CaptureId(id), wish.wish()));
+  }
+
+  @PostMapping("/captures/{id}/tone-method")
+  String nameMethod(@PathVariable UUID id, @Valid @ModelAttribute MethodForm said) {
+    intake.nameMethod(new CaptureId(id), said.method());
+    return "redirect:/captures/" + id;
   }
 
   @GetMapping("/captures/{id}/progress")

@@ -10,7 +10,11 @@ import turnsheet.core.format.api.Recognised;
 import turnsheet.core.measure.KindGuess;
 import turnsheet.core.signal.Rejection;
 
-/** A capture as the REST API shows it; absent things are null. */
+/**
+ * A capture as the REST API shows it; absent things are null.
+ *
+ * @param toneMethod {@code replay} or {@code recordAndReplay}; null for whatever is not a tone
+ */
 record CaptureDocument(
     UUID id,
     UUID visitId,
@@ -18,6 +22,7 @@ record CaptureDocument(
     String condition,
     @Nullable UUID instrumentId,
     @Nullable UUID mediumId,
+    @Nullable String toneMethod,
     String fileName,
     String sha256,
     long byteLength,
@@ -39,6 +44,7 @@ record CaptureDocument(
         key.condition(),
         key.instrument() == null ? null : key.instrument().value(),
         key.medium() == null ? null : key.medium().value(),
+        key.toneMethod() == null ? null : key.toneMethod().word(),
         capture.fileName(),
         capture.bytes().sha256(),
         capture.bytes().length(),

@@ -17,7 +17,12 @@ import turnsheet.core.measure.CaptureKind;
 import turnsheet.core.signal.Rejection;
 import turnsheet.web.Times;
 
-/** Everything the capture page says, ready to be shown. */
+/**
+ * Everything the capture page says, ready to be shown.
+ *
+ * @param toneMethod word of {@link turnsheet.capture.ToneMethod}; null where not said
+ * @param tone whether it is the recording of a played tone, as far as is known
+ */
 record CapturePage(
     UUID id,
     UUID visitId,
@@ -28,6 +33,9 @@ record CapturePage(
     String condition,
     @Nullable String instrument,
     @Nullable String medium,
+    @Nullable String toneMethod,
+    boolean tone,
+    boolean visitOpen,
     String size,
     String received,
     String receivedBy,
@@ -88,6 +96,9 @@ record CapturePage(
         capture.key().condition(),
         around.instrument() == null ? null : around.instrument().name(),
         around.medium() == null ? null : around.medium().name(),
+        capture.key().toneMethod() == null ? null : capture.key().toneMethod().word(),
+        capture.mayBeTone(),
+        around.visit().visit().isOpen(),
         size(capture.bytes().length()),
         times.minute(capture.receivedAt()),
         capture.receivedBy(),

@@ -2,10 +2,12 @@ package turnsheet.capture.web;
 
 import jakarta.validation.constraints.NotBlank;
 import jakarta.validation.constraints.NotNull;
+import jakarta.validation.constraints.Pattern;
 import jakarta.validation.constraints.Size;
 import java.util.UUID;
 import org.jspecify.annotations.Nullable;
 import turnsheet.capture.CaptureKey;
+import turnsheet.capture.ToneMethod;
 import turnsheet.shop.InstrumentId;
 import turnsheet.shop.MediumId;
 import turnsheet.shop.SpeedSettingId;
@@ -15,13 +17,15 @@ import turnsheet.shop.VisitId;
  * What is said about a file as it is uploaded, in a form or in the query of a raw upload.
  *
  * @param ownLabel takes the place of the condition where it is filled in
+ * @param toneMethod word of {@link ToneMethod}; empty where not said
  */
 record CaptureRequest(
     @NotNull UUID speedSettingId,
     @NotBlank @Size(max = CaptureKey.CONDITION_LENGTH) String condition,
     @Nullable @Size(max = CaptureKey.CONDITION_LENGTH) String ownLabel,
     @Nullable UUID instrumentId,
-    @Nullable UUID mediumId) {
+    @Nullable UUID mediumId,
+    @Nullable @Pattern(regexp = "|replay|recordAndReplay") String toneMethod) {
 
   CaptureKey key(UUID visit) {
     return new CaptureKey(
@@ -29,6 +33,7 @@ record CaptureRequest(
         new SpeedSettingId(speedSettingId),
         ownLabel == null || ownLabel.isBlank() ? condition : ownLabel,
         instrumentId == null ? null : new InstrumentId(instrumentId),
-        mediumId == null ? null : new MediumId(mediumId));
+        mediumId == null ? null : new MediumId(mediumId),
+        toneMethod == null ? null : ToneMethod.ofWord(toneMethod).orElse(null));
   }
 }

@@ -15,6 +15,7 @@ import org.springframework.web.bind.annotation.GetMapping;
 import org.springframework.web.bind.annotation.ModelAttribute;
 import org.springframework.web.bind.annotation.PathVariable;
 import org.springframework.web.bind.annotation.PostMapping;
+import org.springframework.web.bind.annotation.PutMapping;
 import org.springframework.web.bind.annotation.RequestBody;
 import org.springframework.web.bind.annotation.RequestMapping;
 import org.springframework.web.bind.annotation.RequestParam;
@@ -75,6 +76,12 @@ class CaptureResource {
     Capture capture = intake.confirm(new CaptureId(id), said.wish());
     boolean ordered = capture.refusal() == null;
     return ResponseEntity.status(ordered ? 202 : 200).body(CaptureDocument.of(capture));
+  }
+
+  /** Corrects how the tone came onto what was played; no figure changes. */
+  @PutMapping("/captures/{id}/tone-method")
+  CaptureDocument nameMethod(@PathVariable UUID id, @Valid @RequestBody MethodForm said) {
+    return CaptureDocument.of(intake.nameMethod(new CaptureId(id), said.method()));
   }
 
   @GetMapping("/captures/{id}/job")

@@ -1,8 +1,10 @@
 package turnsheet.capture.web;
 
+import java.util.Arrays;
 import java.util.List;
 import org.springframework.stereotype.Component;
 import turnsheet.capture.CaptureKey;
+import turnsheet.capture.ToneMethod;
 import turnsheet.shop.BenchInstrument;
 import turnsheet.shop.Instruments;
 import turnsheet.shop.Media;
@@ -28,6 +30,11 @@ public class Uploads {
   /** Conditions that every visit has; a bench may add labels of its own. */
   public List<String> conditions() {
     return List.of(CaptureKey.AS_RECEIVED, CaptureKey.AFTER_REPAIR);
+  }
+
+  /** Words of the ways that a tone comes onto what is played. */
+  public List<String> toneMethods() {
+    return Arrays.stream(ToneMethod.values()).map(ToneMethod::word).toList();
   }
 
   /** Instruments and media to choose from. */

@@ -8,6 +8,7 @@ import turnsheet.web.Shown;
 /**
  * One reading as its page shows it.
  *
+ * @param toneMethod how a tone came onto what was played; empty where not said
  * @param running what each printed sheet carries at its foot
  * @param histogram null for a tone
  * @param edges empty for a tone
@@ -19,6 +20,7 @@ record ReadingPage(
     List<Crumb> trail,
     String title,
     String sentence,
+    String toneMethod,
     String running,
     List<Group> figures,
     List<Group> edges,

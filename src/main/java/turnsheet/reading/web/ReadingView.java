@@ -8,6 +8,7 @@ import java.util.OptionalDouble;
 import org.jspecify.annotations.Nullable;
 import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
+import turnsheet.capture.ToneMethod;
 import turnsheet.core.measure.FigureName;
 import turnsheet.core.measure.MeasureSettings;
 import turnsheet.core.measure.Reading;
@@ -72,6 +73,7 @@ class ReadingView {
         trail(place, words),
         words.text("reading.page.title", place.settingLabel(), place.condition()),
         new Sentence(words).of(name -> name.of(reading), judged),
+        toneSentence(place, words),
         words.text(
             "reading.page.running",
             place.modelName() + " " + place.serialNumber(),
@@ -235,7 +237,19 @@ class ReadingView {
             words.numbers().fixed(source.durationSeconds(), 2) + "\u202fs"));
     addIfKnown(facts, words, "reading.source.instrument", place.instrumentName());
     addIfKnown(facts, words, "reading.source.medium", place.mediumName());
+    addIfKnown(facts, words, "capture.tone.method", methodOf(place, words));
     return facts;
+  }
+
+  /** Practice names the method beside the figure. */
+  private static String toneSentence(CapturePlace place, Wording words) {
+    ToneMethod method = place.toneMethod();
+    return method == null ? "" : words.text("reading.page.tone." + method.word());
+  }
+
+  private static @Nullable String methodOf(CapturePlace place, Wording words) {
+    ToneMethod method = place.toneMethod();
+    return method == null ? null : words.text("capture.tone." + method.word());
   }
 
   private List<ReadingPage.Fact> method(Reading reading, StoredReading stored, Wording words) {

@@ -2,6 +2,7 @@ package turnsheet.reading.web;
 
 import org.jspecify.annotations.Nullable;
 import turnsheet.capture.CaptureState;
+import turnsheet.capture.ToneMethod;
 import turnsheet.core.diagnose.Verdict;
 import turnsheet.core.measure.FigureName;
 import turnsheet.reading.CaptureResult;
@@ -16,6 +17,7 @@ import turnsheet.web.Wording;
  * @param speed deviation with unit; empty until measured
  * @param flutter figure that is limited, else two-sigma, with unit; empty until measured
  * @param flutterName what that figure is; empty with it
+ * @param method how a tone came onto what was played; empty where not said
  * @param verdict the worst of all; null where nothing is limited
  * @param percent progress of the measurement
  * @param refusal sentence; empty unless refused or failed
@@ -28,6 +30,7 @@ record ResultItem(
     String speed,
     String flutter,
     String flutterName,
+    String method,
     @Nullable String verdict,
     long percent,
     String refusal) {
@@ -38,6 +41,7 @@ record ResultItem(
     String refusal = result.refusal();
     boolean unusable =
         result.state() == CaptureState.REFUSED || result.state() == CaptureState.FAILED;
+    ToneMethod method = result.toneMethod();
     FigureName steady = Sentence.headline(standing.judged(result), result::figure);
     return new ResultItem(
         result.captureId().toString(),
@@ -47,6 +51,7 @@ record ResultItem(
         shortText(words, FigureName.DEVIATION, result),
         shortText(words, steady, result),
         reading == null ? "" : words.inText(steady),
+        method == null ? "" : words.text("reading.item.tone." + method.word()),
         worst == null ? null : FigureRow.word(worst),
         Math.round(100 * result.progress()),
         unusable && refusal != null ? refusal : "");

@@ -16,6 +16,7 @@ import org.springframework.context.annotation.Primary;
 import org.springframework.http.MediaType;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.mock.web.MockMultipartFile;
+import org.springframework.test.json.AbstractJsonContentAssert;
 import org.springframework.test.web.servlet.assertj.MockMvcTester;
 import org.springframework.test.web.servlet.assertj.MvcTestResult;
 import turnsheet.core.format.CaptureFormats;
@@ -101,6 +102,54 @@ class CapturePagesTest {
     MvcTestResult answer = raw("/visits/", "tone", "a.wav");
     assertThat(answer).hasStatus(201);
     assertThat(answer).bodyJson().extractingPath("$.page").asString().startsWith("/captures/");
+  }
+
+  @Test
+  void theWayOfATonesRecordingIsSaidAndCorrected() throws Exception {
+    MvcTestResult answer = raw("/api/v1/visits/", "tone", "a.wav", "&toneMethod=recordAndReplay");
+    assertThat(answer).bodyJson().extractingPath("$.toneMethod").isEqualTo("recordAndReplay");
+    String page = "/captures/" + id(answer);
+    assertThat(mvc.get().uri(page))
+        .bodyText()
+        .containsPattern("value=\"recordAndReplay\"\\s+selected");
+
+    assertThat(mvc.post().uri(page + "/tone-method").with(csrf()).param("toneMethod", "replay"))
+        .hasStatus(302);
+    api(page).extractingPath("$.toneMethod").isEqualTo("replay");
+    assertThat(
+            mvc.put()
+                .uri("/api/v1" + page + "/tone-method")
+                .contentType(MediaType.APPLICATION_JSON)
+                .content("{}"))
+        .hasStatusOk();
+    api(page).extractingPath("$.toneMethod").isNull();
+    assertThat(mvc.post().uri(page + "/tone-method").with(csrf()).param("toneMethod", "hearsay"))
+        .hasStatus(422);
+    visits.close(visit);
+    assertThat(mvc.post().uri(page + "/tone-method").with(csrf()).param("toneMethod", "replay"))
+        .hasStatus(422);
+    assertThat(mvc.get().uri(page)).bodyText().doesNotContain("/tone-method");
+  }
+
+  @Test
+  void onlyATonesRecordingHasAWay() throws Exception {
+    MvcTestResult edges = raw("/api/v1/visits/", "edges", "a.txt", "&toneMethod=replay");
+    assertThat(edges).bodyJson().extractingPath("$.toneMethod").isNull();
+    assertThat(
+            mvc.post()
+                .uri("/captures/" + id(edges) + "/tone-method")
+                .with(csrf())
+                .param("toneMethod", "replay"))
+        .hasStatus(422);
+
+    MvcTestResult tone = raw("/api/v1/visits/", "tone", "b.wav", "&toneMethod=replay");
+    assertThat(tone).bodyJson().extractingPath("$.toneMethod").isEqualTo("replay");
+    mvc.post()
+        .uri("/captures/" + id(tone) + "/measure")
+        .with(csrf())
+        .param("kind", "TACHOMETER")
+        .exchange();
+    api("/captures/" + id(tone)).extractingPath("$.toneMethod").isNull();
   }
 
   @Test
@@ -256,10 +305,18 @@ class CapturePagesTest {
         .exchange();
   }
 
+  private AbstractJsonContentAssert<?> api(String page) {
+    return assertThat(mvc.get().uri("/api/v1" + page)).bodyJson();
+  }
+
   private MvcTestResult raw(String root, String content, String name) {
+    return raw(root, content, name, "");
+  }
+
+  private MvcTestResult raw(String root, String content, String name, String more) {
     return mvc.post()
         .uri(
-            root + "{id}/captures?speedSettingId={s}&condition=after repair&fileName={n}",
+            root + "{id}/captures?speedSettingId={s}&condition=after repair&fileName={n}" + more,
             visit,
             setting,
             name)
