@@ -17,6 +17,7 @@ import turnsheet.capture.Captures;
 import turnsheet.capture.Looked;
 import turnsheet.core.diagnose.RotatingPart;
 import turnsheet.core.diagnose.Suspects;
+import turnsheet.core.measure.HeapNeed;
 import turnsheet.core.measure.Measurement;
 import turnsheet.core.measure.Outcome;
 import turnsheet.core.measure.Reading;

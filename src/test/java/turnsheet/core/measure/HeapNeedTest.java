@@ -1,4 +1,4 @@
-package turnsheet.reading;
+package turnsheet.core.measure;
 
 import static org.assertj.core.api.Assertions.assertThat;
 
@@ -37,5 +37,18 @@ class HeapNeedTest {
   void whatABenchRecordsFitsAnywhere() {
     assertThat(HeapNeed.refusal(lasting(1), 128 * MIB)).isEmpty();
     assertThat(HeapNeed.refusal(lasting(6.2), 512 * MIB)).isEmpty();
+  }
+
+  /**
+   * 60 MiB beside, then 7200 s of 12000 bytes for each channel and 12 MiB for each beside the
+   * first: 142 MiB for one, 237 MiB for two.
+   */
+  @Test
+  void asManyChannelsAtOnceAsTheMemoryHolds() {
+    assertThat(HeapNeed.channelsAtOnce(lasting(2), 64 * MIB, 2)).isEqualTo(1);
+    assertThat(HeapNeed.channelsAtOnce(lasting(2), 236 * MIB, 2)).isEqualTo(1);
+    assertThat(HeapNeed.channelsAtOnce(lasting(2), 237 * MIB, 2)).isEqualTo(2);
+    assertThat(HeapNeed.channelsAtOnce(lasting(2), 10_000 * MIB, 2)).isEqualTo(2);
+    assertThat(HeapNeed.channelsAtOnce(lasting(0.1), 96 * MIB, 2)).isEqualTo(2);
   }
 }
