@@ -31,15 +31,20 @@ public final class Ratios {
   /** Prints the rows. */
   public static void main(String[] args) throws Exception {
     List<String> chosen =
-        args.length == 0 ? List.of("tone", "hour", "shell", "edges", "heap") : List.of(args);
+        args.length == 0
+            ? List.of("tone", "hour", "stereo", "shell", "edges", "heap")
+            : List.of(args);
     for (String row : chosen) {
       switch (row) {
         case "tone" -> tone();
         case "hour" -> hour();
         case "shell" -> shell();
         case "edges" -> edges();
+        case "stereo" -> Channels.rows();
         case "heap" -> heap();
-        case "one" -> Measuring.tone(Recordings.tone(120, 192_000, 2));
+        case "one" -> twoHours(1, 1);
+        case "both in turn" -> twoHours(2, 1);
+        case "both at once" -> twoHours(2, 2);
         default -> throw new IllegalArgumentException(row);
       }
     }
@@ -103,20 +108,27 @@ public final class Ratios {
   /** The smallest heap in which two hours can be measured, within two megabytes. */
   private static void heap() throws IOException, InterruptedException {
     Recordings.tone(120, 192_000, 2); // made by a process that has the memory for it
-    int enough = 512;
-    int tooSmall = 16;
-    while (enough - tooSmall > 2) {
-      int middle = (enough + tooSmall) / 2;
-      if (fits(middle)) {
-        enough = middle;
-      } else {
-        tooSmall = middle;
+    for (String how : List.of("one", "both in turn", "both at once")) {
+      int enough = 512;
+      int tooSmall = 16;
+      while (enough - tooSmall > 2) {
+        int middle = (enough + tooSmall) / 2;
+        if (fits(middle, how)) {
+          enough = middle;
+        } else {
+          tooSmall = middle;
+        }
       }
+      System.out.printf(
+          Locale.ROOT, "| heap for 2 h of 192 kHz stereo, %s | %d MiB | |%n", how, enough);
     }
-    System.out.printf(Locale.ROOT, "| heap for 2 h of 192 kHz stereo | %d MiB | |%n", enough);
   }
 
-  private static boolean fits(int megabytes) throws IOException, InterruptedException {
+  private static void twoHours(int channels, int atOnce) throws IOException {
+    Channels.measure(FileSource.of(Recordings.tone(120, 192_000, 2)), channels, atOnce);
+  }
+
+  private static boolean fits(int megabytes, String how) throws IOException, InterruptedException {
     String java = Path.of(System.getProperty("java.home"), "bin", "java").toString();
     return new ProcessBuilder(
                 java,
@@ -125,7 +137,7 @@ public final class Ratios {
                 "-cp",
                 System.getProperty("java.class.path"),
                 Ratios.class.getName(),
-                "one")
+                how)
             .redirectErrorStream(true)
             .redirectOutput(ProcessBuilder.Redirect.DISCARD)
             .start()

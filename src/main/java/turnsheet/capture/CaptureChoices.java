@@ -10,4 +10,16 @@ import turnsheet.core.measure.MeasureSettings;
  * @param settings how it is measured, the clock of the instrument and the tolerance of the medium
  *     as they were known at the time folded in
  */
-public record CaptureChoices(ReadOptions options, MeasureSettings settings) {}
+public record CaptureChoices(ReadOptions options, MeasureSettings settings) {
+
+  /** The same on another channel. */
+  public CaptureChoices onChannel(int channel) {
+    return new CaptureChoices(options.withChannel(channel), settings.onChannel(channel));
+  }
+
+  /** Whether nothing but the channel tells the two apart. */
+  boolean differOnlyInChannel(CaptureChoices other) {
+    int channel = settings.channel();
+    return channel != other.settings.channel() && equals(other.onChannel(channel));
+  }
+}

@@ -32,6 +32,7 @@ import turnsheet.shop.VisitId;
  * QUEUED                                 refused  REFUSED
  * QUEUED                                 failed   FAILED
  * RECOGNISED, REFUSED, FAILED            looked   RECOGNISED or REFUSED
+ * MEASURED                               choose   MEASURED, with another main channel
  * </pre>
  */
 @Repository
@@ -127,11 +128,13 @@ public class Captures {
   boolean queue(CaptureId id, Looked looked, CaptureChoices choices, JobId job) {
     return jdbc.sql(
                 "update capture set state = 'queued', recognition = :looked, choices = :choices,"
-                    + " job_id = :job, tone_method = case when :tone then tone_method end,"
+                    + " main_channel = :channel, job_id = :job,"
+                    + " tone_method = case when :tone then tone_method end,"
                     + " refusal_code = null, refusal_message = null where id = :id"
                     + " and state in ('recognised', 'refused', 'measured', 'failed')")
             .param("looked", CoreJson.toJson(looked))
             .param("choices", CoreJson.toJson(choices))
+            .param("channel", choices.settings().channel())
             .param("job", job.value())
             .param("tone", choices.settings().kind() == CaptureKind.TONE)
             .param("id", id.value())
@@ -143,6 +146,32 @@ public class Captures {
   public boolean measured(CaptureId id) {
     return jdbc.sql("update capture set state = 'measured' where id = :id and state = 'queued'")
             .param("id", id.value())
+            .update()
+        == 1;
+  }
+
+  /**
+   * The capture has a reading, on another channel than the one that was chosen, which gave none; to
+   * be called in the transaction that stores it.
+   */
+  public boolean measuredOn(CaptureId id, Looked looked, CaptureChoices choices) {
+    return takeChannel(id, looked, choices, "queued");
+  }
+
+  /** Another channel that has been measured stands for the capture from now on. */
+  boolean choose(CaptureId id, Looked looked, CaptureChoices choices) {
+    return takeChannel(id, looked, choices, "measured");
+  }
+
+  private boolean takeChannel(CaptureId id, Looked looked, CaptureChoices choices, String from) {
+    return jdbc.sql(
+                "update capture set state = 'measured', recognition = :looked, choices = :choices,"
+                    + " main_channel = :channel where id = :id and state = :from")
+            .param("looked", CoreJson.toJson(looked))
+            .param("choices", CoreJson.toJson(choices))
+            .param("channel", choices.settings().channel())
+            .param("id", id.value())
+            .param("from", from)
             .update()
         == 1;
   }

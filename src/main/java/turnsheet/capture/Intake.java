@@ -29,6 +29,7 @@ public class Intake {
   private final Captures captures;
   private final Looker looker;
   private final Shelf shelf;
+  private final MeasuredChannels channels;
   private final Jobs jobs;
   private final TransactionTemplate transaction;
   private final Clock clock;
@@ -38,6 +39,7 @@ public class Intake {
       Captures captures,
       Looker looker,
       Shelf shelf,
+      MeasuredChannels channels,
       Jobs jobs,
       TransactionTemplate transaction,
       Clock clock) {
@@ -45,6 +47,7 @@ public class Intake {
     this.captures = captures;
     this.looker = looker;
     this.shelf = shelf;
+    this.channels = channels;
     this.jobs = jobs;
     this.transaction = transaction;
     this.clock = clock;
@@ -89,7 +92,9 @@ public class Intake {
 
   /**
    * Confirms what was recognised and orders the measurement. Where the wish makes the file
-   * unusable, the capture is refused and nothing is ordered.
+   * unusable, the capture is refused and nothing is ordered. Nothing is ordered either where the
+   * wish only takes another channel that was measured along with the present one: it then stands
+   * for the capture at once.
    *
    * @throws RefusedRequestException if the wish does not fit the file, no nominal rate is known, or
    *     the capture is being measured
@@ -111,7 +116,10 @@ public class Intake {
       }
       looked = ((Looker.Seen) result).looked();
     }
-    order(id, looked, Choosing.choices(wish, looked, around));
+    CaptureChoices choices = Choosing.choices(wish, looked, around);
+    if (!chosen(capture, looked, choices)) {
+      order(id, looked, choices);
+    }
     return captures.find(id).orElseThrow();
   }
 
@@ -140,6 +148,15 @@ public class Intake {
   /** What the shop knows about the things that the key names. */
   public Surroundings surroundings(CaptureKey key) {
     return shelf.of(key);
+  }
+
+  private boolean chosen(Capture capture, Looked looked, CaptureChoices choices) {
+    CaptureChoices before = capture.choices();
+    return capture.state() == CaptureState.MEASURED
+        && before != null
+        && before.differOnlyInChannel(choices)
+        && channels.has(capture.id(), choices.settings())
+        && captures.choose(capture.id(), looked, choices);
   }
 
   private void order(CaptureId id, Looked looked, CaptureChoices choices) {

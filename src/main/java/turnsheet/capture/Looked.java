@@ -21,4 +21,9 @@ public record Looked(ReadOptions options, Recognised recognised, @Nullable KindG
     return recognised.contents() == Contents.WAVEFORM
         && (guess == null || guess.kind() == CaptureKind.TONE);
   }
+
+  /** The same file read by another channel than the bench or the look had taken. */
+  public Looked onChannel(int channel, String why) {
+    return new Looked(options.withChannel(channel), recognised.onChannel(channel, why), guess);
+  }
 }

@@ -26,14 +26,17 @@ import turnsheet.shop.VisitId;
 @Component
 public final class Readings {
 
-  static final String NEWEST_OF_ITS_CAPTURE =
+  static final String NEWEST_OF_ITS_CHANNEL =
       """
       not exists (select 1 from reading later where later.capture_id = r.capture_id
+        and later.channel = r.channel
         and (later.made_at > r.made_at or (later.made_at = r.made_at and later.id > r.id)))
       """;
 
-  private static final String FLUCTUATION_BLOCKS = "fluctuation-blocks";
-  private static final String INDICATION_BLOCKS = "indication-blocks";
+  /** The newest of the channel that stands for the capture. */
+  static final String NEWEST_OF_ITS_CAPTURE =
+      "r.channel = (select m.main_channel from capture m where m.id = r.capture_id) and "
+          + NEWEST_OF_ITS_CHANNEL;
 
   private final JdbcClient jdbc;
   private final TransactionOperations transactions;
@@ -48,12 +51,16 @@ public final class Readings {
   /**
    * Stores a reading beside those that the capture has.
    *
-   * <p>Joins the caller's transaction. Where the newest reading is the same document, as after a
-   * job that was run twice, nothing is stored.
+   * <p>Joins the caller's transaction. Where the newest reading of the channel is the same
+   * document, as after a job that was run twice, nothing is stored.
    *
    * @return the new reading, or the same one
    */
   public ReadingId add(CaptureId capture, Reading reading, Series series) {
+    return add(capture, reading, KeptSeries.of(series));
+  }
+
+  ReadingId add(CaptureId capture, Reading reading, KeptSeries series) {
     return transactions.execute(status -> addOnce(capture, reading, series));
   }
 
@@ -64,7 +71,7 @@ public final class Readings {
         .optional();
   }
 
-  /** The reading that stands for a capture: the newest. */
+  /** The reading that stands for a capture: the newest of its main channel. */
   public Optional<StoredReading> newestOf(CaptureId capture) {
     return jdbc.sql("select * from reading r where r.capture_id = ? and " + NEWEST_OF_ITS_CAPTURE)
         .param(capture.value())
@@ -72,20 +79,28 @@ public final class Readings {
         .optional();
   }
 
-  /** All readings of a capture, newest first. */
-  public List<StoredReading> ofCapture(CaptureId capture) {
-    return jdbc.sql("select * from reading r where r.capture_id = ? order by made_at desc, id desc")
+  /** The newest reading of each channel of a capture, in the order of the channels. */
+  public List<StoredReading> ofChannels(CaptureId capture) {
+    return jdbc.sql(
+            "select * from reading r where r.capture_id = ? and "
+                + NEWEST_OF_ITS_CHANNEL
+                + " order by r.channel")
         .param(capture.value())
         .query(Readings::stored)
         .list();
   }
 
-  /** Which readings a capture has, newest first, without their documents. */
+  /**
+   * Which readings a capture has, without their documents: those of its main channel first, then by
+   * channel, the newest first.
+   */
   public List<Version> versionsOf(CaptureId capture) {
     return jdbc.sql(
             """
-            select r.id, r.made_at, r.method_version from reading r where r.capture_id = ?
-            order by r.made_at desc, r.id desc
+            select r.id, r.made_at, r.method_version, r.channel, c.main_channel
+            from reading r join capture c on c.id = r.capture_id where r.capture_id = ?
+            order by case when r.channel = c.main_channel then 0 else 1 end, r.channel,
+              r.made_at desc, r.id desc
             """)
         .param(capture.value())
         .query(
@@ -93,7 +108,9 @@ public final class Readings {
                 new Version(
                     new ReadingId(row.getObject("id", UUID.class)),
                     row.getObject("made_at", OffsetDateTime.class).toInstant(),
-                    row.getString("method_version")))
+                    row.getString("method_version"),
+                    row.getInt("channel"),
+                    row.getInt("channel") == row.getInt("main_channel")))
         .list();
   }
 
@@ -126,10 +143,10 @@ public final class Readings {
 
   /** The fluctuation in blocks; empty for readings of the time before it was kept. */
   public Optional<Series.Blocks> blocks(ReadingId id) {
-    return content(id, FLUCTUATION_BLOCKS)
+    return content(id, KeptSeries.FLUCTUATION_BLOCKS)
         .flatMap(
             fluctuation ->
-                content(id, INDICATION_BLOCKS)
+                content(id, KeptSeries.INDICATION_BLOCKS)
                     .map(
                         indication ->
                             new Series.Blocks(
@@ -137,12 +154,12 @@ public final class Readings {
                                 SeriesCodec.decodeBlocks(indication))));
   }
 
-  private ReadingId addOnce(CaptureId capture, Reading reading, Series series) {
+  private ReadingId addOnce(CaptureId capture, Reading reading, KeptSeries series) {
     String document = ReadingDocument.toJson(reading);
     Optional<UUID> same =
         jdbc.sql(
                 "select r.id from reading r where r.capture_id = ? and r.document = ? and "
-                    + NEWEST_OF_ITS_CAPTURE)
+                    + NEWEST_OF_ITS_CHANNEL)
             .params(capture.value(), document)
             .query(UUID.class)
             .optional();
@@ -150,20 +167,23 @@ public final class Readings {
       return new ReadingId(same.get());
     }
     ReadingId id = ReadingId.next();
-    jdbc.sql("insert into reading values (?, ?, ?, ?, ?)")
-        .params(id.value(), capture.value(), reading.method().version(), now(), document)
+    jdbc.sql(
+            """
+            insert into reading (id, capture_id, method_version, made_at, document, channel)
+            values (?, ?, ?, ?, ?, ?)
+            """)
+        .params(
+            id.value(),
+            capture.value(),
+            reading.method().version(),
+            now(),
+            document,
+            reading.source().channel())
         .update();
     for (FigureName name : FigureName.values()) {
       addFigure(id, name, name.of(reading));
     }
-    addSeries(id, SeriesName.TRACE.word(), SeriesCodec.encode(Curve.of(series.trace())));
-    addSeries(id, SeriesName.SPECTRUM.word(), SeriesCodec.encode(Curve.of(series.spectrum())));
-    Series.Histogram histogram = series.histogram();
-    if (histogram != null) {
-      addSeries(id, SeriesName.HISTOGRAM.word(), SeriesCodec.encode(histogram));
-    }
-    addSeries(id, FLUCTUATION_BLOCKS, SeriesCodec.encode(series.blocks().fluctuation()));
-    addSeries(id, INDICATION_BLOCKS, SeriesCodec.encode(series.blocks().indication()));
+    series.contents().forEach((name, content) -> addSeries(id, name, content));
     return id;
   }
 
@@ -204,6 +224,10 @@ public final class Readings {
         ReadingDocument.fromJson(row.getString("document")));
   }
 
-  /** A reading without its figures. */
-  public record Version(ReadingId id, Instant madeAt, String version) {}
+  /**
+   * A reading without its figures.
+   *
+   * @param main whether its channel stands for the capture
+   */
+  public record Version(ReadingId id, Instant madeAt, String version, int channel, boolean main) {}
 }

@@ -12,7 +12,9 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.time.Clock;
 import java.time.LocalDate;
+import java.util.HashSet;
 import java.util.List;
+import java.util.Set;
 import java.util.stream.Stream;
 import org.jspecify.annotations.Nullable;
 import org.junit.jupiter.api.BeforeEach;
@@ -59,6 +61,7 @@ class IntakeTest {
   private final Captures captures;
   private final Jobs jobs;
   private final CaptureKey key;
+  private final Set<Integer> measuredChannels = new HashSet<>();
   private Intake intake;
 
   IntakeTest(Database database) {
@@ -90,6 +93,7 @@ class IntakeTest {
             captures,
             new Looker(store, TestFormats.formats()),
             new Shelf(visits, models, instruments, media),
+            (capture, settings) -> measuredChannels.contains(settings.channel()),
             jobs,
             database.transactions(),
             clock);

@@ -1,5 +1,6 @@
 package turnsheet.reading;
 
+import static java.util.Objects.requireNonNull;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
@@ -7,6 +8,7 @@ import java.io.ByteArrayInputStream;
 import java.io.ByteArrayOutputStream;
 import java.time.Clock;
 import java.time.Duration;
+import java.util.List;
 import java.util.concurrent.TimeUnit;
 import java.util.concurrent.locks.LockSupport;
 import org.junit.jupiter.api.BeforeEach;
@@ -22,6 +24,8 @@ import turnsheet.capture.CaptureState;
 import turnsheet.capture.Captures;
 import turnsheet.capture.Intake;
 import turnsheet.capture.Wish;
+import turnsheet.core.format.api.ReadOptions;
+import turnsheet.core.measure.ChannelMeasurement;
 import turnsheet.core.measure.Reading;
 import turnsheet.core.synth.SignalSynth;
 import turnsheet.core.synth.SpeedFunction;
@@ -44,6 +48,7 @@ class MeasureJobTest {
   @Autowired Captures captures;
   @Autowired Jobs jobs;
   @Autowired Readings readings;
+  @Autowired CaptureChannels channels;
 
   private SampleBench bench;
 
@@ -86,6 +91,92 @@ class MeasureJobTest {
     assertThat(readings.versionsOf(id)).hasSize(1);
   }
 
+  @Test
+  void bothChannelsOfAStereoRecordingAreKept() throws Exception {
+    CaptureId id = confirm(stereoWav(tone(0.0037, 7), tone(0.0012, 8)));
+    assertThat(settled(id)).isEqualTo(CaptureState.MEASURED);
+
+    List<ChannelStanding> standings = channels.of(id);
+    assertThat(standings).extracting(ChannelStanding::main).containsExactly(true, false);
+    assertThat(standings)
+        .extracting(s -> requireNonNull(s.reading()).reading().source().channel())
+        .containsExactly(1, 2);
+    // closed form; 0.001 percentage points is the bar for clean synthetic captures
+    assertThat(deviation(standings.get(0))).isCloseTo(0.37, within(0.001));
+    assertThat(deviation(standings.get(1))).isCloseTo(0.12, within(0.001));
+    assertThat(jobs.ofSubject(id.value())).hasSize(1);
+
+    // the other channel stands for the recording without another job
+    ReadingId second = requireNonNull(standings.get(1).reading()).id();
+    Capture chosen =
+        intake.confirm(id, new Wish(null, null, null, null, ReadOptions.none().withChannel(2)));
+    assertThat(chosen.state()).isEqualTo(CaptureState.MEASURED);
+    assertThat(readings.newestOf(id)).map(StoredReading::id).hasValue(second);
+    assertThat(jobs.ofSubject(id.value())).hasSize(1);
+    assertThat(readings.versionsOf(id)).hasSize(2);
+
+    // another nominal rate is another measurement
+    Capture again =
+        intake.confirm(id, new Wish(null, 3149.0, null, null, ReadOptions.none().withChannel(1)));
+    assertThat(again.state()).isEqualTo(CaptureState.QUEUED);
+    assertThat(settled(id)).isEqualTo(CaptureState.MEASURED);
+    assertThat(readings.versionsOf(id)).hasSize(4);
+  }
+
+  @Test
+  void aSilentChannelIsToldAndIsNoFailure() throws Exception {
+    double[] silence = new double[12 * RATE_HERTZ];
+    CaptureId id = confirm(stereoWav(tone(0.0037, 7), silence));
+    assertThat(settled(id)).isEqualTo(CaptureState.MEASURED);
+
+    assertThat(readings.newestOf(id).orElseThrow().reading().source().channel()).isEqualTo(1);
+    assertThat(channels.of(id))
+        .extracting(s -> s.refusal() == null ? "measured" : s.refusal().code())
+        .containsExactly("measured", "silent");
+  }
+
+  @Test
+  void whereTheMainChannelIsSilentTheOtherStandsForTheRecordingAndSaysSo() throws Exception {
+    double[] silence = new double[12 * RATE_HERTZ];
+    CaptureId id = confirm(stereoWav(silence, tone(0.0037, 7)));
+    assertThat(settled(id)).isEqualTo(CaptureState.MEASURED);
+
+    assertThat(readings.newestOf(id).orElseThrow().reading().source().channel()).isEqualTo(2);
+    Capture capture = captures.find(id).orElseThrow();
+    assertThat(requireNonNull(capture.choices()).settings().channel()).isEqualTo(2);
+    assertThat(requireNonNull(capture.looked()).recognised().channel()).isEqualTo(2);
+    assertThat(requireNonNull(capture.looked()).recognised().guesses())
+        .filteredOn(g -> g.subject().equals("channel"))
+        .singleElement()
+        .satisfies(
+            g ->
+                assertThat(g.taken())
+                    .startsWith("channel 2, as channel 1 could not be measured (The "));
+  }
+
+  @Test
+  void whereNoChannelHasASignalTheRecordingIsRefused() throws Exception {
+    CaptureId id = confirm(stereoWav(new double[12 * RATE_HERTZ], new double[12 * RATE_HERTZ]));
+    assertThat(settled(id)).isEqualTo(CaptureState.REFUSED);
+    assertThat(requireNonNull(captures.find(id).orElseThrow().refusal()).code())
+        .isEqualTo("silent");
+    assertThat(readings.versionsOf(id)).isEmpty();
+  }
+
+  @Test
+  void progressNamesEachChannel() {
+    assertThat(
+            ChannelWords.each(
+                List.of(
+                    new ChannelMeasurement.Share(2, 0.415), new ChannelMeasurement.Share(1, 1))))
+        .isEqualTo("Is being measured, channel 2: 41 %, channel 1: 100 %.");
+  }
+
+  private static double deviation(ChannelStanding standing) {
+    Double value = requireNonNull(standing.reading()).reading().speed().deviationPercent().value();
+    return requireNonNull(value);
+  }
+
   private CaptureId confirm(byte[] wav) throws Exception {
     Capture capture =
         intake.receive(
@@ -106,6 +197,16 @@ class MeasureJobTest {
     while (!reached.getAsBoolean()) {
       LockSupport.parkNanos(Duration.ofMillis(50).toNanos());
     }
+  }
+
+  private static double[] tone(double deviation, long seed) {
+    return SignalSynth.tone(SpeedFunction.constant(deviation), 3150, RATE_HERTZ, 12, 0.5, 60, seed);
+  }
+
+  private static byte[] stereoWav(double[] left, double[] right) throws Exception {
+    ByteArrayOutputStream out = new ByteArrayOutputStream();
+    WavWriter.write(out, RATE_HERTZ, 24, left, right);
+    return out.toByteArray();
   }
 
   private static byte[] toneWav(SpeedFunction speed) throws Exception {

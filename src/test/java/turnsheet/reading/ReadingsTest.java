@@ -1,16 +1,22 @@
 package turnsheet.reading;
 
 import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.tuple;
 
 import java.time.Clock;
 import java.util.List;
+import java.util.Map;
 import org.junit.jupiter.api.Test;
+import org.springframework.jdbc.core.simple.JdbcClient;
 import turnsheet.capture.CaptureId;
 import turnsheet.capture.CaptureState;
 import turnsheet.core.diagnose.DecisionRule;
 import turnsheet.core.diagnose.Verdict;
 import turnsheet.core.measure.FigureName;
+import turnsheet.core.measure.MeasureSettings;
+import turnsheet.core.measure.Measurement;
 import turnsheet.core.measure.Reading;
+import turnsheet.core.signal.Rejection;
 import turnsheet.testing.Database;
 import turnsheet.testing.OnEachDatabase;
 
@@ -20,6 +26,8 @@ class ReadingsTest {
   private final Readings readings;
   private final CaptureResults results;
   private final CapturePlaces places;
+  private final CaptureChannels channels;
+  private final JdbcClient jdbc;
   private final SampleBench bench;
 
   ReadingsTest(Database database) {
@@ -28,6 +36,8 @@ class ReadingsTest {
     readings = new Readings(database.jdbc(), database.transactions(), clock);
     results = new CaptureResults(database.jdbc());
     places = new CapturePlaces(database.jdbc());
+    channels = new CaptureChannels(database.jdbc(), readings);
+    jdbc = database.jdbc();
     bench = new SampleBench(database.jdbc(), database.transactions(), clock);
   }
 
@@ -138,5 +148,94 @@ class ReadingsTest {
     assertThat(place.customerName()).isEqualTo("A. Customer");
     assertThat(place.unitId()).isEqualTo(bench.unit.id());
     assertThat(place.instrumentName()).isNull();
+  }
+
+  @Test
+  void onlyTheMainChannelStandsForItsCapture() {
+    CaptureId capture = bench.capture("as received", "measured");
+    ReadingId left = readings.add(capture, SampleReadings.tone(0.37, 1), SampleReadings.series());
+    ReadingId right = readings.add(capture, SampleReadings.tone(0.39, 2), SampleReadings.series());
+
+    assertThat(readings.newestOf(capture)).map(StoredReading::id).hasValue(left);
+    assertThat(readings.ofVisit(bench.visit.id())).hasSize(1);
+    assertThat(results.onTheBench())
+        .singleElement()
+        .satisfies(r -> assertThat(r.readingId()).isEqualTo(left))
+        .satisfies(r -> assertThat(r.figure(FigureName.DEVIATION).value()).isEqualTo(0.37));
+    assertThat(readings.ofChannels(capture))
+        .extracting(StoredReading::id)
+        .containsExactly(left, right);
+    assertThat(readings.versionsOf(capture))
+        .extracting(Readings.Version::channel, Readings.Version::main)
+        .containsExactly(tuple(1, true), tuple(2, false));
+
+    jdbc.sql("update capture set main_channel = 2").update();
+
+    assertThat(readings.newestOf(capture)).map(StoredReading::id).hasValue(right);
+    assertThat(results.onTheBench().get(0).readingId()).isEqualTo(right);
+    assertThat(readings.versionsOf(capture).get(0).id()).isEqualTo(right);
+  }
+
+  @Test
+  void aChannelMeasuredAgainIsNewestAmongItsOwnOnly() {
+    CaptureId capture = bench.capture("as received", "measured");
+    readings.add(capture, SampleReadings.tone(0.37, 1), SampleReadings.series());
+    ReadingId right = readings.add(capture, SampleReadings.tone(0.39, 2), SampleReadings.series());
+    ReadingId left = readings.add(capture, SampleReadings.tone(0.36, 1), SampleReadings.series());
+
+    assertThat(readings.add(capture, SampleReadings.tone(0.39, 2), SampleReadings.series()))
+        .isEqualTo(right);
+    assertThat(readings.newestOf(capture)).map(StoredReading::id).hasValue(left);
+  }
+
+  @Test
+  void refusedChannelsAreThoseOfTheLatestMeasurement() {
+    CaptureId capture = bench.capture("as received", "measured");
+    Rejection silent = new Rejection("silent", "The channel holds no signal.");
+    ReadingId left = readings.add(capture, SampleReadings.tone(0.37, 1), SampleReadings.series());
+    readings.add(capture, SampleReadings.tone(0.39, 2), SampleReadings.series());
+    channels.noteRefused(capture, Map.of(2, silent, 3, silent));
+
+    assertThat(channels.of(capture))
+        .extracting(
+            ChannelStanding::channel,
+            ChannelStanding::main,
+            s -> s.reading() == null ? null : s.reading().id(),
+            ChannelStanding::refusal)
+        .containsExactly(
+            tuple(1, true, left, null),
+            tuple(2, false, null, silent),
+            tuple(3, false, null, silent));
+
+    channels.noteRefused(capture, Map.of());
+
+    assertThat(channels.of(capture)).hasSize(2).noneMatch(s -> s.refusal() != null);
+  }
+
+  @Test
+  void aChannelNeedsNoMeasuringOnlyForTheSameSettingsAndMethod() {
+    CaptureId capture = bench.capture("as received", "measured");
+    Reading second = SampleReadings.tone(0.39, 2);
+    MeasureSettings settings = second.method().settings();
+    readings.add(capture, second, SampleReadings.series());
+    assertThat(channels.has(capture, settings)).as("made by another method").isFalse();
+
+    Reading now =
+        new Reading(
+            second.source(),
+            new Reading.Method(Measurement.METHOD_VERSION, settings),
+            second.speed(),
+            second.flutter(),
+            second.lines(),
+            null,
+            second.signal(),
+            second.warnings());
+    readings.add(capture, now, SampleReadings.series());
+
+    assertThat(channels.has(capture, settings)).isTrue();
+    assertThat(channels.has(capture, settings.onChannel(1))).isFalse();
+    assertThat(channels.has(capture, MeasureSettings.tone(3000).onChannel(2))).isFalse();
+    channels.noteRefused(capture, Map.of(2, new Rejection("silent", "No signal.")));
+    assertThat(channels.has(capture, settings)).as("refused since").isFalse();
   }
 }

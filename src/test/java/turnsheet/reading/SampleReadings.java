@@ -66,6 +66,27 @@ public final class SampleReadings {
     return new Series.Blocks(collector.blocks(), collector.blocks());
   }
 
+  /** The same on another channel. */
+  public static Reading tone(double deviationPercent, int channel) {
+    Reading one = tone(deviationPercent);
+    Reading.Source source = one.source();
+    return new Reading(
+        new Reading.Source(
+            source.sha256(),
+            source.format(),
+            source.kind(),
+            channel,
+            source.sampleRateHz(),
+            source.durationSeconds()),
+        new Reading.Method(one.method().version(), one.method().settings().onChannel(channel)),
+        one.speed(),
+        one.flutter(),
+        one.lines(),
+        one.edges(),
+        one.signal(),
+        one.warnings());
+  }
+
   public static Series series() {
     float[] speed = new float[2000];
     for (int i = 0; i < speed.length; i++) {

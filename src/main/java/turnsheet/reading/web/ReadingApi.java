@@ -13,11 +13,15 @@ import org.springframework.web.bind.annotation.RestController;
 import turnsheet.capture.CaptureId;
 import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.FigureName;
+import turnsheet.core.signal.Rejection;
 import turnsheet.document.ReadingDocument;
+import turnsheet.reading.CaptureChannels;
 import turnsheet.reading.CaptureResult;
 import turnsheet.reading.CaptureResults;
+import turnsheet.reading.ChannelStanding;
 import turnsheet.reading.ReadingId;
 import turnsheet.reading.Readings;
+import turnsheet.reading.StoredReading;
 import turnsheet.shop.SpeedSettingId;
 import turnsheet.shop.UnitId;
 import turnsheet.web.NotFoundException;
@@ -30,10 +34,12 @@ class ReadingApi {
 
   private final Readings readings;
   private final CaptureResults results;
+  private final CaptureChannels channels;
 
-  ReadingApi(Readings readings, CaptureResults results) {
+  ReadingApi(Readings readings, CaptureResults results, CaptureChannels channels) {
     this.readings = readings;
     this.results = results;
+    this.channels = channels;
   }
 
   /** The result contract. */
@@ -45,12 +51,21 @@ class ReadingApi {
         .orElseThrow(() -> new NotFoundException("reading"));
   }
 
-  /** Which readings a capture has, newest first. */
+  /**
+   * Which readings a capture has: those of the channel that stands for it first, then by channel,
+   * the newest first.
+   */
   @GetMapping("/captures/{id}/readings")
   List<ReadingEntry> ofCapture(@PathVariable UUID id) {
     return readings.versionsOf(new CaptureId(id)).stream()
-        .map(v -> new ReadingEntry(v.id().value(), v.version(), v.madeAt()))
+        .map(v -> new ReadingEntry(v.id().value(), v.version(), v.madeAt(), v.channel(), v.main()))
         .toList();
+  }
+
+  /** What the latest measurement made of each channel of a capture. */
+  @GetMapping("/captures/{id}/channels")
+  List<ChannelEntry> channels(@PathVariable UUID id) {
+    return channels.of(new CaptureId(id)).stream().map(ChannelEntry::of).toList();
   }
 
   /**
@@ -73,7 +88,34 @@ class ReadingApi {
         .toList();
   }
 
-  record ReadingEntry(UUID readingId, String methodVersion, Instant madeAt) {}
+  /**
+   * One reading of a capture.
+   *
+   * @param channel counted from 1
+   * @param main whether that channel stands for the capture
+   */
+  record ReadingEntry(
+      UUID readingId, String methodVersion, Instant madeAt, int channel, boolean main) {}
+
+  /**
+   * One channel of a capture.
+   *
+   * @param main whether it stands for the capture
+   * @param readingId its newest reading; null where it could not be measured
+   * @param refusal why it could not be measured; null where it was
+   */
+  record ChannelEntry(
+      int channel, boolean main, @Nullable UUID readingId, @Nullable Rejection refusal) {
+
+    static ChannelEntry of(ChannelStanding standing) {
+      StoredReading stored = standing.reading();
+      return new ChannelEntry(
+          standing.channel(),
+          standing.main(),
+          stored == null ? null : stored.id().value(),
+          standing.refusal());
+    }
+  }
 
   /**
    * One point of a history, in the unit that the figure's name ends with.

@@ -31,9 +31,11 @@ class ReadingController {
     return "reading/reading";
   }
 
+  /** The reading that stands for the capture. */
   @GetMapping("/captures/{id}/reading")
   String newest(@PathVariable UUID id) {
     return readings.versionsOf(new CaptureId(id)).stream()
+        .filter(Readings.Version::main)
         .findFirst()
         .map(version -> "redirect:/readings/" + version.id())
         .orElseThrow(() -> new NotFoundException("reading"));

@@ -12,7 +12,8 @@ import turnsheet.web.Shown;
  * @param running what each printed sheet carries at its foot
  * @param histogram null for a tone
  * @param edges empty for a tone
- * @param others earlier or later readings of the same capture
+ * @param channels null where the recording has one only
+ * @param others earlier or later readings of the same channel
  */
 record ReadingPage(
     String id,
@@ -37,6 +38,7 @@ record ReadingPage(
     List<String> warnings,
     List<Fact> source,
     List<Fact> method,
+    @Nullable ChannelTable channels,
     List<Other> others) {
 
   /** Whether a figure of these has a limit, so that limit and verdict need columns. */

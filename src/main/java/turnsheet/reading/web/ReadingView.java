@@ -39,6 +39,7 @@ class ReadingView {
   private final CapturePlaces places;
   private final MachineModels models;
   private final ShopRules rules;
+  private final ChannelTables channels;
   private final MessageSource messages;
   private final Times times;
 
@@ -47,12 +48,14 @@ class ReadingView {
       CapturePlaces places,
       MachineModels models,
       ShopRules rules,
+      ChannelTables channels,
       MessageSource messages,
       Times times) {
     this.readings = readings;
     this.places = places;
     this.models = models;
     this.rules = rules;
+    this.channels = channels;
     this.messages = messages;
     this.times = times;
   }
@@ -101,6 +104,7 @@ class ReadingView {
         reading.warnings().stream().map(Warning::message).toList(),
         source(reading, place, words),
         method(reading, stored, words),
+        channels.of(stored, words),
         others(stored));
   }
 
@@ -129,6 +133,7 @@ class ReadingView {
 
   private List<ReadingPage.Other> others(StoredReading shown) {
     return readings.versionsOf(shown.captureId()).stream()
+        .filter(v -> v.channel() == shown.reading().source().channel())
         .filter(v -> !v.id().equals(shown.id()))
         .map(v -> new ReadingPage.Other(v.id().toString(), times.minute(v.madeAt()), v.version()))
         .toList();

@@ -1,5 +1,6 @@
 package turnsheet.core.format.api;
 
+import java.util.ArrayList;
 import java.util.List;
 import org.jspecify.annotations.Nullable;
 import turnsheet.core.signal.Warning;
@@ -37,6 +38,15 @@ public record Recognised(
     if ((contents == Contents.WAVEFORM) == (sampleRateHertz == null)) {
       throw new IllegalArgumentException(contents + " at " + sampleRateHertz + " Hz");
     }
+  }
+
+  /** The same file read by another channel, which is taken for a reason and shown as a guess. */
+  public Recognised onChannel(int other, String why) {
+    List<Guess> told =
+        new ArrayList<>(guesses.stream().filter(g -> !g.subject().equals("channel")).toList());
+    told.add(new Guess("channel", why));
+    return new Recognised(
+        format, contents, sampleRateHertz, frames, channels, other, told, warnings);
   }
 
   /**

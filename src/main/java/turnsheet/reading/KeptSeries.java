@@ -1,0 +1,30 @@
+package turnsheet.reading;
+
+import java.util.LinkedHashMap;
+import java.util.Map;
+import turnsheet.core.measure.Series;
+import turnsheet.reading.chart.Curve;
+
+/**
+ * The curves of a reading as the store keeps them: a few megabytes, however long the recording.
+ *
+ * @param contents by their name in the store, as {@link SeriesCodec} writes them
+ */
+record KeptSeries(Map<String, byte[]> contents) {
+
+  static final String FLUCTUATION_BLOCKS = "fluctuation-blocks";
+  static final String INDICATION_BLOCKS = "indication-blocks";
+
+  static KeptSeries of(Series series) {
+    Map<String, byte[]> contents = new LinkedHashMap<>();
+    contents.put(SeriesName.TRACE.word(), SeriesCodec.encode(Curve.of(series.trace())));
+    contents.put(SeriesName.SPECTRUM.word(), SeriesCodec.encode(Curve.of(series.spectrum())));
+    Series.Histogram histogram = series.histogram();
+    if (histogram != null) {
+      contents.put(SeriesName.HISTOGRAM.word(), SeriesCodec.encode(histogram));
+    }
+    contents.put(FLUCTUATION_BLOCKS, SeriesCodec.encode(series.blocks().fluctuation()));
+    contents.put(INDICATION_BLOCKS, SeriesCodec.encode(series.blocks().indication()));
+    return new KeptSeries(contents);
+  }
+}
