@@ -126,6 +126,75 @@ class IntakeTest {
   }
 
   @Test
+  void aMeasuredChannelStandsForTheCaptureWithoutAJob() throws IOException {
+    CaptureId id = receive("tone").id();
+    intake.confirm(id, onChannel(1));
+    captures.measured(id);
+    measuredChannels.add(2);
+
+    Capture chosen = intake.confirm(id, onChannel(2));
+
+    assertThat(chosen.state()).isEqualTo(CaptureState.MEASURED);
+    assertThat(requireNonNull(chosen.choices()).settings().channel()).isEqualTo(2);
+    assertThat(requireNonNull(chosen.looked()).recognised().channel()).isEqualTo(2);
+    assertThat(mainChannel(id)).isEqualTo(2);
+    assertThat(jobs.ofSubject(id.value())).hasSize(1);
+  }
+
+  @Test
+  void whatIsNotTheChannelAloneIsMeasuredAgain() throws IOException {
+    CaptureId id = receive("tone").id();
+    intake.confirm(id, onChannel(1));
+    captures.measured(id);
+    measuredChannels.addAll(List.of(1, 2));
+
+    assertThat(intake.confirm(id, onChannel(1)).state())
+        .as("measure again")
+        .isEqualTo(CaptureState.QUEUED);
+    captures.measured(id);
+    Wish finer = new Wish(null, null, 5.0, null, ReadOptions.none().withChannel(2));
+    assertThat(intake.confirm(id, finer).state())
+        .as("another search range")
+        .isEqualTo(CaptureState.QUEUED);
+    captures.measured(id);
+    measuredChannels.remove(1);
+    Wish first = new Wish(null, null, 5.0, null, ReadOptions.none().withChannel(1));
+    assertThat(intake.confirm(id, first).state())
+        .as("a channel without a reading")
+        .isEqualTo(CaptureState.QUEUED);
+    assertThat(mainChannel(id)).isEqualTo(1);
+  }
+
+  @Test
+  void aCaptureMeasuredOnAnotherChannelSaysWhy() throws IOException {
+    CaptureId id = receive("tone").id();
+    Capture queued = intake.confirm(id, onChannel(1));
+    Looked looked = requireNonNull(queued.looked()).onChannel(2, "the first is silent");
+    CaptureChoices choices = requireNonNull(queued.choices()).onChannel(2);
+
+    assertThat(captures.measuredOn(id, looked, choices)).isTrue();
+    assertThat(captures.measuredOn(id, looked, choices)).as("waits no more").isFalse();
+
+    Capture measured = captures.find(id).orElseThrow();
+    assertThat(measured.looked()).isEqualTo(looked);
+    assertThat(measured.choices()).isEqualTo(choices);
+    assertThat(mainChannel(id)).isEqualTo(2);
+  }
+
+  private static Wish onChannel(int channel) {
+    return new Wish(null, null, null, null, ReadOptions.none().withChannel(channel));
+  }
+
+  private int mainChannel(CaptureId id) {
+    return database
+        .jdbc()
+        .sql("select main_channel from capture where id = ?")
+        .param(id.value())
+        .query(Integer.class)
+        .single();
+  }
+
+  @Test
   void keepsTheBytesOfARefusedFile() throws IOException {
     Capture capture = receive("no format at all");
     assertThat(capture.state()).isEqualTo(CaptureState.REFUSED);

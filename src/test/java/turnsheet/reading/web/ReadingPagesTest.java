@@ -138,6 +138,47 @@ class ReadingPagesTest {
   }
 
   @Test
+  void channelsOfARecordingStandSideBySide() throws Exception {
+    assertThat(page("/readings/" + reading)).doesNotContain("Channels of this recording");
+    ReadingId second = readings.add(capture, SampleReadings.tone(0.21, 2), SampleReadings.series());
+    jdbc.sql("insert into refused_channel values (?, 3, 'silent', 'The channel holds no signal.')")
+        .param(capture.value())
+        .update();
+
+    String main = page("/readings/" + reading);
+    assertThat(main)
+        .contains("Channels of this recording")
+        .contains("This page shows channel 1, which stands for the recording")
+        .contains("href=\"/readings/" + second + "\"")
+        .contains("Not measured: The channel holds no signal.")
+        .doesNotContain("Other readings")
+        .doesNotContain("??");
+    assertThat(plain(main)).contains(">+0<").contains(".2100");
+    String other = page("/readings/" + second);
+    assertThat(other)
+        .contains("channel 1 stands for the recording")
+        .contains("href=\"/readings/" + reading + "\"")
+        .contains("See that one")
+        .doesNotContain("??");
+    mvc.perform(get("/captures/" + capture + "/reading"))
+        .andExpect(redirectedUrl("/readings/" + reading));
+    mvc.perform(get("/api/v1/captures/" + capture + "/readings"))
+        .andExpect(jsonPath("$[0].readingId").value(reading.toString()))
+        .andExpect(jsonPath("$[0].main").value(true))
+        .andExpect(jsonPath("$[1].readingId").value(second.toString()))
+        .andExpect(jsonPath("$[1].channel").value(2))
+        .andExpect(jsonPath("$[1].main").value(false));
+    mvc.perform(get("/api/v1/captures/" + capture + "/channels"))
+        .andExpect(jsonPath("$.length()").value(3))
+        .andExpect(jsonPath("$[0].main").value(true))
+        .andExpect(jsonPath("$[0].refusal").isEmpty())
+        .andExpect(jsonPath("$[1].readingId").value(second.toString()))
+        .andExpect(jsonPath("$[2].readingId").isEmpty())
+        .andExpect(jsonPath("$[2].refusal.code").value("silent"));
+    mvc.perform(get("/api/v1/readings/" + second)).andExpect(jsonPath("$.source.channel").value(2));
+  }
+
+  @Test
   void tablesComeAsCsv() throws Exception {
     assertThat(page("/readings/" + reading + ".csv"))
         .contains("speed.deviationPercent,0.37,0.006,2.0,")
