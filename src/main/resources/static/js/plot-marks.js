@@ -74,30 +74,4 @@ export const flags = {
   },
 };
 
-/** The expanded uncertainty of each point. */
-export const uncertainties = {
-  id: "uncertainties",
-  beforeDatasetsDraw(chart) {
-    const { x, y } = chart.scales;
-    inside(chart, (ctx) => {
-      ctx.strokeStyle = chart.$theme.ink;
-      for (const line of chart.$marks.lines ?? []) {
-        for (const p of line.points.filter((point) => point.uncertainty > 0)) {
-          const at = x.getPixelForValue(p.x);
-          const low = y.getPixelForValue(p.y - p.uncertainty);
-          const high = y.getPixelForValue(p.y + p.uncertainty);
-          ctx.beginPath();
-          ctx.moveTo(at - 4, low);
-          ctx.lineTo(at + 4, low);
-          ctx.moveTo(at, low);
-          ctx.lineTo(at, high);
-          ctx.moveTo(at - 4, high);
-          ctx.lineTo(at + 4, high);
-          ctx.stroke();
-        }
-      }
-    });
-  },
-};
-
 export const flagRoom = FLAG_ROW * FLAG_ROWS;

@@ -1,6 +1,6 @@
 // Puts a live chart in the place of each drawn one. Without this file the drawings stand.
 
-import { flagRoom, flags, limits, uncertainties } from "./plot-marks.js";
+import { flagRoom, flags, limits } from "./plot-marks.js";
 import { Source } from "./plot-series.js";
 import { theme } from "./plot-theme.js";
 
@@ -32,7 +32,6 @@ class Plot {
   }
 
   load(from, to) {
-    if (this.kind === "history") return this.marks.lines.map((line) => line.points);
     if (this.kind === "histogram") return this.source.histogram();
     return this.source.window(from, to, 2 * (this.figure.clientWidth || 700), this.logarithmic);
   }
@@ -49,8 +48,7 @@ class Plot {
 
   redraw() {
     const { x } = this.chart.scales;
-    const kept = this.chart.data.datasets.map((set) => set.data);
-    this.draw(this.kind === "history" ? kept : kept[0], { from: x.min, to: x.max });
+    this.draw(this.chart.data.datasets[0].data, { from: x.min, to: x.max });
   }
 
   async act(button) {
@@ -106,7 +104,6 @@ class Plot {
       { id: "own", beforeInit: (chart) => Object.assign(chart, { $theme: look, $marks: this.marks }) },
       limits,
       flags,
-      uncertainties,
     ];
     return {
       type: this.kind === "histogram" ? "bar" : "line",
@@ -131,18 +128,6 @@ class Plot {
   }
 
   datasets(points, look) {
-    if (this.kind === "history") {
-      return this.marks.lines.map((line, k) => ({
-        label: line.name,
-        data: points[k],
-        borderColor: look.accent,
-        backgroundColor: k % 2 === 0 ? look.accent : look.sheet,
-        borderDash: [[], [6, 3], [2, 3]][k % 3],
-        borderWidth: 1.4,
-        pointRadius: 4,
-        pointHitRadius: 12,
-      }));
-    }
     const bars = this.kind === "histogram";
     return [
       {
@@ -162,12 +147,7 @@ class Plot {
   xScale(shown, look) {
     const scale = this.scale("x", shown, look, false);
     scale.type = this.logarithmic ? "logarithmic" : "linear";
-    if (this.marks.ticks) {
-      scale.afterBuildTicks = (axis) => {
-        axis.ticks = this.marks.ticks.map((tick) => ({ value: tick.value }));
-      };
-      scale.ticks.callback = (value) => this.marks.ticks.find((t) => t.value === value)?.text;
-    } else if (this.logarithmic) {
+    if (this.logarithmic) {
       scale.ticks.callback = (value) => {
         const digit = value / Math.pow(10, Math.floor(Math.log10(value) + 1e-9));
         return [1, 2, 5].includes(Math.round(digit * 1e6) / 1e6) ? value.toLocaleString() : "";
@@ -189,9 +169,7 @@ class Plot {
   }
 
   place(x) {
-    return this.kind === "history"
-      ? new Date(x * 86_400_000).toISOString().slice(0, 10)
-      : `${this.titles.x}: ${x.toLocaleString(undefined, { maximumFractionDigits: 4 })}`;
+    return `${this.titles.x}: ${x.toLocaleString(undefined, { maximumFractionDigits: 4 })}`;
   }
 
   zoom() {

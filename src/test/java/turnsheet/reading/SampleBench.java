@@ -2,6 +2,7 @@ package turnsheet.reading;
 
 import java.time.Clock;
 import java.time.Instant;
+import java.time.OffsetDateTime;
 import java.time.ZoneOffset;
 import java.util.List;
 import org.springframework.jdbc.core.simple.JdbcClient;
@@ -21,6 +22,7 @@ import turnsheet.shop.SpeedUnit;
 import turnsheet.shop.Unit;
 import turnsheet.shop.Units;
 import turnsheet.shop.Visit;
+import turnsheet.shop.VisitId;
 import turnsheet.shop.Visits;
 
 /** One unit on the bench, with places for captures. */
@@ -31,9 +33,11 @@ public final class SampleBench {
   public final Unit unit;
   public final Visit visit;
   private final JdbcClient jdbc;
+  private final Clock clock;
 
   public SampleBench(JdbcClient jdbc, TransactionOperations transactions, Clock clock) {
     this.jdbc = jdbc;
+    this.clock = clock;
     this.setting = SpeedSettingId.next();
     ModelId modelId = ModelId.next();
     String name = "Testdeck " + modelId.toString().substring(0, 8);
@@ -61,8 +65,31 @@ public final class SampleBench {
     this.visit = new Visits(jdbc, transactions, clock).open(unit.id(), "voices waver");
   }
 
+  /** Another unit of the model, with nothing behind it. */
+  public Unit anotherUnit(String serialNumber) {
+    return new Units(jdbc, clock).add(model.id(), unit.customerId(), serialNumber, "");
+  }
+
+  /** A visit of a unit that was over on the day it began. */
+  public VisitId pastVisit(Unit of, Instant opened) {
+    VisitId id = VisitId.next();
+    jdbc.sql(
+            """
+            insert into visit (id, unit_id, opened_at, closed_at, complaint, work_done)
+            values (?, ?, ?, ?, '', '')
+            """)
+        .params(id.value(), of.id().value(), utc(opened), utc(opened))
+        .update();
+    return id;
+  }
+
   /** A capture in a state, without bytes behind it. */
   public CaptureId capture(String condition, String state) {
+    return capture(visit.id(), condition, state, Instant.parse("2026-03-01T10:00:00Z"));
+  }
+
+  /** A capture of a visit that arrived at a time. */
+  public CaptureId capture(VisitId of, String condition, String state, Instant receivedAt) {
     CaptureId id = CaptureId.next();
     jdbc.sql(
             """
@@ -72,14 +99,18 @@ public final class SampleBench {
             """)
         .params(
             id.value(),
-            visit.id().value(),
+            of.value(),
             setting.value(),
             condition,
             "ab".repeat(32),
-            Instant.parse("2026-03-01T10:00:00Z").atOffset(ZoneOffset.UTC),
+            utc(receivedAt),
             state,
             state.equals("refused") ? "The file is silent: record it again." : "")
         .update();
     return id;
+  }
+
+  private static OffsetDateTime utc(Instant at) {
+    return at.atOffset(ZoneOffset.UTC);
   }
 }

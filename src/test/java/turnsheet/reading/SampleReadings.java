@@ -17,6 +17,11 @@ public final class SampleReadings {
 
   /** A tone that runs as much too fast, with the rest of the figures as they may be. */
   public static Reading tone(double deviationPercent) {
+    return tone(deviationPercent, 0.067);
+  }
+
+  /** The same with a two-sigma value of its own, U = 0.0020. */
+  public static Reading tone(double deviationPercent, double twoSigmaPercent) {
     Figure absent = Figure.absent("too short");
     return new Reading(
         new Reading.Source(
@@ -36,7 +41,7 @@ public final class SampleReadings {
             Figure.of(deviationPercent + 0.01, 0.02)),
         new Reading.Flutter(
             Figure.of(
-                0.067,
+                twoSigmaPercent,
                 Budget.empty().plus("length of the recording", 0.0006).plus("weighting", 0.0008)),
             Figure.of(0.071, 0.003),
             Figure.withoutUncertainty(0.031, "one stretch only"),

@@ -50,11 +50,27 @@ final class Svg {
         .formatted(number(x), number(y), escape(words));
   }
 
-  /** A hollow dot is filled with the ground, so that the line does not run through it. */
-  static String dot(String look, double x, double y, boolean full) {
-    return ("<circle class=\"%s\" cx=\"%s\" cy=\"%s\" r=\"3.2\" fill=\"%s\""
-            + " stroke=\"currentColor\" stroke-width=\"1.2\"/>")
-        .formatted(look, number(x), number(y), full ? "currentColor" : "white");
+  /** A surface through which what lies below is seen. */
+  static String area(String look, String path) {
+    return ("<path class=\"%s\" d=\"%s\" fill=\"currentColor\" fill-opacity=\"0.14\""
+            + " stroke=\"none\"/>")
+        .formatted(look, path);
+  }
+
+  /**
+   * A dot of one of four shapes: full and hollow circle, full and hollow square. A hollow one is
+   * filled with the ground, so that no line runs through it.
+   */
+  static String dot(int series, double x, double y) {
+    int shape = (series - 1) % 4;
+    String look =
+        "class=\"drawn-dot series-%d\" fill=\"%s\" stroke=\"currentColor\" stroke-width=\"1.2\"/>"
+            .formatted(shape + 1, shape % 2 == 0 ? "currentColor" : "white");
+    return shape < 2
+        ? "<circle cx=\"%s\" cy=\"%s\" r=\"3.2\" ".formatted(number(x), number(y)) + look
+        : "<rect x=\"%s\" y=\"%s\" width=\"6\" height=\"6\" "
+                .formatted(number(x - 3), number(y - 3))
+            + look;
   }
 
   static String bar(double x, double y, double width, double height) {

@@ -3,17 +3,18 @@ package turnsheet.reading.chart;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import java.util.function.DoubleUnaryOperator;
 import java.util.function.Supplier;
 
 /**
  * Draws curves with their axes as one SVG element, for paper and for pages without scripts.
  *
  * <p>Everything is told apart without colour: the first series is a full line, the second is
- * dashed, the third dotted; limits are long dashes with their name; an uncertainty is a bar. Looks
- * are set by presentation attributes, which a style sheet may overrule by class ({@code
- * drawn-axis}, {@code drawn-grid}, {@code drawn-series series-1}, {@code drawn-limit}, {@code
- * drawn-flag}, {@code drawn-bar}, {@code drawn-uncertainty}): it needs neither inline styles nor a
- * style sheet.
+ * dashed, the third dotted; limits are long dashes with their name; dots and bands are {@link
+ * TimeMarks}. Looks are set by presentation attributes, which a style sheet may overrule by class
+ * ({@code drawn-axis}, {@code drawn-grid}, {@code drawn-series series-1}, {@code drawn-limit},
+ * {@code drawn-flag}, {@code drawn-bar}, {@code drawn-uncertainty}): it needs neither inline styles
+ * nor a style sheet.
  *
  * <p>Not thread-safe; one object makes one drawing. Lengths are in the drawing's own units, of
  * which {@link #WIDTH} make the full width.
@@ -78,10 +79,9 @@ public final class SvgChart {
     return this;
   }
 
-  /** Points joined by straight lines, each with a dot and the bar of its uncertainty. */
-  public SvgChart points(List<Point> points) {
-    int number = ++series;
-    marks.add(() -> dots(number, points));
+  /** Whatever knows how to draw itself where values lie. */
+  public SvgChart mark(Mark mark) {
+    marks.add(() -> mark.drawn(new Place(this::left, this::top)));
     return this;
   }
 
@@ -183,24 +183,6 @@ public final class SvgChart {
     return path.toString();
   }
 
-  private String dots(int number, List<Point> points) {
-    StringBuilder path = new StringBuilder();
-    StringBuilder drawn = new StringBuilder();
-    for (Point p : points) {
-      path.append(path.isEmpty() ? 'M' : 'L').append(place(p.x(), p.y()));
-      if (p.uncertainty() > 0) {
-        String bar =
-            "M%sh8m-4 0V%sm-4 0h8"
-                .formatted(
-                    n(left(p.x()) - 4) + " " + n(top(p.y() - p.uncertainty())),
-                    n(top(p.y() + p.uncertainty())));
-        drawn.append(Svg.path("drawn-uncertainty", bar, 1, ""));
-      }
-      drawn.append(Svg.dot("drawn-dot series-" + number, left(p.x()), top(p.y()), number % 2 == 1));
-    }
-    return line(number, path.toString()) + drawn;
-  }
-
   private static String line(int number, String path) {
     String dashes = DASHES.get((number - 1) % DASHES.size());
     return path.isEmpty() ? "" : Svg.path("drawn-series series-" + number, path, 1.1, dashes);
@@ -228,14 +210,16 @@ public final class SvgChart {
   }
 
   private String place(double atX, double atY) {
-    return n(left(atX)) + " " + n(top(Math.max(y.from(), Math.min(y.to(), atY))));
+    return n(left(atX)) + " " + n(top(atY));
   }
 
   private double left(double value) {
     return LEFT + x.share(value) * (RIGHT - LEFT);
   }
 
-  private double top(double value) {
+  /** Values beyond the drawing lie on its edge. */
+  private double top(double wanted) {
+    double value = Math.max(y.from(), Math.min(y.to(), wanted));
     return height - BOTTOM - y.share(value) * (height - BOTTOM - frameTop());
   }
 
@@ -247,12 +231,18 @@ public final class SvgChart {
     return Svg.number(length);
   }
 
-  /**
-   * A value at a place.
-   *
-   * @param uncertainty half length of the bar about the value; 0 for none
-   */
-  public record Point(double x, double y, double uncertainty) {}
+  /** Something in a drawing. */
+  public interface Mark {
+    String drawn(Place place);
+  }
+
+  /** Where values lie in a drawing: lengths from its left and upper edge. */
+  public record Place(DoubleUnaryOperator left, DoubleUnaryOperator top) {
+
+    String at(double x, double y) {
+      return Svg.number(left.applyAsDouble(x)) + " " + Svg.number(top.applyAsDouble(y));
+    }
+  }
 
   private record Flag(double x, double y, String word) {}
 }

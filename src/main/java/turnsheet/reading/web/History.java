@@ -2,109 +2,102 @@ package turnsheet.reading.web;
 
 import java.time.Instant;
 import java.util.ArrayList;
+import java.util.Collection;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.stream.Collectors;
+import java.util.stream.DoubleStream;
 import org.jspecify.annotations.Nullable;
 import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.FigureName;
-import turnsheet.document.CoreJson;
+import turnsheet.core.stats.TrendLine;
 import turnsheet.reading.CaptureResult;
-import turnsheet.reading.Judged;
+import turnsheet.reading.Outlook;
+import turnsheet.reading.Trend;
+import turnsheet.reading.Trends;
 import turnsheet.reading.chart.Axis;
 import turnsheet.reading.chart.DateTicks;
 import turnsheet.reading.chart.SvgChart;
+import turnsheet.reading.chart.TimeMarks;
 import turnsheet.shop.ServiceLimit;
-import turnsheet.shop.SpeedSettingId;
+import turnsheet.shop.Visit;
 import turnsheet.web.Numbers;
-import turnsheet.web.Times;
 import turnsheet.web.Wording;
 
-/** One figure of one unit over the years. */
+/** Draws one figure of one unit over the years. */
 final class History {
 
-  private static final int HEIGHT = 290;
+  private static final int HEIGHT = 300;
   private static final double SECONDS_PER_DAY = 86_400;
+  private static final double DAYS_PER_YEAR = Trends.SECONDS_PER_YEAR / SECONDS_PER_DAY;
 
   private final Wording words;
-  private final Times times;
-  private final Standing standing;
+  private final List<Visit> visits;
 
-  History(Wording words, Times times, Standing standing) {
+  History(Wording words, List<Visit> visits) {
     this.words = words;
-    this.times = times;
-    this.standing = standing;
-  }
-
-  /** The captures at a speed setting that have the figure. */
-  static List<CaptureResult> with(
-      List<CaptureResult> all, SpeedSettingId settingId, FigureName figure) {
-    return all.stream()
-        .filter(r -> r.settingId().equals(settingId) && r.figures().containsKey(figure))
-        .toList();
-  }
-
-  /** Each condition is a line of its own. */
-  static List<String> conditions(List<CaptureResult> shown) {
-    return shown.stream().map(CaptureResult::condition).distinct().toList();
-  }
-
-  List<UnitPage.PointRow> points(List<CaptureResult> shown, FigureName figure) {
-    return shown.stream()
-        .map(
-            r ->
-                new UnitPage.PointRow(
-                    times.day(r.receivedAt()),
-                    r.condition(),
-                    words.show(figure, r.figure(figure)),
-                    verdict(r, figure),
-                    String.valueOf(r.readingId())))
-        .toList();
+    this.visits = visits;
   }
 
   /** The drawing; nothing to draw is the caller's to tell. */
-  Drawn draw(
-      List<CaptureResult> shown, FigureName figure, @Nullable ServiceLimit limit, String setting) {
-    List<Line> lines = conditions(shown).stream().map(c -> line(c, shown, figure)).toList();
-    List<Level> limits = limits(limit, figure);
-    Axis x = days(lines);
-    Axis y = values(lines, limits, figure);
+  String draw(FigureHistory history, String setting) {
+    List<Level> limits = limits(history.limit(), history.figure());
+    Span band = span(history.trend());
+    Axis x = days(history, band);
+    Axis y = values(history, limits, band);
     SvgChart chart =
         new SvgChart(
             x,
             y,
             HEIGHT,
-            words.text("reading.chart.history.title", words.nameOf(figure), setting),
-            words.text("reading.chart.history.more", String.join(", ", conditions(shown))));
-    List<Axis.Tick> ticks = DateTicks.between(x.from(), x.to());
-    chart.xTicks(ticks);
+            words.text("history.chart.title", words.nameOf(history.figure()), setting),
+            words.text("history.chart.more", String.join(", ", history.conditions())));
+    chart.xTicks(DateTicks.between(x.from(), x.to()));
     limits.forEach(level -> chart.limit(level.value(), level.name()));
-    lines.forEach(line -> chart.points(line.points()));
-    return new Drawn(
-        chart.toSvg(),
-        "",
-        x.title(),
-        y.title(),
-        x.from(),
-        x.to(),
-        y.from(),
-        y.to(),
-        CoreJson.toJson(new Marks(limits, ticks, lines)),
-        List.of(),
-        List.of());
+    if (band != null) {
+      chart.mark(
+          TimeMarks.band(
+              band.from(),
+              band.to(),
+              day -> band.line().at(band.years(day)),
+              day -> band.line().halfWidthAt(band.years(day))));
+    }
+    chart.mark(TimeMarks.visits(y.from(), visits.stream().map(v -> day(v.openedAt())).toList()));
+    for (List<CaptureResult> visit : byVisit(history.shown())) {
+      chart.mark(TimeMarks.join(points(visit, history.figure())));
+    }
+    int series = 0;
+    for (String condition : history.conditions()) {
+      chart.mark(
+          TimeMarks.dots(
+              ++series,
+              points(
+                  history.shown().stream().filter(r -> r.condition().equals(condition)).toList(),
+                  history.figure())));
+    }
+    return chart.toSvg();
   }
 
-  private Line line(String condition, List<CaptureResult> shown, FigureName name) {
-    List<SvgChart.Point> points = new ArrayList<>();
-    for (CaptureResult result : shown) {
+  private static Collection<List<CaptureResult>> byVisit(List<CaptureResult> shown) {
+    return shown.stream()
+        .collect(
+            Collectors.groupingBy(CaptureResult::visitId, LinkedHashMap::new, Collectors.toList()))
+        .values();
+  }
+
+  private static List<TimeMarks.Point> points(List<CaptureResult> results, FigureName name) {
+    List<TimeMarks.Point> points = new ArrayList<>();
+    for (CaptureResult result : results) {
       Figure figure = result.figure(name);
       Double value = figure.value();
       Double uncertainty = figure.expandedUncertainty();
-      if (result.condition().equals(condition) && value != null) {
+      if (value != null) {
         points.add(
-            new SvgChart.Point(
+            TimeMarks.Point.of(
                 day(result.receivedAt()), value, uncertainty == null ? 0 : uncertainty));
       }
     }
-    return new Line(condition, points);
+    return points;
   }
 
   private List<Level> limits(@Nullable ServiceLimit limit, FigureName figure) {
@@ -119,57 +112,62 @@ final class History {
             new Level(-limit.upperBound(), words.text("reading.chart.limit", "\u2212" + bound)));
   }
 
-  private Axis days(List<Line> lines) {
-    double[] days =
-        lines.stream().flatMap(l -> l.points().stream()).mapToDouble(SvgChart.Point::x).toArray();
-    double first = days[0];
-    double last = days[0];
-    for (double day : days) {
-      first = Math.min(first, day);
-      last = Math.max(last, day);
+  /** The line is drawn over the readings, and on to the limit where it is told when it meets it. */
+  private static @Nullable Span span(Trend trend) {
+    if (!(trend instanceof Trend.Shown shown)) {
+      return null;
     }
+    Instant end = shown.last();
+    if (shown.outlook() instanceof Outlook.Meets meets) {
+      Instant latest = meets.latest();
+      end = latest == null ? meets.horizon() : latest;
+    }
+    return new Span(shown.line(), day(shown.first()), Math.max(day(end), day(shown.last())));
+  }
+
+  private Axis days(FigureHistory history, @Nullable Span band) {
+    List<Double> days = new ArrayList<>();
+    history.shown().forEach(r -> days.add(day(r.receivedAt())));
+    visits.forEach(v -> days.add(day(v.openedAt())));
+    if (band != null) {
+      days.add(band.to());
+    }
+    double first = days.stream().mapToDouble(Double::doubleValue).min().orElse(0);
+    double last = days.stream().mapToDouble(Double::doubleValue).max().orElse(first);
     double air = Math.max(1, 0.04 * (last - first));
     return Axis.linear(words.text("reading.chart.day"), "", first - air, last + air);
   }
 
   /** From zero for amounts; about the values for what can be negative. */
-  private Axis values(List<Line> lines, List<Level> limits, FigureName figure) {
-    List<Double> ends = new ArrayList<>(limits.stream().map(Level::value).toList());
-    if (Wording.signOf(figure) == Numbers.Sign.PLAIN) {
-      ends.add(0.0);
+  private Axis values(FigureHistory history, List<Level> limits, @Nullable Span band) {
+    boolean plain = Wording.signOf(history.figure()) == Numbers.Sign.PLAIN;
+    DoubleStream.Builder ends = DoubleStream.builder();
+    limits.forEach(level -> ends.add(level.value()));
+    if (plain) {
+      ends.add(0);
     }
-    for (Line line : lines) {
-      for (SvgChart.Point point : line.points()) {
-        ends.add(point.y() - point.uncertainty());
-        ends.add(point.y() + point.uncertainty());
-      }
+    if (band != null) {
+      ends.add(band.line().at(0)).add(band.line().at(band.years(band.to())));
+    }
+    for (TimeMarks.Point point : points(history.shown(), history.figure())) {
+      ends.add(point.y() - point.below()).add(point.y() + point.above());
     }
     Axis around =
         Axis.around(
-            words.nameOf(figure),
-            figure.unit(),
-            ends.stream().mapToDouble(Double::doubleValue).toArray());
-    return Wording.signOf(figure) == Numbers.Sign.PLAIN
-        ? Axis.linear(around.name(), around.unit(), 0, around.to())
-        : around;
-  }
-
-  private @Nullable String verdict(CaptureResult result, FigureName figure) {
-    return standing.judged(result).stream()
-        .filter(j -> j.limit().figure() == figure)
-        .map((Judged j) -> FigureRow.word(j.judgement().verdict()))
-        .findFirst()
-        .orElse(null);
+            words.nameOf(history.figure()), history.figure().unit(), ends.build().toArray());
+    return plain ? Axis.linear(around.name(), around.unit(), 0, around.to()) : around;
   }
 
   private static double day(Instant at) {
     return at.getEpochSecond() / SECONDS_PER_DAY;
   }
 
-  /** What the script draws. */
-  record Marks(List<Level> limits, List<Axis.Tick> ticks, List<Line> lines) {}
+  private record Level(double value, String name) {}
 
-  record Level(double value, String name) {}
-
-  record Line(String name, List<SvgChart.Point> points) {}
+  /** Where the line is drawn, in days. */
+  private record Span(TrendLine line, double from, double to) {
+    double years(double day) {
+      return (day - from) / DAYS_PER_YEAR;
+    }
+  }
 }

@@ -8,37 +8,27 @@ import org.springframework.http.MediaType;
 import org.springframework.web.bind.annotation.GetMapping;
 import org.springframework.web.bind.annotation.PathVariable;
 import org.springframework.web.bind.annotation.RequestMapping;
-import org.springframework.web.bind.annotation.RequestParam;
 import org.springframework.web.bind.annotation.RestController;
 import turnsheet.capture.CaptureId;
-import turnsheet.core.measure.Figure;
-import turnsheet.core.measure.FigureName;
 import turnsheet.core.signal.Rejection;
 import turnsheet.document.ReadingDocument;
 import turnsheet.reading.CaptureChannels;
-import turnsheet.reading.CaptureResult;
-import turnsheet.reading.CaptureResults;
 import turnsheet.reading.ChannelStanding;
 import turnsheet.reading.ReadingId;
 import turnsheet.reading.Readings;
 import turnsheet.reading.StoredReading;
-import turnsheet.shop.SpeedSettingId;
-import turnsheet.shop.UnitId;
 import turnsheet.web.NotFoundException;
-import turnsheet.web.RefusedRequestException;
 
-/** Readings and histories for programs. */
+/** Readings for programs. */
 @RestController
 @RequestMapping("/api/v1")
 class ReadingApi {
 
   private final Readings readings;
-  private final CaptureResults results;
   private final CaptureChannels channels;
 
-  ReadingApi(Readings readings, CaptureResults results, CaptureChannels channels) {
+  ReadingApi(Readings readings, CaptureChannels channels) {
     this.readings = readings;
-    this.results = results;
     this.channels = channels;
   }
 
@@ -69,26 +59,6 @@ class ReadingApi {
   }
 
   /**
-   * One figure of one unit over the years, in the order of the captures.
-   *
-   * @param figure path in the result contract: {@code flutter.weightedTwoSigmaPercent}
-   */
-  @GetMapping("/units/{id}/history")
-  List<HistoryEntry> history(
-      @PathVariable UUID id, @RequestParam UUID speedSettingId, @RequestParam String figure) {
-    FigureName name =
-        FigureName.ofPath(figure)
-            .orElseThrow(
-                () ->
-                    new RefusedRequestException(
-                        "unknownFigure", "There is no figure " + figure + " to follow."));
-    return History.with(results.ofUnit(new UnitId(id)), new SpeedSettingId(speedSettingId), name)
-        .stream()
-        .map(result -> HistoryEntry.of(result, result.figure(name)))
-        .toList();
-  }
-
-  /**
    * One reading of a capture.
    *
    * @param channel counted from 1
@@ -114,33 +84,6 @@ class ReadingApi {
           standing.main(),
           stored == null ? null : stored.id().value(),
           standing.refusal());
-    }
-  }
-
-  /**
-   * One point of a history, in the unit that the figure's name ends with.
-   *
-   * @param expandedUncertainty null where it cannot be stated
-   */
-  record HistoryEntry(
-      Instant receivedAt,
-      UUID visitId,
-      UUID captureId,
-      @Nullable UUID readingId,
-      String condition,
-      @Nullable Double value,
-      @Nullable Double expandedUncertainty) {
-
-    static HistoryEntry of(CaptureResult result, Figure figure) {
-      ReadingId reading = result.readingId();
-      return new HistoryEntry(
-          result.receivedAt(),
-          result.visitId().value(),
-          result.captureId().value(),
-          reading == null ? null : reading.value(),
-          result.condition(),
-          figure.value(),
-          figure.expandedUncertainty());
     }
   }
 }

@@ -11,8 +11,6 @@ import turnsheet.web.Shown;
  * @param code on its label, in two groups
  * @param note may be empty
  * @param openVisitId the visit that the unit is here for; null where it is not on the bench
- * @param chart null where no reading has the chosen figure
- * @param series names of the drawn conditions in their order
  */
 record UnitPage(
     String id,
@@ -27,12 +25,7 @@ record UnitPage(
     String note,
     @Nullable String openVisitId,
     List<VisitRow> visits,
-    List<Choice> settings,
-    List<Choice> figures,
-    @Nullable Drawn chart,
-    List<String> series,
-    List<PointRow> points,
-    String limit) {
+    History history) {
 
   /**
    * One visit.
@@ -47,7 +40,58 @@ record UnitPage(
       String workDone,
       List<BenchPage.Latest> latest) {}
 
+  /**
+   * The unit over the years at one speed setting.
+   *
+   * @param settingId the chosen one; empty where the model has none, as its label
+   * @param figure name of the chosen one
+   * @param svg finished drawing; null where no reading has the chosen figure
+   * @param series names of the drawn conditions in their order
+   * @param trend a sentence
+   * @param trendDrawn whether the drawing has a line with its band
+   * @param typical a sentence; empty where nothing can be said
+   * @param limit a sentence; empty where there is none
+   */
+  record History(
+      List<Choice> settings,
+      List<Choice> figures,
+      String settingId,
+      String setting,
+      String figure,
+      @Nullable String svg,
+      List<String> series,
+      String trend,
+      boolean trendDrawn,
+      String typical,
+      String limit,
+      List<PointRow> points,
+      List<FigureLine> overview) {
+
+    static History empty(List<Choice> settings, List<Choice> figures) {
+      return new History(
+          settings, figures, "", "", "", null, List.of(), "", false, "", "", List.of(), List.of());
+    }
+  }
+
   record Choice(String value, String text, boolean chosen) {}
+
+  /**
+   * One figure in the table of all.
+   *
+   * @param trend rate per year, or that none is shown
+   * @param median of the newest readings of all units of the model; empty with what follows where
+   *     none has the figure
+   * @param middleHalf from the lower to the upper quartile; empty for few units
+   */
+  record FigureLine(
+      String path,
+      String name,
+      boolean chosen,
+      Shown newest,
+      String trend,
+      String median,
+      String middleHalf,
+      String units) {}
 
   /** One point of the chart. */
   record PointRow(

@@ -1,6 +1,5 @@
 package turnsheet.reading.web;
 
-import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
@@ -9,12 +8,12 @@ import java.util.stream.Collectors;
 import org.jspecify.annotations.Nullable;
 import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
-import turnsheet.core.measure.FigureName;
 import turnsheet.reading.CaptureResult;
 import turnsheet.reading.CaptureResults;
+import turnsheet.reading.Population;
+import turnsheet.reading.Populations;
 import turnsheet.shop.MachineModel;
 import turnsheet.shop.MachineModels;
-import turnsheet.shop.ServiceLimit;
 import turnsheet.shop.ShopRules;
 import turnsheet.shop.SpeedSetting;
 import turnsheet.shop.UnitId;
@@ -36,6 +35,7 @@ class UnitView {
   private final MachineModels models;
   private final CaptureResults results;
   private final ShopRules rules;
+  private final Populations populations;
   private final MessageSource messages;
   private final Times times;
 
@@ -45,6 +45,7 @@ class UnitView {
       MachineModels models,
       CaptureResults results,
       ShopRules rules,
+      Populations populations,
       MessageSource messages,
       Times times) {
     this.units = units;
@@ -52,6 +53,7 @@ class UnitView {
     this.models = models;
     this.results = results;
     this.rules = rules;
+    this.populations = populations;
     this.messages = messages;
     this.times = times;
   }
@@ -76,12 +78,9 @@ class UnitView {
     List<CaptureResult> all = results.ofUnit(id);
     List<Visit> stays = visits.ofUnit(id);
     Standing standing = new Standing(VisitView.limits(List.of(model)), rules.get().rule());
-    SpeedSetting setting = chosenSetting(model, all, settingId);
-    FigureName figure = chosenFigure(model, setting, path);
-    History history = new History(words, times, standing);
-    List<CaptureResult> shown =
-        setting == null ? List.of() : History.with(all, setting.id(), figure);
-    ServiceLimit limit = limit(model, setting, figure);
+    UnitHistory history = new UnitHistory(model, all, stays, standing, words, times);
+    SpeedSetting setting = history.chosenSetting(settingId);
+    List<Population> typical = setting == null ? List.of() : populations.ofSetting(setting.id());
     return new UnitPage(
         id.toString(),
         List.of(new Crumb(words.text("reading.trail.units"), "/units")),
@@ -95,17 +94,7 @@ class UnitView {
         summary.unit().note(),
         stays.stream().filter(Visit::isOpen).map(v -> v.id().toString()).findFirst().orElse(null),
         visitRows(stays, all, standing, words),
-        settingChoices(model, setting),
-        figureChoices(all, figure, words),
-        shown.isEmpty() || setting == null
-            ? null
-            : history.draw(shown, figure, limit, setting.label()),
-        History.conditions(shown),
-        history.points(shown, figure),
-        limit == null
-            ? ""
-            : words.text(
-                "reading.unit.limit", words.limit(figure, limit.upperBound()), limit.origin()));
+        history.page(setting, path, typical));
   }
 
   private List<UnitPage.VisitRow> visitRows(
@@ -129,61 +118,6 @@ class UnitView {
                                     r.condition(),
                                     ResultItem.of(r, standing, words)))
                         .toList()))
-        .toList();
-  }
-
-  private static @Nullable SpeedSetting chosenSetting(
-      MachineModel model, List<CaptureResult> all, @Nullable String settingId) {
-    List<SpeedSetting> settings = model.settings();
-    Optional<SpeedSetting> asked =
-        settings.stream().filter(s -> s.id().toString().equals(settingId)).findFirst();
-    // of equals the first on the selector
-    Optional<SpeedSetting> measured =
-        settings.stream().reduce((a, b) -> measured(all, b) > measured(all, a) ? b : a);
-    return asked.or(() -> measured).orElse(null);
-  }
-
-  private static FigureName chosenFigure(
-      MachineModel model, @Nullable SpeedSetting setting, @Nullable String path) {
-    Optional<FigureName> asked = path == null ? Optional.empty() : FigureName.ofPath(path);
-    return asked
-        .or(
-            () ->
-                setting == null
-                    ? Optional.empty()
-                    : model.limitsAt(setting.id()).stream()
-                        .map(ServiceLimit::figure)
-                        .filter(f -> f != FigureName.DEVIATION)
-                        .findFirst())
-        .orElse(FigureName.WEIGHTED_TWO_SIGMA);
-  }
-
-  private static @Nullable ServiceLimit limit(
-      MachineModel model, @Nullable SpeedSetting setting, FigureName figure) {
-    return setting == null
-        ? null
-        : model.limitsAt(setting.id()).stream()
-            .filter(l -> l.figure() == figure)
-            .findFirst()
-            .orElse(null);
-  }
-
-  private static long measured(List<CaptureResult> all, SpeedSetting at) {
-    return all.stream().filter(r -> r.readingId() != null && r.settingId().equals(at.id())).count();
-  }
-
-  private static List<UnitPage.Choice> settingChoices(
-      MachineModel model, @Nullable SpeedSetting chosen) {
-    return model.settings().stream()
-        .map(s -> new UnitPage.Choice(s.id().toString(), s.label(), s.equals(chosen)))
-        .toList();
-  }
-
-  private static List<UnitPage.Choice> figureChoices(
-      List<CaptureResult> all, FigureName chosen, Wording words) {
-    return Arrays.stream(FigureName.values())
-        .filter(f -> f == chosen || all.stream().anyMatch(r -> r.figures().containsKey(f)))
-        .map(f -> new UnitPage.Choice(f.path(), words.nameOf(f), f == chosen))
         .toList();
   }
 }

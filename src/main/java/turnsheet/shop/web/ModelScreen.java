@@ -34,9 +34,11 @@ class ModelScreen {
 
   private final MachineModels models;
   private final Units units;
+  private final TypicalFigures typical;
   private final MessageSource messages;
 
-  ModelScreen(MachineModels models, Units units, MessageSource messages) {
+  ModelScreen(MachineModels models, Units units, TypicalFigures typical, MessageSource messages) {
+    this.typical = typical;
     this.messages = messages;
     this.models = models;
     this.units = units;
@@ -55,6 +57,7 @@ class ModelScreen {
     MachineModel model = model(id);
     screen.addAttribute("opened", opened);
     addChoices(model, screen);
+    screen.addAttribute("typical", typical.of(model, LocaleContextHolder.getLocale()));
     addUnlessTyped(screen, "settingForm", SettingForm.EMPTY);
     addUnlessTyped(screen, "partForm", PartForm.EMPTY);
     addUnlessTyped(screen, "limitForm", LimitForm.EMPTY);

@@ -15,6 +15,8 @@ class SvgChartTest {
 
   private static final Axis SECONDS = Axis.linear("Time", "s", 0, 10);
   private static final Axis PERCENT = Axis.linear("Speed", "%", -1, 1);
+  private static final List<TimeMarks.Point> DOTS =
+      List.of(TimeMarks.Point.of(1, 0, 0), TimeMarks.Point.of(10, 0, 0.5));
 
   @Test
   void straightLineRunsFromCornerToCorner() {
@@ -53,14 +55,32 @@ class SvgChartTest {
     Axis rate = Axis.logarithmic("Rate", "Hz", 0.1, 1000);
     String svg =
         new SvgChart(rate, PERCENT, 258, "Spectrum", "Dots.")
-            .points(List.of(new SvgChart.Point(1, 0, 0), new SvgChart.Point(10, 0, 0.5)))
+            .mark(TimeMarks.join(DOTS))
+            .mark(TimeMarks.dots(1, DOTS))
             .toSvg();
 
     // four decades over 682 units: 64 + 170.5 and 64 + 341
-    assertThat(paths(svg, "drawn-series series-1")).containsExactly("M234.5 112L405 112");
+    assertThat(paths(svg, "drawn-join")).containsExactly("M234.5 112L405 112");
+    assertThat(attributes(svg, "circle", "drawn-dot series-1", "cx"))
+        .containsExactly("234.5", "405");
     // the bar of 0.5 on either side of the middle is 50 long each way
     assertThat(paths(svg, "drawn-uncertainty")).containsExactly("M401 162h8m-4 0V62m-4 0h8");
     assertThat(rate.ticks(8)).extracting(Axis.Tick::text).contains("0.1", "1", "10", "1000");
+  }
+
+  @Test
+  void aBandRunsAboutItsLineAndStaysInTheFrame() {
+    String svg =
+        new SvgChart(SECONDS, PERCENT, 258, "Speed", "A band.")
+            .mark(TimeMarks.band(0, 10, x -> -1 + x / 5, x -> 0.5))
+            .mark(TimeMarks.visits(-1, List.of(5.0)))
+            .toSvg();
+
+    // the line from corner to corner; the band half the height about it, cut at the frame
+    assertThat(paths(svg, "drawn-trend")).containsExactly("M64 212L746 12");
+    assertThat(paths(svg, "drawn-band").get(0)).startsWith("M64 162L").endsWith("L64 212Z");
+    assertThat(paths(svg, "drawn-band").get(0)).contains("L746 12L746 62L");
+    assertThat(paths(svg, "drawn-visit")).containsExactly("M405 212l-4 -8h8z");
   }
 
   @Test

@@ -219,18 +219,6 @@ class ReadingPagesTest {
 
     assertThat(byDefault).contains(">.0670<").contains("Limit 0.06").doesNotContain("??");
     assertThat(chosen).contains(">.3700<").contains("0.5").contains("<svg");
-    mvc.perform(
-            get("/api/v1/units/" + bench.unit.id() + "/history")
-                .param("speedSettingId", bench.setting.toString())
-                .param("figure", "speed.deviationPercent"))
-        .andExpect(jsonPath("$[0].value").value(0.37))
-        .andExpect(jsonPath("$[0].expandedUncertainty").value(0.006))
-        .andExpect(jsonPath("$[0].condition").value("as received"));
-    mvc.perform(
-            get("/api/v1/units/" + bench.unit.id() + "/history")
-                .param("speedSettingId", bench.setting.toString())
-                .param("figure", "nothing"))
-        .andExpect(status().isUnprocessableContent());
   }
 
   @Test
