@@ -6,7 +6,6 @@ import org.jspecify.annotations.Nullable;
  * What {@code measure} was asked for; one of the two rates is there, the other null.
  *
  * @param channel counted from 1; null for the one that the file suggests
- * @param everyChannel whether all channels are wanted; {@code channel} is null then
  */
 record MeasureArguments(
     String file,
@@ -14,19 +13,18 @@ record MeasureArguments(
     @Nullable Double pulsesPerSecond,
     @Nullable Integer teeth,
     @Nullable Integer channel,
-    boolean everyChannel,
     boolean json) {
 
   static final String USAGE =
       """
-      usage: measure FILE --tone-hz HZ [--channel N|all] [--json]
-             measure FILE --pulses-per-second RATE [--teeth N] [--channel N|all] [--json]
+      usage: measure FILE --tone-hz HZ [--channel N] [--json]
+             measure FILE --pulses-per-second RATE [--teeth N] [--channel N] [--json]
 
         --tone-hz            frequency of the test tone at nominal speed
         --pulses-per-second  pulses of the tachometer per second at nominal speed
         --teeth              pulses per turn of the sensor wheel
-        --channel            channel, column or signal, counted from 1; all: each of them, up to 8
-        --json               print the whole reading as JSON; a list of them for all channels
+        --channel            channel, column or signal, counted from 1
+        --json               print the whole reading as JSON
 
       exit status: 0 measured, 2 wrong usage, 3 the file cannot be measured
       """;
@@ -40,18 +38,13 @@ record MeasureArguments(
     Double pulses = null;
     Integer teeth = null;
     Integer channel = null;
-    boolean everyChannel = false;
     boolean json = false;
     for (int i = 0; i < args.length; i++) {
       switch (args[i]) {
         case "--tone-hz" -> toneHz = rate(args, i++);
         case "--pulses-per-second" -> pulses = rate(args, i++);
         case "--teeth" -> teeth = count(args, i++);
-        case "--channel" -> {
-          everyChannel = valueOf(args, i).equals("all");
-          channel = everyChannel ? null : count(args, i);
-          i++;
-        }
+        case "--channel" -> channel = count(args, i++);
         case "--json" -> json = true;
         default -> {
           if (args[i].startsWith("--")) {
@@ -74,7 +67,7 @@ record MeasureArguments(
     if (teeth != null && pulses == null) {
       throw new IllegalArgumentException("--teeth goes with --pulses-per-second.");
     }
-    return new MeasureArguments(file, toneHz, pulses, teeth, channel, everyChannel, json);
+    return new MeasureArguments(file, toneHz, pulses, teeth, channel, json);
   }
 
   private static Double rate(String[] args, int option) {

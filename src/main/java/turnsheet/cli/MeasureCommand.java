@@ -14,7 +14,6 @@ import turnsheet.core.format.api.ReadOptions;
 import turnsheet.core.format.api.Recognised;
 import turnsheet.core.format.api.Recognition;
 import turnsheet.core.measure.CaptureKind;
-import turnsheet.core.measure.ChannelMeasurement;
 import turnsheet.core.measure.MeasureSettings;
 import turnsheet.core.measure.Measurement;
 import turnsheet.core.measure.Outcome;
@@ -32,10 +31,7 @@ public final class MeasureCommand {
   /** The arguments make no sense; how to use the command went to the error stream. */
   public static final int WRONG_USAGE = 2;
 
-  /**
-   * The capture cannot be measured, on no channel that was asked for; the sentence went to the
-   * error stream.
-   */
+  /** The capture cannot be measured; the sentence went to the error stream. */
   public static final int REJECTED = 3;
 
   private MeasureCommand() {}
@@ -90,14 +86,6 @@ public final class MeasureCommand {
     }
     Recognised recognised = ((Recognition.Accepted) recognition).recognised();
     MeasureSettings settings = settings(arguments, recognised);
-    if (arguments.everyChannel()) {
-      return new EveryChannel(out, err)
-          .measure(
-              new Measurement(formats),
-              new ChannelMeasurement.Order(source, source.sha256(), options, settings),
-              recognised,
-              arguments.json());
-    }
     Outcome outcome =
         new Measurement(formats).measure(source, source.sha256(), options, settings, Progress.NONE);
     if (outcome instanceof Outcome.Refused refused) {

@@ -27,6 +27,7 @@ class DemoStart {
   private final OneTimeAddresses addresses;
   private final ShopProfiles profiles;
   private final DemoShop shop;
+  private final DemoReports reports;
   private final JdbcClient jdbc;
   private final Environment environment;
 
@@ -35,12 +36,14 @@ class DemoStart {
       OneTimeAddresses addresses,
       ShopProfiles profiles,
       DemoShop shop,
+      DemoReports reports,
       JdbcClient jdbc,
       Environment environment) {
     this.accounts = accounts;
     this.addresses = addresses;
     this.profiles = profiles;
     this.shop = shop;
+    this.reports = reports;
     this.jdbc = jdbc;
     this.environment = environment;
   }
@@ -84,6 +87,7 @@ class DemoStart {
         return;
       }
     }
+    reports.issue();
     Account account = accounts.bySignInName(SIGN_IN_NAME).orElseThrow();
     String path = addresses.issue(OneTimeAddresses.Purpose.ENTER, account.id(), ADDRESS_LIFETIME);
     System.out.println(

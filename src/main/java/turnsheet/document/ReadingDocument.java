@@ -1,6 +1,5 @@
 package turnsheet.document;
 
-import java.util.List;
 import turnsheet.core.measure.Reading;
 
 /**
@@ -24,11 +23,6 @@ public final class ReadingDocument {
   /** The same, laid out for people. */
   public static String toPrettyJson(Reading reading) {
     return CoreJson.toPrettyJson(reading);
-  }
-
-  /** Several readings as one list, laid out for people. */
-  public static String toPrettyJson(List<Reading> readings) {
-    return CoreJson.toPrettyJson(readings);
   }
 
   /**

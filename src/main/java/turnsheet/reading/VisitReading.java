@@ -5,6 +5,8 @@ import java.sql.SQLException;
 import java.time.Instant;
 import java.time.OffsetDateTime;
 import java.util.UUID;
+import org.jspecify.annotations.Nullable;
+import turnsheet.capture.ToneMethod;
 import turnsheet.shop.SpeedSettingId;
 
 /**
@@ -12,12 +14,18 @@ import turnsheet.shop.SpeedSettingId;
  *
  * @param condition {@code as received}, {@code after repair} or a free label
  * @param receivedAt when the capture was uploaded
+ * @param instrument that recorded it; null where nobody said
+ * @param medium that was played; null where nobody said
+ * @param method how the tone came onto it; null for what was not played, or where nobody said
  */
 public record VisitReading(
     SpeedSettingId settingId,
     String condition,
     String fileName,
     Instant receivedAt,
+    @Nullable String instrument,
+    @Nullable String medium,
+    @Nullable ToneMethod method,
     StoredReading stored) {
 
   static VisitReading of(ResultSet row, int number) throws SQLException {
@@ -26,6 +34,9 @@ public record VisitReading(
         row.getString("bench_condition"),
         row.getString("file_name"),
         row.getObject("received_at", OffsetDateTime.class).toInstant(),
+        row.getString("instrument_name"),
+        row.getString("medium_name"),
+        CapturePlaces.method(row),
         Readings.stored(row, number));
   }
 }

@@ -2,30 +2,57 @@ package turnsheet.report;
 
 import java.time.Instant;
 import java.util.List;
-import turnsheet.access.ShopProfiles.ShopProfile;
-import turnsheet.shop.VisitSummary;
+import org.jspecify.annotations.Nullable;
+import turnsheet.core.diagnose.DecisionRule;
 
 /**
- * What a visit has shown: before against after at each speed setting.
+ * What a visit has shown, with everything that page, paper and an issued report need of it: it
+ * holds no reference to anything that can change later.
  *
- * @param shop letterhead
- * @param madeAt when this sheet was put together
- * @param pairs in the order of the model's speed settings
- * @param singles readings without a partner, in the same order
+ * @param pairs conditions that can be compared, in the order of the model's speed settings
+ * @param singles conditions without a partner, in the same order
  */
 public record Sheet(
-    ShopProfile shop,
-    VisitSummary visit,
-    Instant madeAt,
-    List<SheetPair> pairs,
-    List<SheetSingle> singles) {
+    Letterhead shop, Item item, Terms terms, List<SheetPair> pairs, List<SheetSingle> singles) {
 
   public Sheet {
     pairs = List.copyOf(pairs);
     singles = List.copyOf(singles);
   }
 
-  /** Whether there is anything to show. */
+  /**
+   * The shop.
+   *
+   * @param address lines separated by line feeds; may be empty
+   * @param logo picture as data address; null where the shop has none
+   */
+  public record Letterhead(String name, String address, @Nullable String logo) {}
+
+  /**
+   * The unit and its stay.
+   *
+   * @param closedAt when it was handed back; null while it stays
+   */
+  public record Item(
+      String modelName,
+      String serialNumber,
+      String customerName,
+      String customerContact,
+      Instant openedAt,
+      @Nullable Instant closedAt,
+      String complaint,
+      String workDone) {}
+
+  /**
+   * By what the figures were judged and compared.
+   *
+   * @param leastFlutterChangePercent smallest change that matters, in percent of the value before
+   * @param leastSpeedChangePercent the same for speed, in percentage points
+   */
+  public record Terms(
+      DecisionRule rule, double leastFlutterChangePercent, double leastSpeedChangePercent) {}
+
+  /** Whether there is nothing to show. */
   public boolean isEmpty() {
     return pairs.isEmpty() && singles.isEmpty();
   }

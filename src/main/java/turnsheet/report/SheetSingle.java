@@ -1,14 +1,16 @@
 package turnsheet.report;
 
 import java.util.List;
-import turnsheet.reading.Judged;
-import turnsheet.reading.VisitReading;
-import turnsheet.shop.SpeedSetting;
+import turnsheet.core.measure.CaptureKind;
+import turnsheet.core.measure.FigureName;
 
-/** A reading without a partner of the same speed setting and kind. */
-public record SheetSingle(SpeedSetting setting, VisitReading reading, List<Judged> judged) {
+/** A condition without a partner of the same speed setting and kind. */
+public record SheetSingle(String setting, CaptureKind kind, SheetSide side, List<Entry> figures) {
 
   public SheetSingle {
-    judged = List.copyOf(judged);
+    figures = List.copyOf(figures);
   }
+
+  /** One figure. */
+  public record Entry(FigureName name, StatedFigure stated) {}
 }

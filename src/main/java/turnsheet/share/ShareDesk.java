@@ -6,8 +6,9 @@ import org.springframework.stereotype.Service;
 import org.springframework.transaction.annotation.Transactional;
 import turnsheet.access.AuditTrail;
 import turnsheet.access.CurrentUser;
-import turnsheet.shop.VisitId;
-import turnsheet.shop.Visits;
+import turnsheet.report.Issue;
+import turnsheet.report.Report;
+import turnsheet.report.Reports;
 import turnsheet.web.NotFoundException;
 import turnsheet.web.RefusedRequestException;
 
@@ -19,7 +20,7 @@ public class ShareDesk {
   public static final String PATH = "/s/";
 
   private final ShareLinks links;
-  private final Visits visits;
+  private final Reports reports;
   private final CurrentUser user;
   private final AuditTrail audit;
   private final Clock clock;
@@ -27,13 +28,13 @@ public class ShareDesk {
 
   ShareDesk(
       ShareLinks links,
-      Visits visits,
+      Reports reports,
       CurrentUser user,
       AuditTrail audit,
       Clock clock,
       @Value("${turnsheet.public-address}") String publicAddress) {
     this.links = links;
-    this.visits = visits;
+    this.reports = reports;
     this.user = user;
     this.audit = audit;
     this.clock = clock;
@@ -48,12 +49,12 @@ public class ShareDesk {
   public record Given(ShareLink link, String address) {}
 
   /**
-   * Makes a link to the sheet of a visit.
+   * Makes a link to a report.
    *
    * @throws RefusedRequestException if the number of days is out of bounds
    */
   @Transactional
-  public Given make(VisitId visit, int days) {
+  public Given make(long number, boolean showsHistory, int days) {
     if (days < ShareLinks.SHORTEST_DAYS || days > ShareLinks.LONGEST_DAYS) {
       throw new RefusedRequestException(
           "linkDays",
@@ -63,11 +64,10 @@ public class ShareDesk {
               + ShareLinks.LONGEST_DAYS
               + " days: choose a number between them.");
     }
-    if (visits.find(visit).isEmpty()) {
-      throw new NotFoundException("visit");
-    }
-    ShareLinks.Made made = links.make(visit, user.signInName(), days);
-    audit.record("share.audit.made", visit.value().toString());
+    Report report = reports.find(number).orElseThrow(() -> new NotFoundException("report"));
+    ShareLinks.Made made =
+        links.make(report.visitId(), number, showsHistory, user.signInName(), days);
+    audit.record("share.audit.made", Issue.printed(number));
     return new Given(made.link(), publicAddress + PATH + made.token());
   }
 
@@ -76,7 +76,7 @@ public class ShareDesk {
   public void withdraw(ShareLinkId id) {
     ShareLink link = links.find(id).orElseThrow(() -> new NotFoundException("link"));
     links.withdraw(id);
-    audit.record("share.audit.withdrawn", link.visitId().value().toString());
+    audit.record("share.audit.withdrawn", Issue.printed(link.reportNumber()));
   }
 
   public boolean isOpen(ShareLink link) {

@@ -2,17 +2,19 @@ package turnsheet.share;
 
 import java.time.Instant;
 import org.jspecify.annotations.Nullable;
-import turnsheet.shop.VisitId;
 
 /**
- * A link that shows the sheet of one visit to whoever has it. The token itself is not kept.
+ * A link that shows one issued report to whoever has it. The token itself is not kept.
  *
+ * @param reportNumber what it opens
+ * @param showsHistory whether the history of the unit may be seen as well
  * @param withdrawnAt null while it has not been withdrawn
  * @param lastViewAt null before the first view
  */
 public record ShareLink(
     ShareLinkId id,
-    VisitId visitId,
+    long reportNumber,
+    boolean showsHistory,
     Instant createdAt,
     String createdBy,
     Instant expiresAt,
@@ -20,7 +22,7 @@ public record ShareLink(
     int views,
     @Nullable Instant lastViewAt) {
 
-  /** Whether it opens its sheet at a time. */
+  /** Whether it opens its report at a time. */
   public boolean opensAt(Instant time) {
     return withdrawnAt == null && time.isBefore(expiresAt);
   }

@@ -17,7 +17,9 @@ import org.springframework.stereotype.Component;
 import turnsheet.access.Secrets;
 import turnsheet.shop.VisitId;
 
-/** The links that open sheets without an account: 256 random bits, of which only a hash is kept. */
+/**
+ * The links that open reports without an account: 256 random bits, of which only a hash is kept.
+ */
 @Component
 public final class ShareLinks {
 
@@ -41,9 +43,11 @@ public final class ShareLinks {
   /**
    * Makes a link.
    *
-   * @param days how long it opens the sheet, {@link #SHORTEST_DAYS} to {@link #LONGEST_DAYS}
+   * @param visit that the report is of
+   * @param days how long it opens the report, {@link #SHORTEST_DAYS} to {@link #LONGEST_DAYS}
    */
-  public Made make(VisitId visit, String createdBy, int days) {
+  public Made make(
+      VisitId visit, long reportNumber, boolean showsHistory, String createdBy, int days) {
     if (days < SHORTEST_DAYS || days > LONGEST_DAYS) {
       throw new IllegalArgumentException(days + " days");
     }
@@ -52,7 +56,8 @@ public final class ShareLinks {
     ShareLink link =
         new ShareLink(
             ShareLinkId.next(),
-            visit,
+            reportNumber,
+            showsHistory,
             now,
             createdBy,
             now.plus(Duration.ofDays(days)),
@@ -61,14 +66,16 @@ public final class ShareLinks {
             null);
     jdbc.sql(
             """
-            insert into share_link (id, token_sha256, visit_id, created_at, created_by, expires_at,
-              views)
-            values (?, ?, ?, ?, ?, ?, 0)
+            insert into share_link (id, token_sha256, visit_id, report_number, shows_history,
+              created_at, created_by, expires_at, views)
+            values (?, ?, ?, ?, ?, ?, ?, ?, 0)
             """)
         .params(
             link.id().value(),
             Secrets.sha256(token),
             visit.value(),
+            reportNumber,
+            showsHistory,
             at(now),
             createdBy,
             at(link.expiresAt()))
@@ -76,10 +83,10 @@ public final class ShareLinks {
     return new Made(link, token);
   }
 
-  /** All links to the sheet of a visit, newest first. */
-  public List<ShareLink> ofVisit(VisitId visit) {
-    return jdbc.sql("select * from share_link where visit_id = ? order by created_at desc, id")
-        .param(visit.value())
+  /** All links to a report, newest first. */
+  public List<ShareLink> ofReport(long number) {
+    return jdbc.sql("select * from share_link where report_number = ? order by created_at desc, id")
+        .param(number)
         .query(ShareLinks::link)
         .list();
   }
@@ -91,23 +98,31 @@ public final class ShareLinks {
         .optional();
   }
 
-  /** The link of a token, if it opens its sheet now; the view is counted. */
+  /** The link of a token, if it opens its report now; the view is counted. */
   public Optional<ShareLink> open(String token) {
     int counted =
         jdbc.sql(
                 """
                 update share_link set views = views + 1, last_view_at = :now
-                where token_sha256 = :hash and withdrawn_at is null and expires_at > :now
+                where token_sha256 = :hash and report_number is not null
+                  and withdrawn_at is null and expires_at > :now
                 """)
             .param("now", at(now()))
             .param("hash", Secrets.sha256(token))
             .update();
-    return counted == 0
-        ? Optional.empty()
-        : jdbc.sql("select * from share_link where token_sha256 = ?")
-            .param(Secrets.sha256(token))
-            .query(ShareLinks::link)
-            .optional();
+    return counted == 0 ? Optional.empty() : byToken(token);
+  }
+
+  /** The same without counting: what belongs to a view already counted. */
+  public Optional<ShareLink> peek(String token) {
+    return byToken(token).filter(link -> link.opensAt(now()));
+  }
+
+  private Optional<ShareLink> byToken(String token) {
+    return jdbc.sql("select * from share_link where token_sha256 = ?")
+        .param(Secrets.sha256(token))
+        .query(ShareLinks::link)
+        .optional();
   }
 
   /** Ends a link now. */
@@ -128,7 +143,8 @@ public final class ShareLinks {
   private static ShareLink link(ResultSet row, int number) throws SQLException {
     return new ShareLink(
         new ShareLinkId(row.getObject("id", UUID.class)),
-        new VisitId(row.getObject("visit_id", UUID.class)),
+        row.getLong("report_number"),
+        row.getBoolean("shows_history"),
         instant(row, "created_at"),
         row.getString("created_by"),
         instant(row, "expires_at"),

@@ -4,6 +4,7 @@ import java.time.Instant;
 import java.time.LocalDate;
 import java.time.ZoneId;
 import java.time.format.DateTimeFormatter;
+import java.time.format.FormatStyle;
 import java.util.Locale;
 import org.springframework.stereotype.Component;
 
@@ -24,6 +25,13 @@ public class Times {
   /** {@code 2026-12-01}. */
   public String day(Instant at) {
     return date(at).toString();
+  }
+
+  /** A day as a language writes it on paper; in English as the log does. */
+  public String day(Instant at, Locale locale) {
+    return locale.getLanguage().equals(Locale.ENGLISH.getLanguage())
+        ? day(at)
+        : DateTimeFormatter.ofLocalizedDate(FormatStyle.MEDIUM).withLocale(locale).format(date(at));
   }
 
   /** The shop's date at an instant. */

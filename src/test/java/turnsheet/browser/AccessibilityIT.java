@@ -29,7 +29,7 @@ class AccessibilityIT {
 
   /** Files rather than pages. */
   private static final Pattern FILE =
-      Pattern.compile("/api/|\\.(csv|json|wav|yaml)$|/file$|/progress$|/webjars/");
+      Pattern.compile("/api/|\\.(csv|json|wav|yaml)$|/file$|/pdf$|/progress$|/webjars/");
 
   /** Pages that look different from one recording or unit to the next. */
   private static final Map<String, Integer> SEVERAL =
@@ -78,6 +78,7 @@ class AccessibilityIT {
 
     System.out.println("Pages looked at: " + String.join(" ", shapes));
     assertThat(shapes)
+        .contains("/reports", "/reports/{id}", "/reports/{id}/revise", "/check")
         .contains("/", "/units/{id}", "/visits/{id}", "/readings/{id}", "/models/{id}", "/shop")
         .contains("/instruments/{id}/clock-checks/{id}", "/instruments/{id}/clock-checks/new");
     assertThat(wrong).as(String.join("\n", wrong)).isEmpty();
@@ -111,11 +112,11 @@ class AccessibilityIT {
 
   /** The customer's page, and what is left of it when the link is withdrawn. */
   private List<String> sharing(Set<String> shapes) {
-    assertThat(shapes).contains("/visits/{id}/links");
+    assertThat(shapes).contains("/reports/{id}/links");
     var wrong = new ArrayList<String>();
     visitor.open(service.address(linksPage));
     visitor.pressButton("Make a link");
-    wrong.addAll(audit.of("/visits/{id}/links with a new link", 200));
+    wrong.addAll(audit.of("/reports/{id}/links with a new link", 200));
     String shared = visitor.find("#address").getDomProperty("value");
     visitor.open(shared);
     wrong.addAll(audit.of("/s/{token}", 200));
@@ -130,7 +131,7 @@ class AccessibilityIT {
         ID.matcher(path)
             .replaceAll("{id}")
             .replaceAll("/limits/\\{id}/[^/]+", "/limits/{id}/{figure}");
-    if (shape.equals("/visits/{id}/links")) {
+    if (shape.equals("/reports/{id}/links")) {
       linksPage = path;
     }
     String query = address.contains("?") ? address.substring(address.indexOf('?')) : "";

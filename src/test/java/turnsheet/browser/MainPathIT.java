@@ -38,6 +38,7 @@ class MainPathIT {
   private Hand hand;
   private Audit audit;
   private final List<String> wrong = new ArrayList<>();
+  private String report = "";
   private String visit = "";
 
   @BeforeAll
@@ -62,7 +63,8 @@ class MainPathIT {
     theCurveIsLookedAtCloserByHand();
     theRepairIsDroppedOnThePageWithAnotherFile();
     theSheetComparesAndPrintsOnBothPapers();
-    aShareLinkOpensTheSheetToAnyoneUntilItIsWithdrawn();
+    theOwnerIssuesTheReport();
+    aShareLinkOpensTheReportToAnyoneUntilItIsWithdrawn();
     aFileOfAnotherKindIsRefusedWithItsReason();
     everythingNeededWorksWithoutScript();
     wrong.addAll(visitor.complaints());
@@ -170,8 +172,23 @@ class MainPathIT {
     printsOn(8.5, 11);
   }
 
-  private void aShareLinkOpensTheSheetToAnyoneUntilItIsWithdrawn() {
-    visitor.open(visit + "/links");
+  private void theOwnerIssuesTheReport() {
+    visitor.press(visitor.find("a[href$='/report']"));
+    visitor.fill("conditions", "230 V, 50 Hz; warmed up for half an hour");
+    wrong.addAll(audit.of("/visits/{id}/report", 200));
+    visitor.pressButton("Issue");
+
+    report = visitor.address();
+    assertThat(visitor.heading()).isEqualTo("Report 00001");
+    assertThat(visitor.find("table.compare").getText()).contains("improved");
+    assertThat(visitor.find("main").getText()).contains("warmed up for half an hour");
+    wrong.addAll(audit.of("/reports/{number}", 200));
+    printsOn(210 / 25.4, 297 / 25.4);
+    printsOn(8.5, 11);
+  }
+
+  private void aShareLinkOpensTheReportToAnyoneUntilItIsWithdrawn() {
+    visitor.open(report + "/links");
     visitor.pressButton("Make a link");
     String shared = String.valueOf(visitor.find("#address").getDomProperty("value"));
 
@@ -186,7 +203,7 @@ class MainPathIT {
     visitor.fill("name", "bench");
     visitor.fill("password", PASSWORD);
     visitor.pressButton("Sign in");
-    visitor.open(visit + "/links");
+    visitor.open(report + "/links");
     visitor.pressButton("Withdraw");
     visitor.open(shared);
     assertThat(visitor.heading()).isEqualTo("This link opens nothing");

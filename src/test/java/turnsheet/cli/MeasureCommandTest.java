@@ -18,7 +18,6 @@ import turnsheet.core.measure.Reading;
 import turnsheet.core.synth.SignalSynth;
 import turnsheet.core.synth.SpeedFunction;
 import turnsheet.core.synth.WavWriter;
-import turnsheet.document.CoreJson;
 import turnsheet.document.ReadingDocument;
 
 class MeasureCommandTest {
@@ -60,47 +59,6 @@ class MeasureCommandTest {
     String file = tachometer().toString();
     assertThat(run(file, "--pulses-per-second", "800", "--channel", "2")).isEqualTo(3);
     assertThat(err.toString(StandardCharsets.UTF_8)).isNotBlank().doesNotContain("Exception");
-  }
-
-  @Test
-  void measuresEveryChannelAndTellsWhichIsSilent() throws IOException {
-    double[] right = tone(0.005);
-    String file = wav(new double[right.length], right).toString();
-
-    assertThat(run(file, "--tone-hz", "800", "--channel", "all")).isZero();
-    assertThat(out.toString(StandardCharsets.UTF_8))
-        .contains(", channel 2, ")
-        .doesNotContain(", channel 1, ")
-        .doesNotContain("assumed");
-    assertThat(err.toString(StandardCharsets.UTF_8)).startsWith("Channel 1: The ");
-
-    out.reset();
-    assertThat(run(file, "--tone-hz", "800", "--channel", "2")).isZero();
-    assertThat(out.toString(StandardCharsets.UTF_8)).contains(", channel 2, ");
-  }
-
-  @Test
-  void everyChannelAsOneListOfDocuments() throws IOException {
-    String file = wav(tone(0.005), tone(-0.002)).toString();
-
-    assertThat(run(file, "--tone-hz", "800", "--channel", "all", "--json")).isZero();
-    Reading[] readings = CoreJson.fromJson(out.toString(StandardCharsets.UTF_8), Reading[].class);
-    assertThat(readings).extracting(r -> r.source().channel()).containsExactly(1, 2);
-    for (Reading reading : readings) {
-      out.reset();
-      String channel = Integer.toString(reading.source().channel());
-      assertThat(run(file, "--tone-hz", "800", "--channel", channel, "--json")).isZero();
-      assertThat(ReadingDocument.fromJson(out.toString(StandardCharsets.UTF_8))).isEqualTo(reading);
-    }
-  }
-
-  @Test
-  void whereNoChannelCanBeMeasuredTheFileIsRejected() throws IOException {
-    String file = wav(new double[48000 * 5], new double[48000 * 5]).toString();
-    assertThat(run(file, "--tone-hz", "800", "--channel", "all"))
-        .isEqualTo(MeasureCommand.REJECTED);
-    assertThat(err.toString(StandardCharsets.UTF_8)).contains("Channel 1: ", "Channel 2: ");
-    assertThat(out.size()).isZero();
   }
 
   @Test
@@ -146,18 +104,12 @@ class MeasureCommandTest {
 
   /** 5 s at 48 kHz: 804 pulses a second, 0.5 % fast. */
   private Path tachometer() throws IOException {
-    return wav(tone(0.005));
-  }
-
-  private static double[] tone(double deviation) {
-    return SignalSynth.tone(
-        SpeedFunction.constant(deviation), 800, 48000, 5, 0.5, Double.POSITIVE_INFINITY, 1);
-  }
-
-  private Path wav(double[]... channels) throws IOException {
     Path file = folder.resolve("tachometer.wav");
+    double[] samples =
+        SignalSynth.tone(
+            SpeedFunction.constant(0.005), 800, 48000, 5, 0.5, Double.POSITIVE_INFINITY, 1);
     try (OutputStream bytes = Files.newOutputStream(file)) {
-      WavWriter.write(bytes, 48000, 16, channels);
+      WavWriter.write(bytes, 48000, 16, samples);
     }
     return file;
   }

@@ -27,6 +27,7 @@ import turnsheet.core.measure.FigureName;
 class MessageKeysTest {
   private static final Path MAIN = Path.of("src", "main");
 
+  private static final String GERMAN = "_de";
   private static final Set<String> USED = new TreeSet<>();
 
   private static final Properties KEYS = new Properties();
@@ -35,10 +36,10 @@ class MessageKeysTest {
   @BeforeAll
   static void readEverything() throws IOException {
     for (Path file : files("resources/messages", ".properties")) {
-      Properties one = new Properties();
-      try (var in = Files.newBufferedReader(file)) {
-        one.load(in);
+      if (isGerman(file)) {
+        continue;
       }
+      Properties one = read(file);
       one.stringPropertyNames().stream().filter(KEYS::containsKey).forEach(TWICE::add);
       KEYS.putAll(one);
     }
@@ -65,6 +66,48 @@ class MessageKeysTest {
   void theScanSeesTheProject() {
     assertThat(KEYS.size()).isGreaterThan(100);
     assertThat(USED).contains("web.layout.shop", "access.signIn.title", "web.verdict.");
+  }
+
+  /**
+   * Each German file has the texts of its English one, with the same places for what is filled in.
+   */
+  @Test
+  void germanSaysAllThatEnglishSays() throws IOException {
+    for (Path file : files("resources/messages", ".properties")) {
+      if (isGerman(file)) {
+        Properties german = read(file);
+        Properties english =
+            read(file.resolveSibling(file.getFileName().toString().replace(GERMAN, "")));
+        assertThat(german.stringPropertyNames())
+            .as(file.toString())
+            .isEqualTo(english.stringPropertyNames());
+        for (String key : english.stringPropertyNames()) {
+          assertThat(places(german.getProperty(key)))
+              .as(key)
+              .isEqualTo(places(english.getProperty(key)));
+        }
+      }
+    }
+  }
+
+  private static Set<String> places(String text) {
+    return Pattern.compile("\\{\\d")
+        .matcher(text)
+        .results()
+        .map(r -> r.group())
+        .collect(Collectors.toCollection(TreeSet::new));
+  }
+
+  private static boolean isGerman(Path file) {
+    return file.getFileName().toString().contains(GERMAN);
+  }
+
+  private static Properties read(Path file) throws IOException {
+    Properties texts = new Properties();
+    try (var in = Files.newBufferedReader(file)) {
+      texts.load(in);
+    }
+    return texts;
   }
 
   @Test

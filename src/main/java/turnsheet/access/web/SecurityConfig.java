@@ -44,6 +44,7 @@ class SecurityConfig {
     "/first-run/**",
     "/enter/**",
     "/s/**",
+    "/check",
     "/css/**",
     "/js/**",
     "/img/**",

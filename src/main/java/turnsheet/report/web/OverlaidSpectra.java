@@ -1,40 +1,36 @@
 package turnsheet.report.web;
 
-import turnsheet.reading.Readings;
-import turnsheet.reading.SeriesName;
+import java.util.List;
 import turnsheet.reading.chart.Axis;
 import turnsheet.reading.chart.Curve;
 import turnsheet.reading.chart.SvgChart;
-import turnsheet.report.SheetPair;
+import turnsheet.report.SheetSide.CurvePart;
 import turnsheet.web.Wording;
 
 /** Draws the spectra of both sides of a pair into one frame: after full, before dashed. */
 final class OverlaidSpectra {
 
   private static final int HEIGHT = 230;
-  private static final int POINTS = 300;
   private static final double LOWEST_HZ = 0.2;
   private static final double HIGHEST_HZ = 100;
 
   private final Wording words;
-  private final Readings readings;
 
-  OverlaidSpectra(Wording words, Readings readings) {
+  OverlaidSpectra(Wording words) {
     this.words = words;
-    this.readings = readings;
   }
 
   /** The drawing as SVG; empty where a side has no spectrum. */
-  String draw(SheetPair pair) {
-    Curve before = readings.curve(pair.before().stored().id(), SeriesName.SPECTRUM).orElse(null);
-    Curve after = readings.curve(pair.after().stored().id(), SeriesName.SPECTRUM).orElse(null);
-    if (before == null || after == null) {
+  String draw(List<CurvePart> before, List<CurvePart> after) {
+    if (before.isEmpty() || after.isEmpty()) {
       return "";
     }
-    double to = Math.min(HIGHEST_HZ, Math.min(before.end(), after.end()));
-    Curve[] first = windows(after, to);
-    Curve[] second = windows(before, to);
-    double highest = Math.max(highest(first), highest(second));
+    Curve[] dashed = curves(before);
+    Curve[] full = curves(after);
+    double to =
+        Math.min(
+            HIGHEST_HZ, Math.min(dashed[dashed.length - 1].end(), full[full.length - 1].end()));
+    double highest = Math.max(highest(dashed), highest(full));
     return new SvgChart(
             Axis.logarithmic(words.text("report.spectrum.rate"), "Hz", LOWEST_HZ, to),
             Axis.linear(
@@ -42,18 +38,21 @@ final class OverlaidSpectra {
             HEIGHT,
             words.text("report.spectrum.title"),
             words.text("report.spectrum.more"))
-        .curve(first)
-        .curve(second)
+        .curve(full)
+        .curve(dashed)
         .toSvg();
   }
 
-  /** A decade at a time, so that the low rates keep their points on the logarithmic axis. */
-  private static Curve[] windows(Curve whole, double to) {
-    var parts = new java.util.ArrayList<Curve>();
-    for (double from = LOWEST_HZ; from < to; from *= 10) {
-      parts.add(whole.window(from, Math.min(to, from * 10), POINTS));
+  private static Curve[] curves(List<CurvePart> parts) {
+    return parts.stream().map(OverlaidSpectra::curve).toArray(Curve[]::new);
+  }
+
+  private static Curve curve(CurvePart part) {
+    float[] values = new float[part.high().size()];
+    for (int i = 0; i < values.length; i++) {
+      values[i] = part.high().get(i);
     }
-    return parts.toArray(Curve[]::new);
+    return Curve.ofSamples(part.start(), part.step(), values);
   }
 
   private static double highest(Curve[] parts) {

@@ -2,77 +2,114 @@ package turnsheet.report.web;
 
 import java.util.List;
 import org.jspecify.annotations.Nullable;
-import turnsheet.web.Shown;
 
 /**
- * A sheet with everything in words, as page, print and share link show it.
+ * A sheet with everything in words, as page, paper and PDF show it.
  *
- * @param closed day of handing back; empty while the unit is on the bench
- * @param rule the decision rule in one sentence
+ * @param title of the sheet
+ * @param identity line that runs along on every sheet of paper
+ * @param logo data address; null where the shop has none
+ * @param facts what stands at the head, in order
+ * @param pairs compared conditions
+ * @param singles conditions without partner
+ * @param notes rule, uncertainty, scope and the like, in order
+ * @param caution of those who open the machine
+ * @param end the mark after which nothing follows
+ * @param check code and address of an issued report; null for a sheet that is not issued
  */
 public record SheetPage(
+    String language,
+    String title,
+    String identity,
     String shopName,
     List<String> shopAddress,
-    String modelName,
-    String serialNumber,
-    String customerName,
-    String opened,
-    String closed,
-    String complaint,
-    String workDone,
-    String madeOn,
+    @Nullable String logo,
+    List<Fact> facts,
     List<Pair> pairs,
     List<Single> singles,
-    String rule) {
+    List<String> notes,
+    String caution,
+    String end,
+    @Nullable Check check) {
 
-  /** Whether any figure on the sheet is held against a limit. */
-  public boolean judged() {
-    return pairs.stream().flatMap(p -> p.rows().stream()).anyMatch(r -> !r.limit().isEmpty())
-        || singles.stream().flatMap(s -> s.rows().stream()).anyMatch(r -> !r.limit().isEmpty());
-  }
+  /** A name and what belongs to it, one or several lines. */
+  public record Fact(String name, List<String> lines) {}
+
+  /**
+   * How the report can be checked.
+   *
+   * @param sentence with code and address
+   * @param code picture of the address as SVG
+   */
+  public record Check(String sentence, String code) {}
 
   /**
    * One speed setting before and after.
    *
    * @param sentence what changed, in one sentence
-   * @param spectrum drawing of both spectra
+   * @param spectrum drawing of both spectra; empty where a side has none
    */
   public record Pair(
       String setting,
       String kind,
       String sentence,
-      List<String> cautions,
-      Side before,
-      Side after,
+      List<String> remarks,
+      String before,
+      String after,
       List<Row> rows,
-      String spectrum) {}
-
-  /** Where one column of figures comes from. */
-  public record Side(String day, String fileName, String shortHash, String method, String href) {}
+      String spectrum,
+      List<Line> lines,
+      List<Recording> recordings) {}
 
   /**
    * One figure.
    *
    * @param limit bound with its unit; empty where there is none
    * @param origin of the bound; empty with it
-   * @param change one of the words improved, worse, same
+   * @param change one of the words improved, worse, small, same
    */
   public record Row(
       String name,
-      Shown before,
-      @Nullable String verdictBefore,
-      Shown after,
-      @Nullable String verdictAfter,
+      Cell before,
+      Cell after,
       String limit,
       String origin,
-      Shown difference,
+      String difference,
       String change) {}
+
+  /**
+   * A figure of one condition.
+   *
+   * @param more spread and worst of several captures; empty for one
+   * @param verdict null where there is no limit or no value
+   * @param probability of conformity; empty where there is no verdict
+   * @param why reason of an undecided verdict; null for others
+   */
+  public record Cell(
+      String shown,
+      String more,
+      @Nullable String verdict,
+      String probability,
+      @Nullable String why) {}
+
+  /**
+   * One line of the spectra.
+   *
+   * @param fate one of the words stayed, went, came
+   */
+  public record Line(String rate, String before, String after, String fate, String part) {}
 
   /** A reading that has no partner. */
   public record Single(
-      String setting, String kind, String condition, Side side, List<SingleRow> rows) {}
+      String setting,
+      String kind,
+      String condition,
+      List<SingleRow> rows,
+      List<Recording> recordings) {}
 
-  /** One figure of a reading without partner. */
-  public record SingleRow(
-      String name, Shown shown, String limit, String origin, @Nullable String verdict) {}
+  /** One figure of a condition without partner. */
+  public record SingleRow(String name, Cell cell, String limit, String origin) {}
+
+  /** Where figures come from. */
+  public record Recording(String condition, String text, String href) {}
 }

@@ -1,175 +1,145 @@
 package turnsheet.report.web;
 
+import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import org.jspecify.annotations.Nullable;
 import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
-import turnsheet.core.diagnose.Difference;
-import turnsheet.core.measure.Figure;
-import turnsheet.core.measure.FigureName;
-import turnsheet.core.measure.Reading;
-import turnsheet.reading.Judged;
-import turnsheet.reading.Readings;
-import turnsheet.reading.VisitReading;
-import turnsheet.report.Comparison;
+import turnsheet.report.Issue;
+import turnsheet.report.Report;
 import turnsheet.report.Sheet;
-import turnsheet.report.SheetPair;
-import turnsheet.report.SheetSingle;
-import turnsheet.shop.ShopRules;
-import turnsheet.shop.Visit;
 import turnsheet.web.Times;
 import turnsheet.web.Wording;
 
-/** Puts a sheet into words. */
+/** Puts a sheet into words, issued or not. */
 @Component
 public class SheetPages {
 
-  private static final int SHORT_HASH = 12;
-
   private final MessageSource messages;
   private final Times times;
-  private final Readings readings;
-  private final ShopRules rules;
+  private final CheckPrint checks;
 
-  SheetPages(MessageSource messages, Times times, Readings readings, ShopRules rules) {
+  SheetPages(MessageSource messages, Times times, CheckPrint checks) {
     this.messages = messages;
     this.times = times;
-    this.readings = readings;
-    this.rules = rules;
+    this.checks = checks;
   }
 
-  /** The sheet in the language of a reader. */
+  /** The sheet as things stand, in the language of a reader. */
   public SheetPage of(Sheet sheet, Locale locale) {
+    return page(sheet, null, locale);
+  }
+
+  /** An issued report in the language that it was issued in. */
+  public SheetPage of(Report report) {
+    return page(report.content().sheet(), report, Locale.forLanguageTag(issue(report).language()));
+  }
+
+  private SheetPage page(Sheet sheet, @Nullable Report report, Locale locale) {
     Wording words = new Wording(messages, locale);
-    Visit visit = sheet.visit().visit();
+    SheetParts parts = new SheetParts(words, times, locale);
+    String title =
+        report == null
+            ? words.text("report.sheet.title")
+            : words.text("report.issued.title", issue(report).printedNumber());
+    String identity = sheet.item().modelName() + ", " + sheet.item().serialNumber();
     return new SheetPage(
+        locale.getLanguage(),
+        title,
+        title + ", " + identity,
         sheet.shop().name(),
-        Arrays.stream(sheet.shop().address().split("\n", -1)).filter(s -> !s.isBlank()).toList(),
-        sheet.visit().modelName(),
-        sheet.visit().serialNumber(),
-        sheet.visit().customerName(),
-        times.day(visit.openedAt()),
-        visit.closedAt() == null ? "" : times.day(visit.closedAt()),
-        visit.complaint(),
-        visit.workDone(),
-        times.minute(sheet.madeAt()),
-        sheet.pairs().stream().map(pair -> pair(words, pair)).toList(),
-        sheet.singles().stream().map(single -> single(words, single)).toList(),
-        words.rule(rules.get().rule()));
+        lines(sheet.shop().address()),
+        sheet.shop().logo(),
+        facts(sheet.item(), report, words, locale),
+        sheet.pairs().stream().map(parts::pair).toList(),
+        sheet.singles().stream().map(parts::single).toList(),
+        notes(sheet, words),
+        words.text("report.sheet.care"),
+        report == null
+            ? words.text("report.sheet.end", identity)
+            : words.text("report.issued.end", issue(report).printedNumber(), identity),
+        report == null ? null : checks.of(report, words));
   }
 
-  private SheetPage.Pair pair(Wording words, SheetPair pair) {
-    return new SheetPage.Pair(
-        pair.setting().label(),
-        kind(words, pair.before()),
-        sentence(words, pair),
-        pair.cautions().stream()
-            .map(c -> words.text("report.caution." + c.name().toLowerCase(Locale.ROOT)))
-            .toList(),
-        side(pair.before()),
-        side(pair.after()),
-        pair.figures().stream().map(c -> row(words, c)).toList(),
-        new OverlaidSpectra(words, readings).draw(pair));
+  private List<SheetPage.Fact> facts(
+      Sheet.Item item, @Nullable Report report, Wording words, Locale locale) {
+    List<SheetPage.Fact> facts = new ArrayList<>();
+    if (report != null) {
+      Issue issue = issue(report);
+      add(facts, words, "number", issue.printedNumber());
+      add(facts, words, "issued", times.day(issue.issuedAt(), locale));
+      if (issue.revises() != null) {
+        add(facts, words, "revises", Issue.printed(issue.revises()) + ": " + issue.reason());
+      }
+    }
+    add(
+        facts,
+        words,
+        "unit",
+        item.modelName() + "\n" + words.text("report.sheet.serial", item.serialNumber()));
+    add(facts, words, "customer", item.customerName() + "\n" + item.customerContact());
+    add(
+        facts,
+        words,
+        "stay",
+        item.closedAt() == null
+            ? words.text("report.sheet.still", times.day(item.openedAt(), locale))
+            : times.day(item.openedAt(), locale) + " – " + times.day(item.closedAt(), locale));
+    add(facts, words, "complaint", item.complaint());
+    add(facts, words, "work", item.workDone());
+    if (report != null) {
+      Issue issue = issue(report);
+      add(facts, words, "conditions", issue.conditions());
+      add(facts, words, "measuredBy", issue.measuredBy());
+      add(facts, words, "releasedBy", issue.releasedBy());
+      add(facts, words, "remarks", issue.remarks());
+    }
+    return facts;
   }
 
-  /** The flutter figure that has a limit, else the two-sigma figure, decides the sentence. */
-  private static String sentence(Wording words, SheetPair pair) {
-    Comparison headline =
-        pair.figures().stream()
-            .filter(c -> c.name() != FigureName.DEVIATION && c.name() != FigureName.DRIFT)
-            .filter(c -> c.judgedAfter() != null)
-            .findFirst()
-            .or(
-                () ->
-                    pair.figures().stream()
-                        .filter(c -> c.name() == FigureName.WEIGHTED_TWO_SIGMA)
-                        .findFirst())
-            .orElse(pair.figures().get(0));
-    return words.text(
-        "report.sentence." + change(headline.difference()),
-        words.nameOf(headline.name()),
-        words.show(headline.name(), headline.before()).text(),
-        words.show(headline.name(), headline.after()).text());
+  /** What nobody wrote is left out. */
+  private static void add(List<SheetPage.Fact> facts, Wording words, String key, String text) {
+    List<String> lines = lines(text);
+    if (!lines.isEmpty()) {
+      facts.add(new SheetPage.Fact(words.text("report.fact." + key), lines));
+    }
   }
 
-  private static SheetPage.Row row(Wording words, Comparison c) {
-    Judged judged = c.judgedAfter() != null ? c.judgedAfter() : c.judgedBefore();
-    return new SheetPage.Row(
-        words.nameOf(c.name()),
-        words.show(c.name(), c.before()),
-        verdict(c.judgedBefore()),
-        words.show(c.name(), c.after()),
-        verdict(c.judgedAfter()),
-        limit(words, judged),
-        origin(judged),
-        words
-            .numbers()
-            .show(c.difference().difference(), c.name().unit(), turnsheet.web.Numbers.Sign.SHOWN),
-        change(c.difference()));
+  private static List<String> lines(String text) {
+    return Arrays.stream(text.split("\n", -1)).filter(line -> !line.isBlank()).toList();
   }
 
-  private SheetPage.Single single(Wording words, SheetSingle single) {
-    Reading reading = single.reading().stored().reading();
-    List<SheetPage.SingleRow> rows =
-        Arrays.stream(FigureName.values())
-            .filter(name -> name.of(reading).value() != null)
-            .map(name -> singleRow(words, name, name.of(reading), single.judged()))
-            .toList();
-    return new SheetPage.Single(
-        single.setting().label(),
-        kind(words, single.reading()),
-        single.reading().condition(),
-        side(single.reading()),
-        rows);
+  private static List<String> notes(Sheet sheet, Wording words) {
+    List<String> notes = new ArrayList<>();
+    notes.add(words.text("report.note.method"));
+    notes.add(words.text("report.note.uncertainty"));
+    if (isJudged(sheet)) {
+      notes.add(words.rule(sheet.terms().rule()));
+    }
+    if (!sheet.pairs().isEmpty()) {
+      notes.add(
+          words.text(
+              "report.note.change",
+              words.numbers().plain(sheet.terms().leastFlutterChangePercent()),
+              words.numbers().plain(sheet.terms().leastSpeedChangePercent())));
+    }
+    notes.add(words.text("report.note.customer"));
+    notes.add(words.text("report.note.scope"));
+    return notes;
   }
 
-  private static SheetPage.SingleRow singleRow(
-      Wording words, FigureName name, Figure figure, List<Judged> judged) {
-    Judged here = judged.stream().filter(j -> j.limit().figure() == name).findFirst().orElse(null);
-    return new SheetPage.SingleRow(
-        words.nameOf(name),
-        words.show(name, figure),
-        limit(words, here),
-        origin(here),
-        verdict(here));
+  private static boolean isJudged(Sheet sheet) {
+    return sheet.pairs().stream()
+            .flatMap(p -> p.figures().stream())
+            .anyMatch(c -> c.before().limit() != null || c.after().limit() != null)
+        || sheet.singles().stream()
+            .flatMap(s -> s.figures().stream())
+            .anyMatch(f -> f.stated().limit() != null);
   }
 
-  private SheetPage.Side side(VisitReading reading) {
-    Reading measured = reading.stored().reading();
-    return new SheetPage.Side(
-        times.day(reading.receivedAt()),
-        reading.fileName(),
-        measured.source().sha256().substring(0, SHORT_HASH),
-        measured.method().version(),
-        "/readings/" + reading.stored().id().value());
-  }
-
-  private static String kind(Wording words, VisitReading reading) {
-    return words.text(
-        "report.kind."
-            + reading.stored().reading().source().kind().name().toLowerCase(Locale.ROOT));
-  }
-
-  private static String change(Difference difference) {
-    return switch (difference.change()) {
-      case IMPROVED -> "improved";
-      case WORSE -> "worse";
-      case TOO_SMALL_TO_MATTER -> "small";
-      case NO_CHANGE_SHOWN -> "same";
-    };
-  }
-
-  private static String limit(Wording words, @Nullable Judged judged) {
-    return judged == null ? "" : words.limit(judged.limit().figure(), judged.limit().upperBound());
-  }
-
-  private static String origin(@Nullable Judged judged) {
-    return judged == null ? "" : judged.limit().origin();
-  }
-
-  private static @Nullable String verdict(@Nullable Judged judged) {
-    return judged == null ? null : judged.judgement().verdict().name().toLowerCase(Locale.ROOT);
+  private static Issue issue(Report report) {
+    return report.content().issue();
   }
 }

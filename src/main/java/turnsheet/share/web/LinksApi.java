@@ -16,7 +16,6 @@ import turnsheet.share.ShareDesk;
 import turnsheet.share.ShareLink;
 import turnsheet.share.ShareLinkId;
 import turnsheet.share.ShareLinks;
-import turnsheet.shop.VisitId;
 
 /** Share links for programs. */
 @RestController
@@ -37,6 +36,8 @@ class LinksApi {
    */
   record LinkDocument(
       UUID id,
+      long reportNumber,
+      boolean showsHistory,
       @Nullable String address,
       Instant createdAt,
       String createdBy,
@@ -48,6 +49,8 @@ class LinksApi {
     static LinkDocument of(ShareLink link, @Nullable String address) {
       return new LinkDocument(
           link.id().value(),
+          link.reportNumber(),
+          link.showsHistory(),
           address,
           link.createdAt(),
           link.createdBy(),
@@ -58,18 +61,18 @@ class LinksApi {
     }
   }
 
-  @GetMapping("/api/v1/visits/{id}/links")
-  List<LinkDocument> list(@PathVariable UUID id) {
-    return links.ofVisit(new VisitId(id)).stream()
-        .map(link -> LinkDocument.of(link, null))
-        .toList();
+  @GetMapping("/api/v1/reports/{number}/links")
+  List<LinkDocument> list(@PathVariable long number) {
+    return links.ofReport(number).stream().map(link -> LinkDocument.of(link, null)).toList();
   }
 
-  @PostMapping("/api/v1/visits/{id}/links")
+  @PostMapping("/api/v1/reports/{number}/links")
   @ResponseStatus(HttpStatus.CREATED)
   LinkDocument make(
-      @PathVariable UUID id, @RequestParam(defaultValue = "" + ShareLinks.USUAL_DAYS) int days) {
-    ShareDesk.Given given = desk.make(new VisitId(id), days);
+      @PathVariable long number,
+      @RequestParam(defaultValue = "false") boolean history,
+      @RequestParam(defaultValue = "" + ShareLinks.USUAL_DAYS) int days) {
+    ShareDesk.Given given = desk.make(number, history, days);
     return LinkDocument.of(given.link(), given.address());
   }
 

@@ -9,29 +9,30 @@ import org.springframework.web.bind.annotation.PathVariable;
 import org.springframework.web.bind.annotation.PostMapping;
 import org.springframework.web.bind.annotation.RequestParam;
 import org.springframework.web.servlet.mvc.support.RedirectAttributes;
+import turnsheet.report.Issue;
+import turnsheet.report.Report;
+import turnsheet.report.Reports;
 import turnsheet.share.ShareDesk;
 import turnsheet.share.ShareLink;
 import turnsheet.share.ShareLinkId;
 import turnsheet.share.ShareLinks;
-import turnsheet.shop.VisitId;
-import turnsheet.shop.VisitSummary;
-import turnsheet.shop.Visits;
 import turnsheet.web.NotFoundException;
+import turnsheet.web.QrDrawing;
 import turnsheet.web.Times;
 
-/** The links to the sheet of one visit: make one, see whether it is read, withdraw it. */
+/** The links to one report: make one, see whether it is read, withdraw it. */
 @Controller
 class LinksController {
 
   private final ShareDesk desk;
   private final ShareLinks links;
-  private final Visits visits;
+  private final Reports reports;
   private final Times times;
 
-  LinksController(ShareDesk desk, ShareLinks links, Visits visits, Times times) {
+  LinksController(ShareDesk desk, ShareLinks links, Reports reports, Times times) {
     this.desk = desk;
     this.links = links;
-    this.visits = visits;
+    this.reports = reports;
     this.times = times;
   }
 
@@ -43,37 +44,38 @@ class LinksController {
       String until,
       boolean open,
       boolean withdrawn,
+      boolean history,
       int views,
       String lastView) {}
 
-  @GetMapping("/visits/{id}/links")
-  String list(@PathVariable UUID id, Model model) {
-    VisitSummary visit = visit(id);
-    model.addAttribute("visitId", id);
-    model.addAttribute("unitName", visit.modelName() + " " + visit.serialNumber());
+  @GetMapping("/reports/{number}/links")
+  String list(@PathVariable long number, Model model) {
+    Report report = reports.find(number).orElseThrow(() -> new NotFoundException("report"));
+    model.addAttribute("number", number);
+    model.addAttribute("printedNumber", Issue.printed(number));
+    model.addAttribute("unitName", report.content().sheet().item().modelName());
     model.addAttribute("usualDays", ShareLinks.USUAL_DAYS);
     model.addAttribute("longestDays", ShareLinks.LONGEST_DAYS);
-    model.addAttribute("links", rows(links.ofVisit(new VisitId(id))));
+    model.addAttribute("links", rows(links.ofReport(number)));
     return "share/links";
   }
 
-  @PostMapping("/visits/{id}/links")
+  @PostMapping("/reports/{number}/links")
   String make(
-      @PathVariable UUID id,
+      @PathVariable long number,
       @RequestParam(defaultValue = "" + ShareLinks.USUAL_DAYS) int days,
+      @RequestParam(defaultValue = "false") boolean history,
       RedirectAttributes flash) {
-    flash.addFlashAttribute("address", desk.make(new VisitId(id), days).address());
-    return "redirect:/visits/" + id + "/links";
+    String address = desk.make(number, history, days).address();
+    flash.addFlashAttribute("address", address);
+    flash.addFlashAttribute("code", QrDrawing.of(address));
+    return "redirect:/reports/" + number + "/links";
   }
 
-  @PostMapping("/visits/{visit}/links/{id}/withdraw")
-  String withdraw(@PathVariable UUID visit, @PathVariable UUID id) {
+  @PostMapping("/reports/{number}/links/{id}/withdraw")
+  String withdraw(@PathVariable long number, @PathVariable UUID id) {
     desk.withdraw(new ShareLinkId(id));
-    return "redirect:/visits/" + visit + "/links";
-  }
-
-  private VisitSummary visit(UUID id) {
-    return visits.summary(new VisitId(id)).orElseThrow(() -> new NotFoundException("visit"));
+    return "redirect:/reports/" + number + "/links";
   }
 
   private List<Row> rows(List<ShareLink> all) {
@@ -87,6 +89,7 @@ class LinksController {
                     times.day(link.expiresAt()),
                     desk.isOpen(link),
                     link.withdrawnAt() != null,
+                    link.showsHistory(),
                     link.views(),
                     link.lastViewAt() == null ? "" : times.minute(link.lastViewAt())))
         .toList();

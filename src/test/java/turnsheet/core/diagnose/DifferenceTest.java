@@ -80,14 +80,16 @@ class DifferenceTest {
 
   /** A clock or a medium that both captures share moves both alike (JCGM 100, 5.2.2). */
   @Test
-  void whatBothSidesShareDoesNotCount() {
+  void ofWhatBothSidesShareATenthCounts() {
     Budget budget =
         Budget.empty().plus(Causes.CLOCK, 6).plus(Causes.MEDIUM, 12).plus("unsteadiness", 4);
     Figure figure = Figure.of(1, budget);
     assertThat(figure.expandedUncertainty()).isEqualTo(28); // 2 times the root of 36 + 144 + 16
     assertThat(uncertainty(figure)).isEqualTo(14);
-    assertThat(uncertainty(figure, Run.Common.MEDIUM)).isCloseTo(Math.sqrt(52), within(1e-12));
-    assertThat(uncertainty(figure, Run.Common.CLOCK, Run.Common.MEDIUM)).isEqualTo(4);
+    assertThat(uncertainty(figure, Run.Common.MEDIUM))
+        .isCloseTo(Math.sqrt(36 + 16 + 1.44), within(1e-12));
+    assertThat(uncertainty(figure, Run.Common.CLOCK, Run.Common.MEDIUM))
+        .isCloseTo(Math.sqrt(16 + 0.36 + 1.44), within(1e-12));
   }
 
   private static double uncertainty(Figure figure, Run.Common... common) {

@@ -1,0 +1,117 @@
+package turnsheet.share.web;
+
+import jakarta.servlet.http.HttpServletResponse;
+import java.util.Optional;
+import org.jspecify.annotations.Nullable;
+import org.springframework.http.HttpStatus;
+import org.springframework.http.MediaType;
+import org.springframework.http.ResponseEntity;
+import org.springframework.stereotype.Controller;
+import org.springframework.ui.Model;
+import org.springframework.web.bind.annotation.GetMapping;
+import org.springframework.web.bind.annotation.PathVariable;
+import turnsheet.report.Issue;
+import turnsheet.report.Report;
+import turnsheet.report.Reports;
+import turnsheet.report.web.SheetPrinting;
+import turnsheet.share.ShareDesk;
+import turnsheet.share.ShareLink;
+import turnsheet.share.ShareLinks;
+import turnsheet.web.Times;
+
+/**
+ * What a customer sees: one report, its PDF, and the revision that took its place if there is one;
+ * nothing else. An unknown, expired or withdrawn link looks the same, so that trying tokens tells
+ * nothing.
+ */
+@Controller
+class SharedReportController {
+
+  private final ShareLinks links;
+  private final Reports reports;
+  private final SheetPrinting printing;
+  private final Times times;
+
+  SharedReportController(ShareLinks links, Reports reports, SheetPrinting printing, Times times) {
+    this.links = links;
+    this.reports = reports;
+    this.printing = printing;
+    this.times = times;
+  }
+
+  @GetMapping(ShareDesk.PATH + "{token}")
+  String show(@PathVariable String token, Model model, HttpServletResponse response) {
+    ShareLink link = links.open(token).orElse(null);
+    return page(token, link, report(link), model, response);
+  }
+
+  /** The report that is current today, where the one that the link was made for was revised. */
+  @GetMapping(ShareDesk.PATH + "{token}/current")
+  String current(@PathVariable String token, Model model, HttpServletResponse response) {
+    ShareLink link = links.peek(token).orElse(null);
+    return page(token, link, report(link).map(this::newest), model, response);
+  }
+
+  @GetMapping(ShareDesk.PATH + "{token}/pdf")
+  ResponseEntity<byte[]> pdf(@PathVariable String token) {
+    return pdf(links.peek(token).map(ShareLink::reportNumber));
+  }
+
+  @GetMapping(ShareDesk.PATH + "{token}/current/pdf")
+  ResponseEntity<byte[]> currentPdf(@PathVariable String token) {
+    return pdf(report(links.peek(token).orElse(null)).map(this::newest).map(Report::number));
+  }
+
+  private String page(
+      String token,
+      @Nullable ShareLink link,
+      Optional<Report> found,
+      Model model,
+      HttpServletResponse response) {
+    response.setHeader("X-Robots-Tag", "noindex, nofollow");
+    response.setHeader("Referrer-Policy", "no-referrer");
+    response.setHeader("Cache-Control", "no-store");
+    Report report = found.orElse(null);
+    if (link == null || report == null) {
+      response.setStatus(HttpStatus.NOT_FOUND.value());
+      return "share/gone";
+    }
+    String here = ShareDesk.PATH + token;
+    model.addAttribute("article", printing.article(report));
+    model.addAttribute("language", report.content().issue().language());
+    model.addAttribute("title", report.content().issue().printedNumber());
+    model.addAttribute("shopName", report.content().sheet().shop().name());
+    model.addAttribute("until", times.day(link.expiresAt()));
+    model.addAttribute(
+        "pdf", report.number() == link.reportNumber() ? here + "/pdf" : here + "/current/pdf");
+    model.addAttribute("current", here + "/current");
+    model.addAttribute(
+        "replacedBy", report.replacedBy() == null ? "" : Issue.printed(report.replacedBy()));
+    return "share/report";
+  }
+
+  private ResponseEntity<byte[]> pdf(Optional<Long> number) {
+    return number
+        .flatMap(reports::pdf)
+        .map(
+            pdf ->
+                ResponseEntity.ok()
+                    .contentType(MediaType.APPLICATION_PDF)
+                    .header("X-Robots-Tag", "noindex, nofollow")
+                    .header("Cache-Control", "no-store")
+                    .body(pdf))
+        .orElse(ResponseEntity.notFound().build());
+  }
+
+  private Optional<Report> report(@Nullable ShareLink link) {
+    return link == null ? Optional.empty() : reports.find(link.reportNumber());
+  }
+
+  private Report newest(Report report) {
+    Report newest = report;
+    while (newest.replacedBy() != null) {
+      newest = reports.find(newest.replacedBy()).orElseThrow();
+    }
+    return newest;
+  }
+}

@@ -1,0 +1,295 @@
+package turnsheet.report.web;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.springframework.security.test.web.servlet.request.SecurityMockMvcRequestPostProcessors.csrf;
+import static org.springframework.test.web.servlet.request.MockMvcRequestBuilders.get;
+import static org.springframework.test.web.servlet.request.MockMvcRequestBuilders.post;
+import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.header;
+import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.status;
+
+import java.time.Clock;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Objects;
+import org.apache.pdfbox.Loader;
+import org.apache.pdfbox.pdmodel.PDDocument;
+import org.apache.pdfbox.pdmodel.PDPage;
+import org.apache.pdfbox.pdmodel.font.PDFont;
+import org.apache.pdfbox.text.PDFTextStripper;
+import org.junit.jupiter.api.BeforeEach;
+import org.junit.jupiter.api.Test;
+import org.springframework.beans.factory.annotation.Autowired;
+import org.springframework.jdbc.core.simple.JdbcClient;
+import org.springframework.test.web.servlet.MockMvc;
+import org.springframework.transaction.support.TransactionTemplate;
+import turnsheet.access.ShopProfiles;
+import turnsheet.reading.Readings;
+import turnsheet.reading.SampleBench;
+import turnsheet.reading.SampleReadings;
+import turnsheet.report.Report;
+import turnsheet.report.Reports;
+import turnsheet.testing.AsOwner;
+import turnsheet.testing.AsTechnician;
+import turnsheet.testing.ServiceTest;
+
+@ServiceTest
+@AsOwner
+class ReportPagesTest {
+
+  @Autowired MockMvc mvc;
+  @Autowired JdbcClient jdbc;
+  @Autowired TransactionTemplate transactions;
+  @Autowired Clock clock;
+  @Autowired Readings readings;
+  @Autowired Reports reports;
+  @Autowired ShopProfiles profiles;
+
+  private SampleBench bench;
+  private String visit = "";
+
+  @BeforeEach
+  void measureBothConditions() {
+    bench = new SampleBench(jdbc, transactions, clock);
+    readings.add(
+        bench.capture("as received", "measured"),
+        SampleReadings.tone(0.37),
+        SampleReadings.series());
+    readings.add(
+        bench.capture("after repair", "measured"),
+        SampleReadings.tone(0.02),
+        SampleReadings.series());
+    visit = "/visits/" + bench.visit.id();
+  }
+
+  @Test
+  void anIssuedReportSaysWhatTheSheetSaidWithNumberAndCode() throws Exception {
+    long number = issue("en");
+    String page = text(page("/reports/" + number));
+    Report report = reports.find(number).orElseThrow();
+
+    assertThat(page)
+        .contains("Report %05d".formatted(number))
+        .contains("(+0.3700 ± 0.0060) %")
+        .contains("(+0.0200 ± 0.0060) %")
+        .contains("service manual")
+        .contains("serial number 0042")
+        .contains("voices waver")
+        .contains("230 V, warmed up")
+        .contains("mains voltage")
+        .contains("conforms with more than 99 %")
+        .contains("guard band")
+        .contains("Inside the machine")
+        .contains("End of report %05d".formatted(number))
+        .contains(report.checkCode())
+        .doesNotContain("??");
+    mvc.perform(get("/api/v1/reports/" + number))
+        .andExpect(status().isOk())
+        .andExpect(header().string("ETag", "\"" + report.contentSha256() + "\""));
+  }
+
+  @Test
+  void nothingThatChangesLaterChangesAnIssuedReport() throws Exception {
+    long number = issue("en");
+    String page = article(page("/reports/" + number));
+    String json = reports.find(number).orElseThrow().contentJson();
+    byte[] pdf = pdf(number);
+
+    ShopProfiles.ShopProfile letterhead =
+        profiles.get().orElse(new ShopProfiles.ShopProfile("", ""));
+    profiles.put(new ShopProfiles.ShopProfile("Another name", "Another street"));
+    jdbc.sql("update service_limit set upper_bound = 0.001, origin = 'other'").update();
+    jdbc.sql("update unit set serial_number = ? where id = ?")
+        .params("changed " + number, bench.unit.id().value())
+        .update();
+    jdbc.sql("update visit set complaint = 'other' where id = ?")
+        .param(bench.visit.id().value())
+        .update();
+    jdbc.sql("update reading set method_version = 'later'").update();
+
+    assertThat(article(page("/reports/" + number))).isEqualTo(page);
+    assertThat(reports.find(number).orElseThrow().contentJson()).isEqualTo(json);
+    assertThat(pdf(number)).isEqualTo(pdf);
+    profiles.put(letterhead);
+  }
+
+  @Test
+  void thePdfReadsBackWithEmbeddedFontsTagsAndThePrintedFigures() throws Exception {
+    long number = issue("en");
+    try (PDDocument document = Loader.loadPDF(pdf(number))) {
+      String text = new PDFTextStripper().getText(document).replace('\u202f', ' ');
+      assertThat(text)
+          .contains("Report %05d".formatted(number))
+          .contains("(+0.3700 ± 0.0060) %")
+          .contains("(−0.3500 ± 0.0085) %")
+          .contains("(0.0670 ± 0.0020) %")
+          .contains("capstan shaft")
+          .contains("End of report %05d".formatted(number))
+          .containsPattern("Page 1 / " + document.getNumberOfPages());
+      assertThat(fonts(document)).isNotEmpty().allMatch(PDFont::isEmbedded);
+      assertThat(document.getDocumentCatalog().getStructureTreeRoot()).isNotNull();
+      assertThat(Objects.requireNonNull(document.getDocumentCatalog().getMarkInfo()).isMarked())
+          .isTrue();
+      assertThat(document.getDocumentCatalog().getLanguage()).isEqualTo("en");
+      String metadata =
+          new String(
+              document.getDocumentCatalog().getMetadata().toByteArray(),
+              java.nio.charset.StandardCharsets.UTF_8);
+      assertThat(metadata).contains("pdfaid").contains("pdfuaid");
+    }
+  }
+
+  @Test
+  void aGermanReportSpeaksGermanThroughout() throws Exception {
+    long number = issue("de");
+    String page = text(article(page("/reports/" + number)));
+    assertThat(page)
+        .contains("Bericht %05d".formatted(number))
+        .contains("(+0,3700 ± 0,0060) %")
+        .contains("Bewertete Gleichlaufschwankung, Zwei-Sigma-Wert")
+        .contains("innerhalb")
+        .contains("Entscheidungsregel")
+        .containsPattern("Ausgegeben \\d\\d\\.\\d\\d\\.\\d{4}")
+        .contains("Ende des Berichts")
+        .doesNotContain("??")
+        .doesNotContainPattern("\\d\\.\\d+ %")
+        .doesNotContain("report")
+        .doesNotContain("Limit");
+    try (PDDocument document = Loader.loadPDF(pdf(number))) {
+      assertThat(document.getDocumentCatalog().getLanguage()).isEqualTo("de");
+      assertThat(new PDFTextStripper().getText(document)).contains("Seite 1 / ");
+    }
+  }
+
+  @Test
+  void aRevisionHasItsOwnNumberItsReasonAndPointsBothWays() throws Exception {
+    long first = issue("en");
+    mvc.perform(
+            post("/reports/" + first + "/revise")
+                .with(csrf())
+                .param("language", "en")
+                .param("measuredBy", "A. Person")
+                .param("releasedBy", "B. Person")
+                .param("conditions", "")
+                .param("remarks", "")
+                .param("reason", "wrong serial number"))
+        .andExpect(status().is3xxRedirection());
+    long second = reports.ofVisit(bench.visit.id()).get(0).number();
+
+    assertThat(second).isGreaterThan(first);
+    assertThat(text(page("/reports/" + second)))
+        .contains("Takes the place of")
+        .contains("%05d: wrong serial number".formatted(first));
+    assertThat(text(page("/reports/" + first)))
+        .contains("Superseded: report %05d".formatted(second));
+    // what was replaced is not revised again, and a visit with a report gets no second first one
+    mvc.perform(
+            post("/reports/" + first + "/revise")
+                .with(csrf())
+                .param("language", "en")
+                .param("measuredBy", "A")
+                .param("releasedBy", "B")
+                .param("conditions", "")
+                .param("remarks", "")
+                .param("reason", "again"))
+        .andExpect(status().is(422));
+    mvc.perform(wish(post(visit + "/report"), "en")).andExpect(status().is(422));
+  }
+
+  @Test
+  void aCodeTellsWhetherTheReportIsCurrentAndNoFigure() throws Exception {
+    long number = issue("en");
+    String code = reports.find(number).orElseThrow().checkCode();
+
+    assertThat(
+            text(page("/check?code=" + code.replace("-", "").toUpperCase(java.util.Locale.ROOT))))
+        .contains("Report %05d".formatted(number))
+        .contains("is current")
+        .doesNotContain("0.3700")
+        .doesNotContain("A. Customer");
+    assertThat(text(page("/check?code=00000-00000-00000-00000")))
+        .contains("No report with this code");
+
+    jdbc.sql("update report set content = ? where number = ?")
+        .params(
+            reports
+                .find(number)
+                .orElseThrow()
+                .contentJson()
+                .replace("0042", "0043")
+                .getBytes(java.nio.charset.StandardCharsets.UTF_8),
+            number)
+        .update();
+    assertThat(text(page("/check?code=" + code))).contains("no longer matches");
+  }
+
+  @Test
+  @AsTechnician
+  void aTechnicianIssuesNothing() throws Exception {
+    mvc.perform(wish(post(visit + "/report"), "en")).andExpect(status().isForbidden());
+  }
+
+  @Test
+  void whatWasLeftOutIsAskedForAgain() throws Exception {
+    mvc.perform(
+            post(visit + "/report")
+                .with(csrf())
+                .param("language", "en")
+                .param("measuredBy", " ")
+                .param("releasedBy", "B")
+                .param("conditions", "")
+                .param("remarks", ""))
+        .andExpect(status().isOk());
+    assertThat(reports.ofVisit(bench.visit.id())).isEmpty();
+  }
+
+  private long issue(String language) throws Exception {
+    mvc.perform(wish(post(visit + "/report"), language)).andExpect(status().is3xxRedirection());
+    return reports.ofVisit(bench.visit.id()).get(0).number();
+  }
+
+  private static org.springframework.test.web.servlet.request.MockHttpServletRequestBuilder wish(
+      org.springframework.test.web.servlet.request.MockHttpServletRequestBuilder request,
+      String language) {
+    return request
+        .with(csrf())
+        .param("language", language)
+        .param("measuredBy", "A. Person")
+        .param("releasedBy", "B. Person")
+        .param("conditions", "230 V, warmed up")
+        .param("remarks", "");
+  }
+
+  private byte[] pdf(long number) throws Exception {
+    return mvc.perform(get("/reports/" + number + "/pdf"))
+        .andExpect(status().isOk())
+        .andReturn()
+        .getResponse()
+        .getContentAsByteArray();
+  }
+
+  private String page(String address) throws Exception {
+    return mvc.perform(get(address))
+        .andExpect(status().isOk())
+        .andReturn()
+        .getResponse()
+        .getContentAsString();
+  }
+
+  private static String article(String page) {
+    return page.substring(page.indexOf("<article"), page.indexOf("</article>"));
+  }
+
+  private static String text(String page) {
+    return page.replaceAll("<[^>]+>", "").replace('\u202f', ' ').replaceAll("\\s+", " ");
+  }
+
+  private static List<PDFont> fonts(PDDocument document) throws Exception {
+    List<PDFont> fonts = new ArrayList<>();
+    for (PDPage page : document.getPages()) {
+      for (var name : page.getResources().getFontNames()) {
+        fonts.add(page.getResources().getFont(name));
+      }
+    }
+    return fonts;
+  }
+}
