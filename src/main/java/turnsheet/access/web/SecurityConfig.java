@@ -85,7 +85,7 @@ class SecurityConfig {
                     .permitAll()
                     .requestMatchers(OPEN_TO_ALL)
                     .permitAll()
-                    .requestMatchers("/shop/people/**", "/shop/profile")
+                    .requestMatchers("/shop/people/**", "/shop/profile", "/shop/rules")
                     .hasRole(Role.OWNER.name())
                     .anyRequest()
                     .authenticated())
