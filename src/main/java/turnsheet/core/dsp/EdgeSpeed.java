@@ -28,7 +28,7 @@ public final class EdgeSpeed {
   /** The latest edges twice in a row, so that they always lie somewhere in one piece. */
   private final double[] ring;
 
-  private final double[] places;
+  private final double[] evenSums;
   private final int width;
   private final Output output;
   private int oldest;
@@ -59,10 +59,7 @@ public final class EdgeSpeed {
     this.taps = derivatives(pass + stop, half, Math.max(16, FINENESS / decimation));
     this.width = 2 * half + 2;
     this.ring = new double[2 * width];
-    this.places = new double[width];
-    for (int i = 0; i < width; i++) {
-      places[i] = i - half;
-    }
+    this.evenSums = evenSums(taps, half);
     this.output = output;
   }
 
@@ -114,18 +111,44 @@ public final class EdgeSpeed {
 
   /** Seconds per edge at a share of the way between the two middle edges. */
   private double slope(double share) {
-    float[] weights = taps[(int) Math.round(share * (taps.length - 1))];
+    int phase = (int) Math.round(share * (taps.length - 1));
+    float[] weights = taps[phase];
     double origin = ring[oldest + half];
     double even = (ring[oldest + width - 1] - ring[oldest]) / (width - 1);
-    double sum = 0;
-    double other = 0;
-    for (int i = 0; i < width; i += 2) {
-      // only the departure from an even train is filtered: rounding of the weights then costs
-      // nothing
-      sum += weights[i] * (ring[oldest + i] - origin - places[i] * even);
-      other += weights[i + 1] * (ring[oldest + i + 1] - origin - places[i + 1] * even);
+    // what the weights make of an even train is taken off: their rounding then costs nothing
+    return even + (weighed(weights, ring, oldest, origin) - evenSums[phase] * even);
+  }
+
+  /**
+   * Weighted sum of times after an origin; four sums, as each addition waits for the one before.
+   */
+  private static double weighed(float[] weights, double[] times, int from, double origin) {
+    double a = 0;
+    double b = 0;
+    double c = 0;
+    double d = 0;
+    int i = 0;
+    for (; i + 3 < weights.length; i += 4) {
+      a += weights[i] * (times[from + i] - origin);
+      b += weights[i + 1] * (times[from + i + 1] - origin);
+      c += weights[i + 2] * (times[from + i + 2] - origin);
+      d += weights[i + 3] * (times[from + i + 3] - origin);
     }
-    return even + (sum + other);
+    for (; i < weights.length; i++) {
+      a += weights[i] * (times[from + i] - origin);
+    }
+    return (a + b) + (c + d);
+  }
+
+  /** For every phase the weighted sum of an even train one second apart. */
+  private static double[] evenSums(float[][] taps, int half) {
+    double[] sums = new double[taps.length];
+    for (int p = 0; p < sums.length; p++) {
+      for (int i = 0; i < taps[p].length; i++) {
+        sums[p] += taps[p][i] * (double) (i - half);
+      }
+    }
+    return sums;
   }
 
   /** For every phase the derivative of the windowed sinc at the distance of each edge. */

@@ -26,23 +26,36 @@ public final class NoiseProbe {
     this.band = band;
   }
 
-  /** Takes one baseband value. */
-  public void add(double re, double im) {
+  /**
+   * Takes baseband values.
+   *
+   * @param gone where the tone failed; the values since the last whole segment are then left out
+   */
+  public void add(double[] re, double[] im, boolean[] gone, int count) {
+    for (int i = 0; i < count; i++) {
+      if (gone[i]) {
+        filled = 0;
+      } else {
+        add(re[i], im[i]);
+      }
+    }
+  }
+
+  private void add(double re, double im) {
     work[2 * filled] = re * window[filled];
     work[2 * filled + 1] = im * window[filled];
     if (++filled == LENGTH) {
-      fft.complex(work);
-      for (int k = 0; k < LENGTH; k++) {
-        power[k] += work[2 * k] * work[2 * k] + work[2 * k + 1] * work[2 * k + 1];
-      }
-      segments++;
+      segment();
       filled = 0;
     }
   }
 
-  /** Leaves out the values since the last whole segment, as when the tone failed among them. */
-  public void drop() {
-    filled = 0;
+  private void segment() {
+    fft.complex(work);
+    for (int k = 0; k < LENGTH; k++) {
+      power[k] += work[2 * k] * work[2 * k] + work[2 * k + 1] * work[2 * k + 1];
+    }
+    segments++;
   }
 
   /** Whether anything was seen yet. */

@@ -24,7 +24,6 @@ public final class ToneDemodulator {
   private final double[][] mid;
   private final double[] re;
   private final double[] im;
-  private int count;
 
   public ToneDemodulator(ToneBand band) {
     double[] shape =
@@ -79,6 +78,13 @@ public final class ToneDemodulator {
     int n = first.process(in, samples, mid);
     double[] midRe = mid[0];
     double[] midIm = mid[1];
+    turn(midRe, midIm, n);
+    int count = secondRe.process(midRe, n, re);
+    secondIm.process(midIm, n, im);
+    return count;
+  }
+
+  private void turn(double[] midRe, double[] midIm, int n) {
     for (int i = 0; i < n; i++) {
       rotation.advance();
       double c = rotation.cosine();
@@ -87,19 +93,16 @@ public final class ToneDemodulator {
       midRe[i] = x * c + midIm[i] * s;
       midIm[i] = midIm[i] * c - x * s;
     }
-    count = secondRe.process(midRe, n, re);
-    secondIm.process(midIm, n, im);
-    return count;
   }
 
-  /** Real part of the latest values; valid up to the next {@link #process}. */
-  public double re(int index) {
-    return re[index];
+  /** Real parts of the latest values; valid up to the next {@link #process}. */
+  public double[] re() {
+    return re;
   }
 
-  /** Imaginary part of the latest values; valid up to the next {@link #process}. */
-  public double im(int index) {
-    return im[index];
+  /** Imaginary parts of the latest values; valid up to the next {@link #process}. */
+  public double[] im() {
+    return im;
   }
 
   private static double fraction(double turns) {

@@ -1,6 +1,5 @@
 package turnsheet.core.measure;
 
-import java.util.Arrays;
 import turnsheet.core.dsp.Rotation;
 
 /**
@@ -111,12 +110,20 @@ final class Residual {
         for (int at = from; at < from + length; at += BLOCK) {
           int part = Math.min(BLOCK, from + length - at);
           copy(at, buffer, part);
-          block += Arrays.stream(buffer, 0, part).sum();
+          block += sum(buffer, part);
         }
         sum += block / length * (block / length);
         blocks++;
       }
     }
     return blocks < 2 ? Double.NaN : Math.sqrt(sum / (blocks - 1));
+  }
+
+  private static double sum(double[] values, int count) {
+    double sum = 0;
+    for (int i = 0; i < count; i++) {
+      sum += values[i];
+    }
+    return sum;
   }
 }

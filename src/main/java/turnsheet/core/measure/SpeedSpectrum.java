@@ -58,7 +58,7 @@ final class SpeedSpectrum {
     int thinned = taps.length == 0 ? 1 : 2;
     Fft fft = new Fft(fftLength / thinned);
     double[] shape = window.values(segment);
-    double scale = 2 * thinned / (segment * window.coherentGain());
+    scale(shape, 2 * thinned / (segment * window.coherentGain()));
     double[] samples = new double[segment + taps.length];
     double[] work = new double[fft.length()];
     double[] power =
@@ -66,20 +66,32 @@ final class SpeedSpectrum {
     List<Integer> starts = starts(residual.clean(), segment);
     for (int start : starts) {
       residual.copy(start, samples, segment);
-      for (int i = 0; i < segment; i++) {
-        samples[i] *= shape[i] * scale;
-      }
+      weigh(samples, shape, segment);
       int count = thin(samples, segment, taps, work);
       Arrays.fill(work, count, work.length, 0);
       fft.real(work);
-      for (int k = 1; k < power.length; k++) {
-        power[k] += work[2 * k] * work[2 * k] + work[2 * k + 1] * work[2 * k + 1];
-      }
+      addPowers(work, power);
     }
-    for (int k = 0; k < power.length; k++) {
-      power[k] /= starts.size();
-    }
+    scale(power, 1.0 / starts.size());
     return new SpeedSpectrum(window, rate, segment, fftLength, starts.size(), power);
+  }
+
+  private static void weigh(double[] samples, double[] shape, int count) {
+    for (int i = 0; i < count; i++) {
+      samples[i] *= shape[i];
+    }
+  }
+
+  private static void scale(double[] values, double factor) {
+    for (int i = 0; i < values.length; i++) {
+      values[i] *= factor;
+    }
+  }
+
+  private static void addPowers(double[] work, double[] power) {
+    for (int k = 1; k < power.length; k++) {
+      power[k] += work[2 * k] * work[2 * k] + work[2 * k + 1] * work[2 * k + 1];
+    }
   }
 
   /**

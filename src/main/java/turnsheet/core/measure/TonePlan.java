@@ -4,9 +4,7 @@ import java.io.IOException;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
-import turnsheet.core.dsp.Angle;
 import turnsheet.core.dsp.NoiseProbe;
-import turnsheet.core.dsp.SpeedSmoother;
 import turnsheet.core.dsp.ToneBand;
 import turnsheet.core.dsp.ToneDemodulator;
 import turnsheet.core.format.api.Recognised;
@@ -121,55 +119,21 @@ final class TonePlan {
       throws IOException, RejectedException {
     double rate = realRate(reader);
     ToneBand band = ToneBand.of(tone.hertz(), rate);
-    ToneDemodulator demodulator = new ToneDemodulator(band);
-    SpeedSmoother smoother = new SpeedSmoother(band);
-    NoiseProbe noise = new NoiseProbe(band);
-    ToneLevel level =
-        new ToneLevel(band.phaseRateHertz(), demodulator.delaySeconds(), tone.amplitude());
+    ToneTrack track = new ToneTrack(band, tone, settings.nominalHz());
     ClipCounter clips = ClipCounter.ofSine(rate / tone.hertz());
-    SpeedTrace.Builder trace = new SpeedTrace.Builder();
     double[] block = new double[ToneDemodulator.blockSamples()];
-    double[] steps = new double[block.length];
-    double[] hertz = new double[smoother.roomFor(steps.length)];
-    double lastRe = 0;
-    double lastIm = 0;
     long samples = 0;
-    long values = 0;
     int n;
     while ((n = reader.read(block)) > 0) {
       samples += n;
       clips.add(block, n);
-      int count = demodulator.process(block, n);
-      int ready = 0;
-      for (int i = 0; i < count; i++) {
-        double re = demodulator.re(i);
-        double im = demodulator.im(i);
-        double step = Angle.of(im * lastRe - re * lastIm, re * lastRe + im * lastIm);
-        lastRe = re;
-        lastIm = im;
-        double mended = level.next(step, Math.sqrt(re * re + im * im));
-        if (level.gone()) {
-          noise.drop();
-        } else {
-          noise.add(re, im);
-        }
-        // the first value made no step, and the mended ones come late
-        if (++values > 1 + level.delay()) {
-          steps[ready++] = mended;
-        }
-      }
-      int made = smoother.process(steps, ready, hertz);
-      for (int i = 0; i < made; i++) {
-        trace.add(100 * ((tone.hertz() + hertz[i]) / settings.nominalHz() - 1));
-      }
+      track.add(block, n);
     }
-    level.finish();
-    if (trace.length() < TraceFigures.SHORTEST_SECONDS * band.traceRateHertz()) {
+    SpeedTrace speed = track.finish();
+    if (speed.length() < TraceFigures.SHORTEST_SECONDS * band.traceRateHertz()) {
       throw tooShort(samples / rate);
     }
-    double start = demodulator.delaySeconds() + smoother.delaySeconds();
-    SpeedTrace speed = trace.build(start, band.traceRateHertz());
-    return result(reader, tone, band, speed, samples / rate, level, noise, clips.clipped());
+    return result(reader, tone, band, speed, samples / rate, track, clips.clipped());
   }
 
   private Result result(
@@ -178,10 +142,11 @@ final class TonePlan {
       ToneBand band,
       SpeedTrace speed,
       double seconds,
-      ToneLevel level,
-      NoiseProbe noise,
+      ToneTrack track,
       long clipped)
       throws RejectedException {
+    ToneLevel level = track.level();
+    NoiseProbe noise = track.noise();
     List<Stretch> ends = RunUp.of(speed, level.dropouts());
     List<Stretch> excluded = new ArrayList<>(ends);
     List<Reading.Dropout> dropouts = new ArrayList<>();

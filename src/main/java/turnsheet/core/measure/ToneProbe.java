@@ -66,10 +66,13 @@ final class ToneProbe {
 
   /** Takes samples. */
   void add(double[] samples, int count) {
-    for (int i = 0; i < count; i++) {
-      work[filled++] = samples[i];
-      smallest = Math.min(smallest, samples[i]);
-      highest = Math.max(highest, samples[i]);
+    seeRange(samples, count);
+    int taken = 0;
+    while (taken < count) {
+      int part = Math.min(count - taken, work.length - filled);
+      System.arraycopy(samples, taken, work, filled, part);
+      taken += part;
+      filled += part;
       if (filled == work.length) {
         judge();
         filled = 0;
@@ -77,23 +80,22 @@ final class ToneProbe {
     }
   }
 
+  private void seeRange(double[] samples, int count) {
+    double low = smallest;
+    double high = highest;
+    for (int i = 0; i < count; i++) {
+      low = Math.min(low, samples[i]);
+      high = Math.max(high, samples[i]);
+    }
+    smallest = low;
+    highest = high;
+  }
+
   private void judge() {
-    double mean = 0;
-    for (double x : work) {
-      mean += x / work.length;
-    }
     double scale = 2 / (work.length * Window.BLACKMAN_HARRIS.coherentGain());
-    for (int i = 0; i < work.length; i++) {
-      work[i] = (work[i] - mean) * window[i] * scale;
-    }
+    shape(sum() / work.length, scale);
     fft.real(work);
-    double all = 0;
-    for (int k = 1; k < power.length; k++) {
-      power[k] = work[2 * k] * work[2 * k] + work[2 * k + 1] * work[2 * k + 1];
-      average[k] += power[k];
-      all += power[k];
-    }
-    all /= 2 * Window.BLACKMAN_HARRIS.noiseBandwidthBins();
+    double all = powers() / (2 * Window.BLACKMAN_HARRIS.noiseBandwidthBins());
     largest = Math.max(largest, all);
     double reach = settings.searchPercent() / 100;
     double nominal = settings.nominalHz();
@@ -101,14 +103,36 @@ final class ToneProbe {
     other.add(strongest(LOWEST_HERTZ, 0.48 * rate, reach, all));
   }
 
+  private double sum() {
+    double sum = 0;
+    for (double x : work) {
+      sum += x;
+    }
+    return sum;
+  }
+
+  private void shape(double mean, double scale) {
+    for (int i = 0; i < work.length; i++) {
+      work[i] = (work[i] - mean) * window[i] * scale;
+    }
+  }
+
+  private double powers() {
+    double all = 0;
+    for (int k = 1; k < power.length; k++) {
+      double p = work[2 * k] * work[2 * k] + work[2 * k + 1] * work[2 * k + 1];
+      power[k] = p;
+      average[k] += p;
+      all += p;
+    }
+    return all;
+  }
+
   private Segment strongest(double fromHertz, double toHertz, double reach, double all) {
     double step = rate / work.length;
     int from = Math.max(2, (int) Math.ceil(fromHertz / step));
     int to = Math.min(power.length - 2, (int) Math.floor(toHertz / step));
-    int best = from;
-    for (int k = from; k <= to; k++) {
-      best = power[k] > power[best] ? k : best;
-    }
+    int best = highest(from, to);
     if (to < from || power[best] == 0) {
       return new Segment(0, 0, all, false);
     }
@@ -124,6 +148,14 @@ final class ToneProbe {
     boolean tone = near / (2 * half + 1) > TONE_OVER_NOISE * density;
     double bins = 2 * Window.BLACKMAN_HARRIS.noiseBandwidthBins();
     return new Segment((best + shift) * step, near / bins, all, tone);
+  }
+
+  private int highest(int from, int to) {
+    int best = from;
+    for (int k = from; k <= to; k++) {
+      best = power[k] > power[best] ? k : best;
+    }
+    return best;
   }
 
   private double sum(int from, int to) {

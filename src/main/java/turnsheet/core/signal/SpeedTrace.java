@@ -65,8 +65,18 @@ public final class SpeedTrace {
    * @param into receives {@code count} samples from index 0
    */
   public void copyTo(int from, double[] into, int count) {
+    int done = 0;
+    while (done < count) {
+      int at = (from + done) % BLOCK;
+      int part = Math.min(count - done, BLOCK - at);
+      widen(blocks[(from + done) / BLOCK], at, into, done, part);
+      done += part;
+    }
+  }
+
+  private static void widen(float[] in, int at, double[] out, int to, int count) {
     for (int i = 0; i < count; i++) {
-      into[i] = percent(from + i);
+      out[to + i] = in[at + i];
     }
   }
 

@@ -98,9 +98,8 @@ public final class EdgeRepair {
 
   private void accept() {
     double distance = candidate - last;
-    double periods = distance / expected;
-    if (periods >= GAP) {
-      long lost = Math.round(periods) - 1;
+    if (distance >= GAP * expected) {
+      long lost = Math.max(1, Math.round(distance / expected) - 1);
       missing += lost;
       gaps.gap(last, candidate, lost);
       for (long i = 1; i <= lost; i++) {
@@ -109,7 +108,7 @@ public final class EdgeRepair {
     } else {
       replace(recent[next], distance);
       recent[next] = distance;
-      next = (next + 1) % RECENT;
+      next = next + 1 == RECENT ? 0 : next + 1;
       expected = sorted[RECENT / 2];
     }
     sink.edge(candidate, true);

@@ -22,11 +22,23 @@ public final class PeriodStatistics implements EdgeSink {
   private static final double JUMP = 0.15;
 
   private final double medianSeconds;
-  private final double nearShare;
+  private final double nearSeconds;
+  private final double jumpSeconds;
   private final Moments periods = new Moments();
-  private final Moments steps = new Moments();
-  private final Moments fourth = new Moments();
-  private final double[] times = new double[5];
+
+  /** Sums of squares, and of how many: about zero, so that nothing can cancel. */
+  private double stepSquares;
+
+  private long steps;
+  private double fourthSquares;
+  private long fourths;
+
+  /** The edges before the latest, the newest first. */
+  private double before1;
+
+  private double before2;
+  private double before3;
+  private double before4;
   private int run;
   private long outside;
   private long jumps;
@@ -41,7 +53,8 @@ public final class PeriodStatistics implements EdgeSink {
    */
   public PeriodStatistics(double medianSeconds, double nearShare) {
     this.medianSeconds = medianSeconds;
-    this.nearShare = nearShare;
+    this.nearSeconds = nearShare * medianSeconds;
+    this.jumpSeconds = JUMP * medianSeconds;
   }
 
   @Override
@@ -57,26 +70,31 @@ public final class PeriodStatistics implements EdgeSink {
       return;
     }
     edges++;
-    System.arraycopy(times, 1, times, 0, 4);
-    times[4] = seconds;
     run++;
     if (run >= 2) {
-      double period = times[4] - times[3];
+      double period = seconds - before1;
       periods.add(period);
-      if (Math.abs(period / medianSeconds - 1) > nearShare) {
+      if (Math.abs(period - medianSeconds) > nearSeconds) {
         outside++;
       }
     }
     if (run >= 3) {
-      double step = times[4] - 2 * times[3] + times[2];
-      steps.add(step);
-      if (Math.abs(step) > JUMP * medianSeconds) {
+      double step = seconds - 2 * before1 + before2;
+      stepSquares += step * step;
+      steps++;
+      if (Math.abs(step) > jumpSeconds) {
         jumps++;
       }
     }
     if (run >= 5) {
-      fourth.add(times[0] - 4 * times[1] + 6 * times[2] - 4 * times[3] + times[4]);
+      double fourth = before4 - 4 * before3 + 6 * before2 - 4 * before1 + seconds;
+      fourthSquares += fourth * fourth;
+      fourths++;
     }
+    before4 = before3;
+    before3 = before2;
+    before2 = before1;
+    before1 = seconds;
   }
 
   /** Real edges. */
@@ -101,17 +119,17 @@ public final class PeriodStatistics implements EdgeSink {
 
   /** Root mean square of the difference of successive periods, in seconds; NaN without any. */
   public double cycleToCycleSeconds() {
-    return steps.count() < 1 ? Double.NaN : steps.rootMeanSquare();
+    return steps < 1 ? Double.NaN : Math.sqrt(stepSquares / steps);
   }
 
   /** Standard deviation of one edge about its even place, in seconds; NaN where too few. */
   public double edgeNoiseSeconds() {
-    return fourth.count() < 2 ? Double.NaN : fourth.rootMeanSquare() / FOURTH_DIFFERENCE_GAIN;
+    return fourths < 2 ? Double.NaN : Math.sqrt(fourthSquares / fourths) / FOURTH_DIFFERENCE_GAIN;
   }
 
   /** Relative standard uncertainty of that, for Gaussian noise. */
   public double edgeNoiseRelativeUncertainty() {
-    return Math.sqrt(FOURTH_DIFFERENCE_SPREAD / (2.0 * fourth.count()));
+    return Math.sqrt(FOURTH_DIFFERENCE_SPREAD / (2.0 * fourths));
   }
 
   /** Share of the periods that lie far from the typical one. */
@@ -121,10 +139,10 @@ public final class PeriodStatistics implements EdgeSink {
 
   /** Share of the periods that differ from the one before by more than 15 % of the typical one. */
   public double shareOfJumps() {
-    return (double) jumps / Math.max(1, steps.count());
+    return (double) jumps / Math.max(1, steps);
   }
 
   public long steps() {
-    return steps.count();
+    return steps;
   }
 }

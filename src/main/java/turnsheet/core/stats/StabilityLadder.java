@@ -17,14 +17,22 @@ public final class StabilityLadder implements EdgeSink {
   private static final int LEVELS = 40;
   private static final int FEWEST_TERMS = 8;
 
-  private final List<Level> levels = new ArrayList<>();
+  /** Levels up to {@link #STARTS} steps, which take every edge. */
+  private static final int NEAR = 5;
+
+  /** Times that they look back on, and room to the next power of two. */
+  private static final int KEPT = 64;
+
+  private final double[] kept = new double[KEPT];
+  private final double[] nearSums = new double[NEAR];
+  private final Level[] levels = new Level[LEVELS];
   private long index;
   private double first;
   private double last;
 
   public StabilityLadder() {
     for (int i = 0; i < LEVELS; i++) {
-      levels.add(new Level(1L << i));
+      levels[i] = new Level(1L << i);
     }
   }
 
@@ -34,14 +42,36 @@ public final class StabilityLadder implements EdgeSink {
       first = seconds;
     }
     last = seconds;
-    for (Level level : levels) {
+    double time = seconds - first;
+    near(time);
+    for (int i = NEAR; i < LEVELS; i++) {
+      Level level = levels[i];
       // strides are powers of two: a level that does not take this edge ends the loop
       if ((index & (level.stride - 1)) != 0) {
         break;
       }
-      level.add(seconds - first);
+      level.add(time);
     }
     index++;
+  }
+
+  /** The levels that take every edge share the times kept. */
+  private void near(double time) {
+    int now = (int) (index & (KEPT - 1));
+    kept[now] = time;
+    for (int i = 0, steps = 1; i < NEAR && index >= 2L * steps; i++, steps *= 2) {
+      double middle = kept[(now - steps) & (KEPT - 1)];
+      double d = time - 2 * middle + kept[(now - 2 * steps) & (KEPT - 1)];
+      nearSums[i] += d * d;
+    }
+  }
+
+  private double sum(int level) {
+    return level < NEAR ? nearSums[level] : levels[level].sum;
+  }
+
+  private long terms(int level) {
+    return level < NEAR ? Math.max(0, index - (2L << level)) : levels[level].terms;
   }
 
   /** The rungs for which at least eight terms came. */
@@ -51,11 +81,12 @@ public final class StabilityLadder implements EdgeSink {
       return rungs;
     }
     double step = (last - first) / (index - 1);
-    for (Level level : levels) {
-      if (level.terms >= FEWEST_TERMS && index > 3 * level.steps) {
-        double tau = level.steps * step;
-        double independent = Math.max(1, (double) (index - 1) / level.steps - 1);
-        rungs.add(new Rung(tau, Math.sqrt(level.sum / (2.0 * level.terms)) / tau, independent));
+    for (int i = 0; i < LEVELS; i++) {
+      long steps = 1L << i;
+      if (terms(i) >= FEWEST_TERMS && index > 3 * steps) {
+        double tau = steps * step;
+        double independent = Math.max(1, (double) (index - 1) / steps - 1);
+        rungs.add(new Rung(tau, Math.sqrt(sum(i) / (2.0 * terms(i))) / tau, independent));
       }
     }
     return rungs;
@@ -71,7 +102,6 @@ public final class StabilityLadder implements EdgeSink {
 
   /** Second differences over one number of steps. */
   private static final class Level {
-    private final long steps;
     private final long stride;
     private final double[] ring;
     private final int lag;
@@ -81,7 +111,6 @@ public final class StabilityLadder implements EdgeSink {
     private long terms;
 
     Level(long steps) {
-      this.steps = steps;
       this.stride = Math.max(1, steps / STARTS);
       this.lag = (int) (steps / stride);
       this.ring = new double[2 * lag + 1];

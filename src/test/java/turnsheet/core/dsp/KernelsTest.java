@@ -92,8 +92,8 @@ class KernelsTest {
       double[] part = Arrays.copyOfRange(in, at, Math.min(in.length, at + block));
       int count = kernel.process(part, part.length);
       for (int i = 0; i < count; i++) {
-        out[n++] = kernel.re(i);
-        out[n++] = kernel.im(i);
+        out[n++] = kernel.re()[i];
+        out[n++] = kernel.im()[i];
       }
     }
     return Arrays.copyOf(out, n);

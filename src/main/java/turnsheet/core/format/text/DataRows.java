@@ -23,6 +23,10 @@ final class DataRows implements Closeable {
   private final int firstColumn;
   private final int secondColumn;
   private final boolean lastMayBeEmpty;
+
+  /** Whether a row can be one bare number. */
+  private final boolean plain;
+
   private final List<Warning> warnings = new ArrayList<>();
   private final Cells cells;
   private double first;
@@ -52,12 +56,21 @@ final class DataRows implements Closeable {
     this.layout = layout;
     this.firstColumn = firstColumn;
     this.secondColumn = secondColumn;
+    this.plain = layout.columns() == 1 && layout.separator() != (char) layout.mark();
     this.cells = new Cells(layout.separator(), layout.columns());
     this.lastMayBeEmpty = layout.rows().get(0).cell(layout.columns() - 1).isBlank();
   }
 
   /** Moves to the next row; false at the end. */
   boolean next() throws IOException, RejectedException {
+    if (plain && emptyCellLine == 0) {
+      double number = lines.nextPlain(layout.mark());
+      if (!Double.isNaN(number)) {
+        first = firstColumn < 0 ? 0 : number;
+        second = secondColumn < 0 ? 0 : number;
+        return true;
+      }
+    }
     while (lines.next()) {
       if (isInk()) {
         Boolean read = read();

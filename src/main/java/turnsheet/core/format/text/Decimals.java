@@ -21,7 +21,17 @@ final class Decimals {
     }
   }
 
+  /** Any whole number with so many digits is exact in binary. */
+  static final int EXACT_DIGITS = 15;
+
   private Decimals() {}
+
+  /**
+   * A number of at most {@link #EXACT_DIGITS} digits, so many of them decimals, by the rule above.
+   */
+  static double exact(long mantissa, int decimals) {
+    return mantissa / POWERS[decimals];
+  }
 
   /** NaN where the bytes are no finite number. */
   static double parse(byte[] bytes, int from, int to, byte mark) {

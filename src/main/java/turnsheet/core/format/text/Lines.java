@@ -82,6 +82,45 @@ final class Lines implements Closeable {
     return true;
   }
 
+  /**
+   * Moves to the next line where that is nothing but an unsigned decimal number and its end, all of
+   * it in the buffer and exact in binary: the rule in long lists. Otherwise nothing is moved, and
+   * {@link #next} is to be used. The first line, which may begin with a mark, is left to it too.
+   *
+   * @return the number; NaN where nothing was moved
+   */
+  double nextPlain(byte mark) {
+    if (skipLineFeed || number == 0) {
+      return Double.NaN;
+    }
+    byte[] bytes = buffer;
+    int limit = filled;
+    int i = at;
+    long mantissa = 0;
+    int point = -1;
+    while (i < limit) {
+      int digit = bytes[i] - '0';
+      if (digit >= 0 && digit <= 9) {
+        mantissa = mantissa * 10 + digit;
+      } else if (bytes[i] == mark && point < 0) {
+        point = i;
+      } else {
+        break;
+      }
+      i++;
+    }
+    int digits = i - at - (point < 0 ? 0 : 1);
+    if (i == limit || bytes[i] != '\n' || digits == 0 || digits > Decimals.EXACT_DIGITS) {
+      return Double.NaN;
+    }
+    start = at;
+    end = i;
+    at = i + 1;
+    number++;
+    terminated = true;
+    return Decimals.exact(mantissa, point < 0 ? 0 : i - 1 - point);
+  }
+
   byte[] bytes() {
     return buffer;
   }
