@@ -1,6 +1,8 @@
 package turnsheet.share.web;
 
 import jakarta.servlet.http.HttpServletResponse;
+import java.time.Instant;
+import java.util.Locale;
 import java.util.Optional;
 import org.jspecify.annotations.Nullable;
 import org.springframework.http.HttpStatus;
@@ -10,13 +12,17 @@ import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
 import org.springframework.web.bind.annotation.GetMapping;
 import org.springframework.web.bind.annotation.PathVariable;
+import turnsheet.reading.web.HistorySheets;
 import turnsheet.report.Issue;
 import turnsheet.report.Report;
 import turnsheet.report.Reports;
+import turnsheet.report.Sheet;
 import turnsheet.report.web.SheetPrinting;
 import turnsheet.share.ShareDesk;
 import turnsheet.share.ShareLink;
 import turnsheet.share.ShareLinks;
+import turnsheet.shop.UnitId;
+import turnsheet.shop.Visits;
 import turnsheet.web.Times;
 
 /**
@@ -30,12 +36,22 @@ class SharedReportController {
   private final ShareLinks links;
   private final Reports reports;
   private final SheetPrinting printing;
+  private final Visits visits;
+  private final HistorySheets histories;
   private final Times times;
 
-  SharedReportController(ShareLinks links, Reports reports, SheetPrinting printing, Times times) {
+  SharedReportController(
+      ShareLinks links,
+      Reports reports,
+      SheetPrinting printing,
+      Visits visits,
+      HistorySheets histories,
+      Times times) {
     this.links = links;
     this.reports = reports;
     this.printing = printing;
+    this.visits = visits;
+    this.histories = histories;
     this.times = times;
   }
 
@@ -50,6 +66,28 @@ class SharedReportController {
   String current(@PathVariable String token, Model model, HttpServletResponse response) {
     ShareLink link = links.peek(token).orElse(null);
     return page(token, link, report(link).map(this::newest), model, response);
+  }
+
+  /** The unit over the years, where the shop allows it for this link. */
+  @GetMapping(ShareDesk.PATH + "{token}/history")
+  String history(
+      @PathVariable String token, Model model, Locale locale, HttpServletResponse response) {
+    ShareLink link = links.peek(token).filter(ShareLink::showsHistory).orElse(null);
+    Report report = report(link).orElse(null);
+    if (report == null) {
+      return gone(response);
+    }
+    keepPrivate(response);
+    Sheet sheet = report.content().sheet();
+    Instant issued = report.content().issue().issuedAt();
+    UnitId unit = visits.find(report.visitId()).orElseThrow().unitId();
+    model.addAttribute("unit", sheet.item().modelName() + ", " + sheet.item().serialNumber());
+    model.addAttribute("shopName", sheet.shop().name());
+    model.addAttribute("until", times.day(issued));
+    model.addAttribute("printedNumber", Issue.printed(report.number()));
+    model.addAttribute("back", ShareDesk.PATH + token);
+    model.addAttribute("drawings", histories.of(unit, issued, locale));
+    return "share/history";
   }
 
   @GetMapping(ShareDesk.PATH + "{token}/pdf")
@@ -68,14 +106,11 @@ class SharedReportController {
       Optional<Report> found,
       Model model,
       HttpServletResponse response) {
-    response.setHeader("X-Robots-Tag", "noindex, nofollow");
-    response.setHeader("Referrer-Policy", "no-referrer");
-    response.setHeader("Cache-Control", "no-store");
     Report report = found.orElse(null);
     if (link == null || report == null) {
-      response.setStatus(HttpStatus.NOT_FOUND.value());
-      return "share/gone";
+      return gone(response);
     }
+    keepPrivate(response);
     String here = ShareDesk.PATH + token;
     model.addAttribute("article", printing.article(report));
     model.addAttribute("language", report.content().issue().language());
@@ -85,9 +120,22 @@ class SharedReportController {
     model.addAttribute(
         "pdf", report.number() == link.reportNumber() ? here + "/pdf" : here + "/current/pdf");
     model.addAttribute("current", here + "/current");
+    model.addAttribute("history", link.showsHistory() ? here + "/history" : "");
     model.addAttribute(
         "replacedBy", report.replacedBy() == null ? "" : Issue.printed(report.replacedBy()));
     return "share/report";
+  }
+
+  private static String gone(HttpServletResponse response) {
+    keepPrivate(response);
+    response.setStatus(HttpStatus.NOT_FOUND.value());
+    return "share/gone";
+  }
+
+  private static void keepPrivate(HttpServletResponse response) {
+    response.setHeader("X-Robots-Tag", "noindex, nofollow");
+    response.setHeader("Referrer-Policy", "no-referrer");
+    response.setHeader("Cache-Control", "no-store");
   }
 
   private ResponseEntity<byte[]> pdf(Optional<Long> number) {
