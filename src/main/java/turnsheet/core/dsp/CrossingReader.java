@@ -9,11 +9,17 @@ import turnsheet.core.signal.Warning;
 
 /**
  * Edges of a waveform: the times at which it crosses a level, each counted only after it has gone
- * beyond a band about that level. Between samples the waveform is a cubic through the four nearest.
+ * beyond a band about that level. Between samples the waveform is what a band-limited one must be
+ * ({@link SampleInterpolator}); within half its reach of the ends, a cubic through the four
+ * nearest.
  */
 public final class CrossingReader implements EdgeReader {
 
   private static final int BLOCK = 8192;
+  private static final int TAPS = SampleInterpolator.TAPS;
+
+  /** Samples that must be known beyond c. */
+  private static final int AHEAD = TAPS / 2 - 1;
 
   private final SampleReader samples;
   private final double rateHertz;
@@ -23,11 +29,17 @@ public final class CrossingReader implements EdgeReader {
   private int filled;
   private int taken;
   private boolean ended;
-  // the four last samples less the level; a crossing is looked for between b and c
+
+  /** The latest samples less the level, twice in a row, so that they always lie in one piece. */
+  private final double[] ring = new double[2 * TAPS];
+
+  private int oldest;
+  // four samples in the middle of them; a crossing is looked for between b and c
   private double a;
   private double b;
   private double c;
   private double d;
+  private double newest;
   private long count;
   private int flush;
   private int side;
@@ -49,14 +61,15 @@ public final class CrossingReader implements EdgeReader {
   public int read(double[] timesSeconds, boolean[] rising) throws IOException, RejectedException {
     int n = 0;
     while (n < timesSeconds.length && advance()) {
-      if (count < 3) {
+      // the sample b has this number
+      long before = count - AHEAD - 2;
+      if (before < 0) {
         continue;
       }
-      // the sample b has the number count - 3
       if (b < 0 && c >= 0) {
-        crossingUp = (count - 3 + root()) / rateHertz;
+        crossingUp = (before + crossing(before)) / rateHertz;
       } else if (b >= 0 && c < 0) {
-        crossingDown = (count - 3 + root()) / rateHertz;
+        crossingDown = (before + crossing(before)) / rateHertz;
       }
       if (side <= 0 && c > band) {
         if (side < 0 && !Double.isNaN(crossingUp)) {
@@ -75,32 +88,64 @@ public final class CrossingReader implements EdgeReader {
     return n;
   }
 
-  /** Moves on by one sample; past the end the last one is repeated once. */
+  /** Moves on by one sample; past the end the last one is repeated. */
   private boolean advance() throws IOException, RejectedException {
     if (taken == filled && !ended) {
       filled = samples.read(block);
       taken = 0;
       ended = filled == 0;
     }
-    if (ended && (count == 0 || flush++ > 0)) {
+    if (ended && (count == 0 || flush == AHEAD)) {
       return false;
     }
-    double next = ended ? d : block[taken++] - level;
-    if (count == 0) {
-      b = next;
-      c = next;
-      d = next;
+    if (ended) {
+      flush++;
+    } else {
+      newest = block[taken++] - level;
     }
+    if (count == 0) {
+      java.util.Arrays.fill(ring, newest);
+      b = newest;
+      c = newest;
+      d = newest;
+    }
+    ring[oldest] = newest;
+    ring[oldest + TAPS] = newest;
+    oldest = oldest + 1 == TAPS ? 0 : oldest + 1;
     a = b;
     b = c;
     c = d;
-    d = next;
+    d = ring[oldest + TAPS / 2 + 1];
     count++;
     return true;
   }
 
-  /** Where the cubic through the four samples is zero, as a share of the step from b to c. */
-  private double root() {
+  /** Where the waveform passes the level, as a share of the step from b to c. */
+  private double crossing(long before) {
+    double coarse = root(a, b, c, d);
+    if (before < AHEAD || ended) {
+      return coarse;
+    }
+    int steps = SampleInterpolator.STEPS;
+    int k = Math.min(steps - 1, (int) (coarse * steps));
+    double here = SampleInterpolator.at(ring, oldest, k);
+    double next = SampleInterpolator.at(ring, oldest, k + 1);
+    // the waveform has the sign of b to the left of the crossing and of c to its right
+    while (k > 0 && here < 0 != b < 0) {
+      next = here;
+      here = SampleInterpolator.at(ring, oldest, --k);
+    }
+    while (k < steps - 1 && next < 0 == b < 0) {
+      here = next;
+      next = SampleInterpolator.at(ring, oldest, ++k + 1);
+    }
+    double left = SampleInterpolator.at(ring, oldest, k - 1);
+    double right = SampleInterpolator.at(ring, oldest, k + 2);
+    return here < 0 == next < 0 ? coarse : (k + root(left, here, next, right)) / steps;
+  }
+
+  /** Where the cubic through four even values is zero, as a share of the step from b to c. */
+  private static double root(double a, double b, double c, double d) {
     double first = c - a / 3 - b / 2 - d / 6;
     double second = (a + c) / 2 - b;
     double third = (d - a) / 6 + (b - c) / 2;

@@ -7,12 +7,13 @@ package turnsheet.core.dsp;
  * differentiated in one step, at the place between edges where the wanted moment lies. Unlike the
  * reciprocal of single periods this has no droop towards high rates, and unlike one value per edge
  * it is even in time, so that the mean of the samples is the mean speed whatever the fluctuation.
- * Pass band up to {@link #PASS} of the output rate, leakage and ripple below 80 dB.
+ * Pass band up to {@link #PASS} of the edge rate over the decimation, leakage and ripple below 80
+ * dB.
  */
 public final class EdgeSpeed {
 
-  /** Highest rate shown in full, as a share of the output rate. */
-  public static final double PASS = 0.4;
+  /** Highest rate shown in full, as a share of the rate of edges over the decimation. */
+  private static final double PASS = 0.4;
 
   private static final double ATTENUATION_DB = 80;
   private static final double BETA = 0.1102 * (ATTENUATION_DB - 8.7);
@@ -20,8 +21,12 @@ public final class EdgeSpeed {
   /** Moments between two output samples that the table tells apart, at least. */
   private static final int FINENESS = 1024;
 
+  /** Below this edge rate the weighting sees too little to be worth a finer trace. */
+  private static final double LOWEST_FINE_HERTZ = 25;
+
   private final int decimation;
   private final int half;
+  private final double passHertz;
   private final double stepSeconds;
   private final float[][] taps;
 
@@ -48,10 +53,13 @@ public final class EdgeSpeed {
   /**
    * @param edgesPerSecond expected mean rate
    * @param decimation edges per output sample, on average
+   * @param perEdge output samples per edge where the decimation is 1: more of them show no higher
+   *     rates, but what reads peaks and percentiles finds them
    */
-  public EdgeSpeed(double edgesPerSecond, int decimation, Output output) {
+  public EdgeSpeed(double edgesPerSecond, int decimation, int perEdge, Output output) {
     this.decimation = decimation;
-    this.stepSeconds = decimation / edgesPerSecond;
+    this.stepSeconds = decimation / (perEdge * edgesPerSecond);
+    this.passHertz = PASS * edgesPerSecond / decimation;
     double pass = PASS / decimation;
     double stop = decimation == 1 ? 0.5 : (1 - PASS) / decimation;
     double transition = 2 * Math.PI * (stop - pass);
@@ -66,6 +74,18 @@ public final class EdgeSpeed {
   /** Edges per output sample that bring the rate near 1 kHz where edges come faster. */
   public static int decimationFor(double edgesPerSecond) {
     return edgesPerSecond > 1200 ? (int) Math.ceil(edgesPerSecond / 1000) : 1;
+  }
+
+  /**
+   * Output samples per edge that bring the rate to 1 kHz or a little more where edges are fewer.
+   */
+  public static int perEdgeFor(double edgesPerSecond) {
+    return edgesPerSecond < LOWEST_FINE_HERTZ ? 1 : (int) Math.ceil(1000 / edgesPerSecond);
+  }
+
+  /** Highest rate of fluctuation that is shown in full. */
+  public double passHertz() {
+    return passHertz;
   }
 
   public double rateHertz() {

@@ -52,7 +52,8 @@ public final class KaiserFir {
     return (int) Math.ceil((attenuationDb - 8) / (2.285 * transition)) | 1;
   }
 
-  private static double bessel0(double x) {
+  /** I0, by its series. */
+  static double bessel0(double x) {
     double term = 1;
     double sum = 1;
     for (int k = 1; term > 1e-17 * sum; k++) {

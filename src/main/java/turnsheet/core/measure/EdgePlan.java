@@ -5,7 +5,6 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import org.jspecify.annotations.Nullable;
-import turnsheet.core.dsp.EdgeSpeed;
 import turnsheet.core.signal.RejectedException;
 import turnsheet.core.signal.SpeedTrace;
 import turnsheet.core.signal.Warning;
@@ -61,7 +60,7 @@ final class EdgePlan {
     requireNominal(scan);
 
     SpeedTrace trace = scan.trace();
-    double band = EdgeSpeed.PASS * trace.rateHertz();
+    double band = scan.speed.passHertz();
     List<Stretch> excluded = excluded(scan);
     requireLength(scan, trace, excluded);
     EdgeNoise noise = EdgeNoise.of(scan, probe);

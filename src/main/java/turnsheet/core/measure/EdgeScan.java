@@ -56,7 +56,10 @@ final class EdgeScan {
     this.wheel = teeth == null || teeth < 2 ? null : new WheelPattern(teeth);
     this.speed =
         new EdgeSpeed(
-            rate, EdgeSpeed.decimationFor(rate), v -> trace.add(100 * (v / nominalHz - 1)));
+            rate,
+            EdgeSpeed.decimationFor(rate),
+            EdgeSpeed.perEdgeFor(rate),
+            v -> trace.add(100 * (v / nominalHz - 1)));
     double finest =
         Math.max(
             probe.gridSeconds(),

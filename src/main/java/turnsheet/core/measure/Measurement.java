@@ -14,7 +14,7 @@ import turnsheet.core.signal.Rejection;
 public final class Measurement {
 
   /** Changes whenever any figure can. */
-  public static final String METHOD_VERSION = "2";
+  public static final String METHOD_VERSION = "3";
 
   private final CaptureFormats formats;
 

@@ -166,7 +166,8 @@ final class TraceFigures {
   }
 
   private Figure weighted(WeightedFigures.Value v) {
-    double floor = noise.weightedFloorPercent(LOWEST_HERTZ, topHertz());
+    // the weighting falls by 6 dB per octave beyond 200 Hz and does not end there
+    double floor = noise.weightedFloorPercent(LOWEST_HERTZ, bandHertz);
     return Figure.of(
         v.percent(),
         Budget.empty()

@@ -2,6 +2,7 @@ package turnsheet.core.measure;
 
 import java.util.ArrayList;
 import java.util.List;
+import turnsheet.core.dsp.FineValues;
 import turnsheet.core.dsp.OverlapSaveFir;
 import turnsheet.core.dsp.QuasiPeakDetector;
 import turnsheet.core.dsp.Weighting;
@@ -37,16 +38,17 @@ final class WeightedFigures {
     final MagnitudeHistogram magnitude = new MagnitudeHistogram();
     final MagnitudeHistogram indicated = new MagnitudeHistogram();
     double squares;
+    long samples;
 
     void add(double weighted, double indication) {
-      magnitude.add(weighted);
       indicated.add(indication);
       squares += weighted * weighted;
+      samples++;
     }
 
     double[] readings() {
       return new double[] {
-        magnitude.quantile(SHARE), indicated.quantile(SHARE), Math.sqrt(squares / magnitude.total())
+        magnitude.quantile(SHARE), indicated.quantile(SHARE), Math.sqrt(squares / samples)
       };
     }
 
@@ -54,6 +56,7 @@ final class WeightedFigures {
       magnitude.clear();
       indicated.clear();
       squares = 0;
+      samples = 0;
     }
   }
 
@@ -68,7 +71,8 @@ final class WeightedFigures {
     blockSamples = Math.max(1, settled / count);
     long resampled =
         Math.max((long) Math.ceil(RESAMPLED_SECONDS * rateHertz), settled / MOST_RESAMPLED);
-    fluctuation = new MagnitudeBlocks.Collector(resampled);
+    fluctuation =
+        new MagnitudeBlocks.Collector(resampled * new FineValues(rateHertz).perSample());
     indication = new MagnitudeBlocks.Collector(resampled);
     for (CleanTrace.Piece piece : residual.clean().pieces()) {
       run(residual, piece);
@@ -82,7 +86,8 @@ final class WeightedFigures {
   /** The filter is run in on the piece mirrored at its own beginning. */
   private void run(Residual residual, CleanTrace.Piece piece) {
     OverlapSaveFir filter = new OverlapSaveFir(response);
-    QuasiPeakDetector detector = new QuasiPeakDetector(rateHertz);
+    FineValues fine = new FineValues(rateHertz);
+    QuasiPeakDetector detector = new QuasiPeakDetector(rateHertz * fine.perSample());
     double[] in = new double[BLOCK];
     double[] out = new double[filter.roomFor(BLOCK)];
     int mirrored = Math.min(response.length, piece.length() - 1);
@@ -90,15 +95,15 @@ final class WeightedFigures {
     for (int left = mirrored; left > 0; ) {
       int part = Math.min(BLOCK, left);
       residual.copyBackwards(piece.from() + left, in, part);
-      at = take(residual.clean(), piece, at, out, filter.process(in, part, out), detector);
+      at = take(residual.clean(), piece, at, out, filter.process(in, part, out), fine, detector);
       left -= part;
     }
     for (int from = piece.from(); from < piece.to(); from += BLOCK) {
       int part = Math.min(BLOCK, piece.to() - from);
       residual.copy(from, in, part);
-      at = take(residual.clean(), piece, at, out, filter.process(in, part, out), detector);
+      at = take(residual.clean(), piece, at, out, filter.process(in, part, out), fine, detector);
     }
-    take(residual.clean(), piece, at, out, filter.finish(out), detector);
+    take(residual.clean(), piece, at, out, filter.finish(out), fine, detector);
   }
 
   private long take(
@@ -107,17 +112,28 @@ final class WeightedFigures {
       long at,
       double[] out,
       int count,
+      FineValues fine,
       QuasiPeakDetector detector) {
     int settled = piece.from() + settling(piece);
     for (int i = 0; i < count; i++) {
-      double indicated = detector.next(out[i]);
-      long index = at + i;
-      if (index >= settled && clean.usable((int) index)) {
-        whole.add(out[i], indicated);
-        block.add(out[i], indicated);
-        fluctuation.add(out[i]);
+      fine.add(out[i]);
+      long index = at + i - fine.delaySamples();
+      boolean counts = index >= settled && clean.usable((int) index);
+      double indicated = 0;
+      for (int p = 0; p < fine.perSample(); p++) {
+        double value = fine.value(p);
+        indicated = detector.next(value);
+        if (counts) {
+          whole.magnitude.add(value);
+          block.magnitude.add(value);
+          fluctuation.add(value);
+        }
+      }
+      if (counts) {
+        whole.add(fine.value(0), indicated);
+        block.add(fine.value(0), indicated);
         indication.add(indicated);
-        if (block.magnitude.total() >= blockSamples) {
+        if (block.samples >= blockSamples) {
           blocks.add(block.readings());
           block.clear();
         }
@@ -130,7 +146,7 @@ final class WeightedFigures {
   record Value(double percent, double lengthUncertaintyPercent) {}
 
   double settledSeconds() {
-    return whole.magnitude.total() / rateHertz;
+    return whole.samples / rateHertz;
   }
 
   /** The weighted fluctuation in blocks. */
