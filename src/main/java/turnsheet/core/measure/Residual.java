@@ -99,6 +99,36 @@ final class Residual {
     return count == 0 ? Double.NaN : sum / count;
   }
 
+  /**
+   * How much more fluctuation the capture shows when all of it counts alike than when its middle
+   * counts most (squared Hann weights): the quotient of the two root mean squares, less 1.
+   */
+  double swell() {
+    int n = clean.trace().length();
+    Rotation rotation = new Rotation(0.5 / n, 1.0 / n);
+    double[] buffer = new double[BLOCK];
+    double flat = 0;
+    double count = 0;
+    double middled = 0;
+    double weights = 0;
+    for (int from = 0; from < n; from += BLOCK) {
+      int part = Math.min(BLOCK, n - from);
+      copy(from, buffer, part);
+      for (int i = 0; i < part; i++) {
+        rotation.advance();
+        if (clean.usable(from + i)) {
+          double square = buffer[i] * buffer[i];
+          double w = 0.5 - 0.5 * rotation.cosine();
+          flat += square;
+          count++;
+          middled += w * w * square;
+          weights += w * w;
+        }
+      }
+    }
+    return middled > 0 ? Math.sqrt(flat / count / (middled / weights)) - 1 : 0;
+  }
+
   /** Standard deviation of the fluctuation's averages over blocks of a length. */
   double blockScatterPercent(int length) {
     double[] buffer = new double[BLOCK];

@@ -1,6 +1,7 @@
 package turnsheet.core.measure;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import turnsheet.core.dsp.FineValues;
 import turnsheet.core.dsp.OverlapSaveFir;
@@ -30,6 +31,9 @@ final class WeightedFigures {
   private final Tally whole = new Tally();
   private final Tally block = new Tally();
   private final List<double[]> blocks = new ArrayList<>();
+  private final Tally lineBlock = new Tally();
+  private final List<double[]> lineBlocks = new ArrayList<>();
+  private final List<LineFinder.Found> found;
   private final long blockSamples;
   private final MagnitudeBlocks.Collector fluctuation;
   private final MagnitudeBlocks.Collector indication;
@@ -60,7 +64,11 @@ final class WeightedFigures {
     }
   }
 
-  WeightedFigures(Residual residual) {
+  /**
+   * @param found lines in the one spectrum of the capture; none where it took more
+   */
+  WeightedFigures(Residual residual, List<LineFinder.Found> found) {
+    this.found = found;
     rateHertz = residual.clean().rateHertz();
     response = Weighting.response(rateHertz);
     long settled = 0;
@@ -71,8 +79,7 @@ final class WeightedFigures {
     blockSamples = Math.max(1, settled / count);
     long resampled =
         Math.max((long) Math.ceil(RESAMPLED_SECONDS * rateHertz), settled / MOST_RESAMPLED);
-    fluctuation =
-        new MagnitudeBlocks.Collector(resampled * new FineValues(rateHertz).perSample());
+    fluctuation = new MagnitudeBlocks.Collector(resampled * new FineValues(rateHertz).perSample());
     indication = new MagnitudeBlocks.Collector(resampled);
     for (CleanTrace.Piece piece : residual.clean().pieces()) {
       run(residual, piece);
@@ -86,24 +93,66 @@ final class WeightedFigures {
   /** The filter is run in on the piece mirrored at its own beginning. */
   private void run(Residual residual, CleanTrace.Piece piece) {
     OverlapSaveFir filter = new OverlapSaveFir(response);
-    FineValues fine = new FineValues(rateHertz);
-    QuasiPeakDetector detector = new QuasiPeakDetector(rateHertz * fine.perSample());
+    Reader reader = new Reader();
     double[] in = new double[BLOCK];
     double[] out = new double[filter.roomFor(BLOCK)];
     int mirrored = Math.min(response.length, piece.length() - 1);
+    WeightedLines lines = WeightedLines.of(residual, found, response, mirrored);
+    Reader lineReader = new Reader();
     long at = (long) piece.from() - mirrored;
     for (int left = mirrored; left > 0; ) {
       int part = Math.min(BLOCK, left);
       residual.copyBackwards(piece.from() + left, in, part);
-      at = take(residual.clean(), piece, at, out, filter.process(in, part, out), fine, detector);
+      at =
+          take(
+              residual.clean(),
+              piece,
+              at,
+              out,
+              filter.process(in, part, out),
+              reader,
+              lines,
+              lineReader);
       left -= part;
     }
     for (int from = piece.from(); from < piece.to(); from += BLOCK) {
       int part = Math.min(BLOCK, piece.to() - from);
       residual.copy(from, in, part);
-      at = take(residual.clean(), piece, at, out, filter.process(in, part, out), fine, detector);
+      at =
+          take(
+              residual.clean(),
+              piece,
+              at,
+              out,
+              filter.process(in, part, out),
+              reader,
+              lines,
+              lineReader);
     }
-    take(residual.clean(), piece, at, out, filter.finish(out), fine, detector);
+    take(residual.clean(), piece, at, out, filter.finish(out), reader, lines, lineReader);
+  }
+
+  /** Fills up between samples and follows the indicator. */
+  private final class Reader {
+    private final FineValues fine = new FineValues(rateHertz);
+    private final QuasiPeakDetector detector = new QuasiPeakDetector(rateHertz * fine.perSample());
+    private final double[] values = new double[fine.perSample()];
+    double indicated;
+
+    void next(double sample) {
+      fine.add(sample);
+      for (int p = 0; p < values.length; p++) {
+        values[p] = fine.value(p);
+        indicated = detector.next(values[p]);
+      }
+    }
+
+    void tell(Tally tally) {
+      for (double value : values) {
+        tally.magnitude.add(value);
+      }
+      tally.add(values[0], indicated);
+    }
   }
 
   private long take(
@@ -112,30 +161,31 @@ final class WeightedFigures {
       long at,
       double[] out,
       int count,
-      FineValues fine,
-      QuasiPeakDetector detector) {
+      Reader reader,
+      WeightedLines lines,
+      Reader lineReader) {
     int settled = piece.from() + settling(piece);
     for (int i = 0; i < count; i++) {
-      fine.add(out[i]);
-      long index = at + i - fine.delaySamples();
-      boolean counts = index >= settled && clean.usable((int) index);
-      double indicated = 0;
-      for (int p = 0; p < fine.perSample(); p++) {
-        double value = fine.value(p);
-        indicated = detector.next(value);
-        if (counts) {
-          whole.magnitude.add(value);
-          block.magnitude.add(value);
+      reader.next(out[i]);
+      if (!lines.isEmpty()) {
+        lineReader.next(lines.next());
+      }
+      long index = at + i - reader.fine.delaySamples();
+      if (index >= settled && clean.usable((int) index)) {
+        reader.tell(whole);
+        reader.tell(block);
+        for (double value : reader.values) {
           fluctuation.add(value);
         }
-      }
-      if (counts) {
-        whole.add(fine.value(0), indicated);
-        block.add(fine.value(0), indicated);
-        indication.add(indicated);
+        indication.add(reader.indicated);
+        if (!lines.isEmpty()) {
+          lineReader.tell(lineBlock);
+        }
         if (block.samples >= blockSamples) {
           blocks.add(block.readings());
           block.clear();
+          lineBlocks.add(lines.isEmpty() ? new double[3] : lineBlock.readings());
+          lineBlock.clear();
         }
       }
     }
@@ -171,16 +221,31 @@ final class WeightedFigures {
     return value(2);
   }
 
+  /**
+   * The scatter of blocks has two parts. What is left when the readings of the lines alone are
+   * taken off is chance and falls with the root of the number of blocks; few blocks tell it badly,
+   * which Student's distribution allows for (JCGM 101:2008, 6.4.9, from memory). The readings of
+   * the lines differ as blocks hold no whole turns: of that the whole capture keeps what one block
+   * has, over its number of blocks.
+   */
   private Value value(int which) {
-    double mean = 0;
-    for (double[] b : blocks) {
-      mean += b[which] / blocks.size();
+    int n = blocks.size();
+    double[] rest = new double[n];
+    double[] lines = new double[n];
+    for (int i = 0; i < n; i++) {
+      lines[i] = lineBlocks.get(i)[which];
+      rest[i] = blocks.get(i)[which] - lines[i];
     }
-    double squares = 0;
-    for (double[] b : blocks) {
-      squares += (b[which] - mean) * (b[which] - mean);
-    }
-    double n = blocks.size();
-    return new Value(whole.readings()[which], n < 2 ? 0 : Math.sqrt(squares / (n - 1) / n));
+    double student = n > 3 ? Math.sqrt((n - 1.0) / (n - 3)) : 1;
+    double chance = student * deviation(rest) / Math.sqrt(Math.max(1, n));
+    boolean phases = which != 2 && found.size() > 1;
+    double turns = deviation(lines) / (phases ? Math.sqrt(Math.max(1, n)) : Math.max(1, n));
+    return new Value(whole.readings()[which], Math.hypot(chance, turns));
+  }
+
+  private static double deviation(double[] values) {
+    double mean = Arrays.stream(values).average().orElse(0);
+    double squares = Arrays.stream(values).map(v -> (v - mean) * (v - mean)).sum();
+    return values.length < 2 ? 0 : Math.sqrt(squares / (values.length - 1));
   }
 }

@@ -59,8 +59,9 @@ class WeightingTest {
     double worst = 0;
     for (double f = 0.1; f < Math.min(200, 0.45 * rate); f *= 1.07) {
       double error = 20 * Math.log10(gain(h, f / rate)) - Weighting.decibels(f);
-      // the response is cut at 8 s: 0.07 dB at 0.1 Hz, 0.012 dB at 0.2 Hz and above
-      assertThat(Math.abs(error)).as("%s Hz", f).isLessThan(f < 0.2 ? 0.1 : 0.05);
+      // the response is cut at 8 s: 0.07 dB at 0.1 Hz, 0.022 dB at most from 0.2 Hz on
+      // the budget of weighted figures counts on the second
+      assertThat(Math.abs(error)).as("%s Hz", f).isLessThan(f < 0.2 ? 0.07 : 0.0225);
       worst = f < 0.2 ? worst : Math.max(worst, Math.abs(error));
     }
     for (double[] row : TABLE) {

@@ -55,10 +55,10 @@ final class RandomMachine {
     return noisePercent * Math.sqrt(sum);
   }
 
-  /** From a million draws: its own scatter is a tenth of a percent. */
+  /** From so many draws that their scatter is 0.2 %, a twentieth of the usual interval. */
   double twoSigmaPercent(Random random) {
     double noise = noiseWeighted();
-    double[] draws = new double[1_000_000];
+    double[] draws = new double[250_000];
     for (int d = 0; d < draws.length; d++) {
       double sum = noise * random.nextGaussian();
       for (int i = 0; i < lineHertz.length; i++) {

@@ -54,4 +54,44 @@ class TraceFiguresTest {
       }
     }
   }
+
+  /**
+   * Two lines 0.02 Hz apart beat 1.2 times in a minute. The unweighted figure weighs the middle of
+   * it most; its interval must hold the rms of the stretch recorded, in closed form.
+   */
+  @Test
+  void theIntervalOfTheUnweightedFigureHoldsASlowBeat() {
+    double worst = 0;
+    for (int i = 0; i < 8; i++) {
+      double lag = i * Math.PI / 4;
+      SpeedFunction speed = SpeedFunction.constant(0).plusLine(7, 0.1, 0).plusLine(7.02, 0.08, lag);
+      Figure figure = figures(speed, 1000, 60).flutter().unweightedRmsPercent();
+      double beat = 2 * Math.PI * 0.02 * 60;
+      double cosine = (Math.sin(beat + lag) - Math.sin(lag)) / beat;
+      double truth = Math.sqrt((0.1 * 0.1 + 0.08 * 0.08) / 2 + 0.1 * 0.08 * cosine);
+      double off = value(figure) - truth;
+      worst = Math.max(worst, Math.abs(off) / truth);
+      assertThat(Math.abs(off))
+          .as("lag %s", lag)
+          .isLessThan(java.util.Objects.requireNonNull(figure.expandedUncertainty()));
+    }
+    System.out.printf("slow beat: unweighted rms off by up to %.3f%n", worst);
+    assertThat(worst).isGreaterThan(0.05);
+  }
+
+  /** Lines alone: what blocks of a few turns scatter is no scatter of the capture. */
+  @Test
+  void linesAloneHaveANarrowInterval() {
+    TraceFigures f =
+        figures(SpeedFunction.constant(0).plusLine(0.7, 0.1, 1).plusLine(5.3, 0.05, 2), 1000, 40);
+    Figure rms = f.flutter().weightedRmsPercent();
+    double truth =
+        Math.sqrt(
+            (Math.pow(0.1 * Weighting.gain(0.7), 2) + Math.pow(0.05 * Weighting.gain(5.3), 2)) / 2);
+    double half = java.util.Objects.requireNonNull(rms.expandedUncertainty());
+    System.out.printf(
+        "lines alone: U %.5f of %.5f, off by %.6f%n", half, truth, value(rms) - truth);
+    assertThat(Math.abs(value(rms) - truth)).isLessThan(half);
+    assertThat(half).isLessThan(0.015 * truth);
+  }
 }
