@@ -10,6 +10,7 @@ import java.time.temporal.ChronoUnit;
 import java.util.List;
 import java.util.Optional;
 import java.util.UUID;
+import org.jspecify.annotations.Nullable;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.stereotype.Component;
 import org.springframework.transaction.support.TransactionOperations;
@@ -184,18 +185,21 @@ public final class Readings {
             reading.source().channel())
         .update();
     for (FigureName name : FigureName.values()) {
-      addFigure(id, name, name.of(reading));
+      Figure figure = name.of(reading);
+      addFigure(id, name.path(), figure.value(), figure.expandedUncertainty());
     }
+    addFigure(id, Floors.PATH, reading.signal().floorPercent().value(), null);
     series.contents().forEach((name, content) -> addSeries(id, name, content));
     return id;
   }
 
-  private void addFigure(ReadingId id, FigureName name, Figure figure) {
+  private void addFigure(
+      ReadingId id, String path, @Nullable Double amount, @Nullable Double uncertainty) {
     jdbc.sql("insert into reading_figure values (:reading, :figure, :amount, :uncertainty)")
         .param("reading", id.value())
-        .param("figure", name.path())
-        .param("amount", figure.value())
-        .param("uncertainty", figure.expandedUncertainty())
+        .param("figure", path)
+        .param("amount", amount)
+        .param("uncertainty", uncertainty)
         .update();
   }
 

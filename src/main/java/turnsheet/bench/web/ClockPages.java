@@ -25,6 +25,7 @@ import turnsheet.bench.ClockCheck;
 import turnsheet.bench.ClockQuestion;
 import turnsheet.bench.KeptFile;
 import turnsheet.core.measure.CaptureKind;
+import turnsheet.reading.Floors;
 import turnsheet.shop.BenchInstrument;
 import turnsheet.web.RefusedRequestException;
 import turnsheet.web.Times;
@@ -41,11 +42,13 @@ class ClockPages {
       List.of(CaptureKind.TONE.name(), CaptureKind.TACHOMETER.name());
 
   private final ClockDesk desk;
+  private final Floors floors;
   private final MessageSource messages;
   private final Times times;
 
-  ClockPages(ClockDesk desk, MessageSource messages, Times times) {
+  ClockPages(ClockDesk desk, Floors floors, MessageSource messages, Times times) {
     this.desk = desk;
+    this.floors = floors;
     this.messages = messages;
     this.times = times;
   }
@@ -55,7 +58,13 @@ class ClockPages {
     BenchInstrument instrument = desk.instrument(id);
     Wording words = new Wording(messages, locale);
     model.addAttribute(
-        "page", InstrumentPage.of(instrument, desk.checks(instrument), words, times));
+        "page",
+        InstrumentPage.of(
+            instrument,
+            desk.checks(instrument),
+            FloorMonth.of(floors.ofInstrument(instrument.id()), times),
+            words,
+            times));
     return "bench/instrument";
   }
 

@@ -1,5 +1,6 @@
 package turnsheet.bench.web;
 
+import java.util.Comparator;
 import java.util.List;
 import java.util.Objects;
 import org.jspecify.annotations.Nullable;
@@ -17,6 +18,9 @@ import turnsheet.web.Wording;
  * @param reckoned what is reckoned with where the uncertainty is unknown; null where it is not
  * @param checkedOn empty where never
  * @param checks the newest first
+ * @param clockSvg finished drawing of them; null where there is none
+ * @param floors by month, the newest first
+ * @param floorSvg finished drawing of them; null where there is none
  */
 record InstrumentPage(
     String id,
@@ -25,7 +29,15 @@ record InstrumentPage(
     @Nullable String reckoned,
     String checkedOn,
     String note,
-    List<Row> checks) {
+    List<Row> checks,
+    @Nullable String clockSvg,
+    List<FloorRow> floors,
+    @Nullable String floorSvg) {
+
+  /** Finer than any floor differs from another. */
+  private static final int FLOOR_PLACES = 5;
+
+  private static final String NO_VALUE = "\u2013";
 
   /**
    * A line of the history.
@@ -42,8 +54,20 @@ record InstrumentPage(
       String by,
       String standing) {}
 
+  /**
+   * The floors of one month.
+   *
+   * @param lower quartile; a dash for few recordings, as the upper one
+   */
+  record FloorRow(String month, int recordings, String lower, String median, String upper) {}
+
   static InstrumentPage of(
-      BenchInstrument instrument, List<ClockCheck> checks, Wording words, Times times) {
+      BenchInstrument instrument,
+      List<ClockCheck> checks,
+      List<FloorMonth> months,
+      Wording words,
+      Times times) {
+    HealthCharts charts = new HealthCharts(words);
     Double uncertainty = instrument.clockExpandedUncertaintyPpm();
     return new InstrumentPage(
         instrument.id().toString(),
@@ -59,7 +83,26 @@ record InstrumentPage(
             : null,
         Objects.toString(instrument.checkedOn(), ""),
         instrument.note(),
-        checks.stream().map(check -> row(check, instrument, words, times)).toList());
+        checks.stream().map(check -> row(check, instrument, words, times)).toList(),
+        checks.isEmpty() ? null : charts.clock(checks),
+        months.stream()
+            .sorted(Comparator.comparing(FloorMonth::month).reversed())
+            .map(month -> floor(month, words))
+            .toList(),
+        months.isEmpty() ? null : charts.floor(months));
+  }
+
+  private static FloorRow floor(FloorMonth month, Wording words) {
+    return new FloorRow(
+        month.month().toString(),
+        month.recordings(),
+        month.hasQuartiles() ? percent(month.quantiles().at(0.25), words) : NO_VALUE,
+        percent(month.quantiles().median(), words),
+        month.hasQuartiles() ? percent(month.quantiles().at(0.75), words) : NO_VALUE);
+  }
+
+  private static String percent(double value, Wording words) {
+    return words.numbers().fixed(value, FLOOR_PLACES);
   }
 
   private static Row row(ClockCheck check, BenchInstrument instrument, Wording words, Times times) {

@@ -57,14 +57,19 @@ class ClockPagesTest {
         .contains("runs fast by", "+37.0", "999.963", "In the record", "Take into the record")
         .contains("differ by more than both uncertainties")
         .doesNotContain("??");
-    assertThat(text(page)).contains("not taken", "Lab oscillator", "1000 Hz ± 0.2 ppm");
+    assertThat(text(page))
+        .contains("not taken", "Lab oscillator", "1000 Hz ± 0.2 ppm")
+        .contains("drawn-dot series-2", "drawn-uncertainty")
+        .doesNotContain("drawn-dot series-1");
     assertThat(instrument().clockErrorPpm()).isEqualTo(5);
 
     MvcTestResult taken = mvc.post().uri(check + "/take").with(csrf()).exchange();
     assertThat(taken).hasStatus(302);
     assertThat(location(taken)).isEqualTo(page);
     assertThat(instrument().clockErrorPpm()).isBetween(36.9, 37.1);
-    assertThat(text(page)).contains("+37.0", "in the record", "checked against Lab oscillator");
+    assertThat(text(page))
+        .contains("+37.0", "in the record", "checked against Lab oscillator")
+        .contains("drawn-dot series-1");
     assertThat(text(check)).contains("Taken into the record on", "by technician");
     assertThat(audit.latest(1))
         .singleElement()
