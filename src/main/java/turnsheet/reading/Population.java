@@ -6,7 +6,7 @@ import turnsheet.core.stats.Quantiles;
 import turnsheet.shop.SpeedSettingId;
 
 /**
- * The newest value of one figure of each unit of a model at one speed setting.
+ * One figure in the newest reading of each unit of a model at one speed setting.
  *
  * @param values one a unit, at least one, in rising order
  */

@@ -13,7 +13,11 @@ import turnsheet.core.measure.FigureName;
 import turnsheet.shop.ModelId;
 import turnsheet.shop.SpeedSettingId;
 
-/** What is typical for the units of a model, in one statement. */
+/**
+ * What is typical for the units of a model, in one statement: the newest reading of each unit at
+ * each speed setting. A unit counts for the figures that this reading has. The newest captures are
+ * found first, because the figures are many.
+ */
 @Component
 public final class Populations {
 
@@ -25,12 +29,12 @@ public final class Populations {
 
   /** All that a model has, speed settings in the order of the selector, figures in their own. */
   public List<Population> ofModel(ModelId model) {
-    return where("u.model_id = ?", model.value());
+    return where("t.model_id = ?", model.value());
   }
 
   /** Those of one speed setting. */
   public List<Population> ofSetting(SpeedSettingId setting) {
-    return where("c.speed_setting_id = ?", setting.value());
+    return where("t.id = ?", setting.value());
   }
 
   /** The one of a figure; empty where no unit has it. */
@@ -42,18 +46,19 @@ public final class Populations {
     Map<UUID, Map<FigureName, List<Double>>> found = new LinkedHashMap<>();
     jdbc.sql(
             """
-            select newest.speed_setting_id, newest.figure, newest.amount from (
-              select c.speed_setting_id, f.figure, f.amount, row_number() over (
-                  partition by v.unit_id, c.speed_setting_id, f.figure
+            select newest.speed_setting_id, f.figure, f.amount from (
+              select c.id, c.speed_setting_id, row_number() over (
+                  partition by v.unit_id, c.speed_setting_id
                   order by c.received_at desc, c.id desc) as age
-              from unit u join visit v on v.unit_id = u.id join capture c on c.visit_id = v.id
-                join reading r on r.capture_id = c.id and c.state = 'measured' and %s
-                join reading_figure f on f.reading_id = r.id
-              where f.amount is not null and %s) newest
+              from capture c join visit v on v.id = c.visit_id
+              where c.state = 'measured' and c.speed_setting_id in
+                (select t.id from speed_setting t where %s)) newest
               join speed_setting s on s.id = newest.speed_setting_id
-            where newest.age = 1 order by s.position
+              join reading r on r.capture_id = newest.id and %s
+              join reading_figure f on f.reading_id = r.id
+            where newest.age = 1 and f.amount is not null order by s.position
             """
-                .formatted(Readings.NEWEST_OF_ITS_CAPTURE, condition))
+                .formatted(condition, Readings.NEWEST_OF_ITS_CAPTURE))
         .param(id)
         .query(
             row -> {

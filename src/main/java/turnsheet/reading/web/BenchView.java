@@ -19,7 +19,7 @@ import turnsheet.shop.Visits;
 import turnsheet.web.Times;
 import turnsheet.web.Wording;
 
-/** Gathers what the bench page shows: six statements, however full the bench is. */
+/** Gathers what the bench page shows: seven statements, however full the bench is. */
 @Component
 class BenchView {
 
