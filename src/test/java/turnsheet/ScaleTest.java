@@ -29,7 +29,7 @@ import turnsheet.testing.StatementCount;
 @AsTechnician
 class ScaleTest {
 
-  private static final int TURNS = 9;
+  private static final int TURNS = 5;
 
   @Autowired MockMvc mvc;
   @Autowired JdbcTemplate jdbc;
