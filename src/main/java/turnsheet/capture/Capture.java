@@ -9,6 +9,7 @@ import turnsheet.job.JobId;
 /**
  * One uploaded recording.
  *
+ * @param fit how the service came by the key's speed setting; null where the bench said it
  * @param fileName as the bench calls it, without folders
  * @param receivedBy name of the account that brought it
  * @param looked what was recognised; null where that failed
@@ -19,6 +20,7 @@ import turnsheet.job.JobId;
 public record Capture(
     CaptureId id,
     CaptureKey key,
+    @Nullable SettingFit fit,
     String fileName,
     StoredBytes bytes,
     Instant receivedAt,

@@ -43,6 +43,11 @@ public record CaptureKey(
     this(visit, setting, condition, instrument, medium, null);
   }
 
+  /** The same of another setting and condition. */
+  CaptureKey at(SpeedSettingId otherSetting, String otherCondition) {
+    return new CaptureKey(visit, otherSetting, otherCondition, instrument, medium, toneMethod);
+  }
+
   /** The same with another method. */
   public CaptureKey by(@Nullable ToneMethod method) {
     return new CaptureKey(visit, setting, condition, instrument, medium, method);

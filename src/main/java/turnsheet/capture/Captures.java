@@ -77,8 +77,9 @@ public class Captures {
             """
             insert into capture (id, visit_id, speed_setting_id, bench_condition, instrument_id,
               medium_id, file_name, sha256, byte_length, received_at, received_by, state,
-              recognition, refusal_code, refusal_message, tone_method)
-            values (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)
+              recognition, refusal_code, refusal_message, tone_method,
+              setting_proposal)
+            values (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)
             """)
         .param(1, capture.id().value())
         .param(2, capture.key().visit().value())
@@ -96,7 +97,21 @@ public class Captures {
         .param(14, valueOf(capture.refusal(), Rejection::code), Types.VARCHAR)
         .param(15, valueOf(capture.refusal(), Captures::sentence), Types.VARCHAR)
         .param(16, valueOf(capture.key().toneMethod(), ToneMethod::word), Types.VARCHAR)
+        .param(17, valueOf(capture.fit(), SettingFit::word), Types.VARCHAR)
         .update();
+  }
+
+  /** The bench says at which setting and under which condition the recording was made. */
+  boolean place(CaptureId id, SpeedSettingId setting, String condition) {
+    return jdbc.sql(
+                "update capture set speed_setting_id = :setting, bench_condition = :condition,"
+                    + " setting_proposal = null"
+                    + " where id = :id and state in ('recognised', 'refused', 'failed')")
+            .param("setting", setting.value())
+            .param("condition", condition)
+            .param("id", id.value())
+            .update()
+        == 1;
   }
 
   /** Corrects how the tone came onto what was played; no figure depends on it. */
@@ -106,6 +121,13 @@ public class Captures {
             .param(2, id.value())
             .update()
         == 1;
+  }
+
+  /** Keeps what another look has shown. */
+  boolean noted(CaptureId id, Looker.Result result) {
+    return result instanceof Looker.Seen seen
+        ? looked(id, seen.looked())
+        : lookRefused(id, ((Looker.Unusable) result).why());
   }
 
   /** Another look, with other options, has shown what the file holds. */
@@ -128,7 +150,7 @@ public class Captures {
   boolean queue(CaptureId id, Looked looked, CaptureChoices choices, JobId job) {
     return jdbc.sql(
                 "update capture set state = 'queued', recognition = :looked, choices = :choices,"
-                    + " main_channel = :channel, job_id = :job,"
+                    + " main_channel = :channel, job_id = :job, setting_proposal = null,"
                     + " tone_method = case when :tone then tone_method end,"
                     + " refusal_code = null, refusal_message = null where id = :id"
                     + " and state in ('recognised', 'refused', 'measured', 'failed')")
@@ -206,9 +228,11 @@ public class Captures {
 
   private static Capture capture(ResultSet row, int number) throws SQLException {
     String code = row.getString("refusal_code");
+    String fit = row.getString("setting_proposal");
     return new Capture(
         new CaptureId(row.getObject("id", UUID.class)),
         key(row),
+        fit == null ? null : SettingFit.ofWord(fit),
         row.getString("file_name"),
         new StoredBytes(row.getString("sha256"), row.getLong("byte_length")),
         row.getObject("received_at", OffsetDateTime.class).toInstant(),

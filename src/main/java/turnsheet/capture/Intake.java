@@ -1,18 +1,16 @@
 package turnsheet.capture;
 
-import java.io.IOException;
 import java.io.InputStream;
 import java.time.Clock;
 import java.time.temporal.ChronoUnit;
-import java.util.UUID;
 import org.jspecify.annotations.Nullable;
-import org.slf4j.Logger;
-import org.slf4j.LoggerFactory;
 import org.springframework.stereotype.Service;
 import org.springframework.transaction.support.TransactionTemplate;
 import turnsheet.core.format.api.ReadOptions;
 import turnsheet.core.signal.Rejection;
 import turnsheet.job.Jobs;
+import turnsheet.shop.Visit;
+import turnsheet.shop.VisitSummary;
 import turnsheet.web.NotFoundException;
 import turnsheet.web.RefusedRequestException;
 
@@ -23,11 +21,10 @@ public class Intake {
   /** Name of the job that measures the capture which is its subject. */
   public static final String MEASURE = "measure";
 
-  private static final Logger log = LoggerFactory.getLogger(Intake.class);
-
   private final CaptureStore store;
   private final Captures captures;
   private final Looker looker;
+  private final SettingFinder finder;
   private final Shelf shelf;
   private final MeasuredChannels channels;
   private final Jobs jobs;
@@ -38,6 +35,7 @@ public class Intake {
       CaptureStore store,
       Captures captures,
       Looker looker,
+      SettingFinder finder,
       Shelf shelf,
       MeasuredChannels channels,
       Jobs jobs,
@@ -46,6 +44,7 @@ public class Intake {
     this.store = store;
     this.captures = captures;
     this.looker = looker;
+    this.finder = finder;
     this.shelf = shelf;
     this.channels = channels;
     this.jobs = jobs;
@@ -67,13 +66,47 @@ public class Intake {
   public Capture receive(CaptureKey key, String fileName, String receivedBy, InputStream in)
       throws BrokenUploadException, StoreException {
     Surroundings around = shelf.of(key);
-    refuseClosed(around);
+    around.requireOpen();
     String name = FileName.checked(fileName);
     StoredBytes bytes = store.receive(in);
-    Looker.Result result = look(bytes, ReadOptions.none(), around);
-    Capture received = received(key, name, receivedBy, bytes, result);
-    captures.add(received);
-    return received;
+    return add(key, null, name, receivedBy, bytes, looker.look(bytes, ReadOptions.none(), around));
+  }
+
+  /**
+   * Stores a file whose speed setting or condition may be left open. The setting is then found by
+   * the rate of the recording, the condition by whether work is noted on the visit; both are
+   * proposals until the capture is placed or confirmed.
+   *
+   * @throws RefusedRequestException also if the unit's model has no speed setting
+   */
+  public Capture receive(Arrival arrival, String fileName, String receivedBy, InputStream in)
+      throws BrokenUploadException, StoreException {
+    VisitSummary visit = shelf.visit(arrival.visit());
+    CaptureKey any = arrival.key(shelf.settings(visit).get(0).id(), usualCondition(visit.visit()));
+    if (arrival.setting() != null) {
+      return receive(any, fileName, receivedBy, in);
+    }
+    Surroundings around = shelf.of(any);
+    around.requireOpen();
+    String name = FileName.checked(fileName);
+    StoredBytes bytes = store.receive(in);
+    // told by its shape alone: the rates of no setting come before those of another
+    Looker.Result first = looker.look(bytes, ReadOptions.none(), null, null);
+    SettingFinder.Found found =
+        finder.find(
+            bytes,
+            first instanceof Looker.Seen seen ? seen.looked() : null,
+            name,
+            around.model(),
+            around.medium());
+    CaptureKey key = any.at(found.setting().id(), any.condition());
+    Looker.Result result = looker.look(bytes, ReadOptions.none(), shelf.of(key));
+    return add(key, found.fit(), name, receivedBy, bytes, result);
+  }
+
+  /** As received until work is noted on the visit, after repair from then on. */
+  public static String usualCondition(Visit visit) {
+    return visit.notes().isWorkNoted() ? CaptureKey.AFTER_REPAIR : CaptureKey.AS_RECEIVED;
   }
 
   /**
@@ -83,8 +116,8 @@ public class Intake {
    */
   public Capture lookAgain(CaptureId id, ReadOptions options) {
     Capture capture = captures.find(id).orElseThrow(() -> new NotFoundException("capture"));
-    Looker.Result result = look(capture.bytes(), options, shelf.of(capture.key()));
-    if (!note(id, result)) {
+    Looker.Result result = looker.look(capture.bytes(), options, shelf.of(capture.key()));
+    if (!captures.noted(id, result)) {
       throw busy();
     }
     return captures.find(id).orElseThrow();
@@ -104,12 +137,18 @@ public class Intake {
     if (capture.state() == CaptureState.QUEUED) {
       throw busy();
     }
+    SettingFit fit = capture.fit();
+    if (fit != null && !fit.isProposal()) {
+      throw new RefusedRequestException(
+          "settingUnsaid",
+          "The rate of this recording does not tell its speed setting: say at which it was made.");
+    }
     Surroundings around = shelf.of(capture.key());
     Looked looked = capture.looked();
     if (looked == null || !looked.options().equals(wish.options())) {
-      Looker.Result result = look(capture.bytes(), wish.options(), around);
+      Looker.Result result = looker.look(capture.bytes(), wish.options(), around);
       if (result instanceof Looker.Unusable unusable) {
-        if (!note(id, result)) {
+        if (!captures.noted(id, result)) {
           throw new RefusedRequestException(unusable.why().code(), unusable.why().message());
         }
         return captures.find(id).orElseThrow();
@@ -120,23 +159,6 @@ public class Intake {
     if (!chosen(capture, looked, choices)) {
       order(id, looked, choices);
     }
-    return captures.find(id).orElseThrow();
-  }
-
-  /**
-   * Corrects how the tone came onto what was played.
-   *
-   * @param method null where it is not known
-   * @throws RefusedRequestException if the visit is closed, or the capture is not of a tone
-   */
-  public Capture nameMethod(CaptureId id, @Nullable ToneMethod method) {
-    Capture capture = captures.find(id).orElseThrow(() -> new NotFoundException("capture"));
-    refuseClosed(shelf.of(capture.key()));
-    if (method != null && !capture.mayBeTone()) {
-      throw new RefusedRequestException(
-          "notATone", "Only a played tone was recorded here or elsewhere: this is none.");
-    }
-    captures.name(id, method);
     return captures.find(id).orElseThrow();
   }
 
@@ -169,39 +191,13 @@ public class Intake {
         });
   }
 
-  private boolean note(CaptureId id, Looker.Result result) {
-    return result instanceof Looker.Seen seen
-        ? captures.looked(id, seen.looked())
-        : captures.lookRefused(id, ((Looker.Unusable) result).why());
-  }
-
-  /** A fault of a reader must not lose the upload: it is noted as a refusal with a reference. */
-  private Looker.Result look(StoredBytes bytes, ReadOptions options, Surroundings around) {
-    try {
-      return looker.look(bytes, options, around.toneHz(), around.pulsesPerSecond());
-    } catch (IOException | RuntimeException e) {
-      String reference = UUID.randomUUID().toString().substring(0, 8);
-      log.error("Reference {}: cannot look at {}", reference, bytes.sha256(), e);
-      return new Looker.Unusable(
-          new Rejection(
-              "readerFailed",
-              "The service failed while reading this file: this is a fault of the service, not of"
-                  + " the recording. Quote the reference "
-                  + reference
-                  + "."));
-    }
-  }
-
-  private static void refuseClosed(Surroundings around) {
-    if (!around.visit().visit().isOpen()) {
-      throw new RefusedRequestException(
-          "visitClosed",
-          "This visit is closed: take it up again before adding or changing captures.");
-    }
-  }
-
-  private Capture received(
-      CaptureKey key, String name, String receivedBy, StoredBytes bytes, Looker.Result result) {
+  private Capture add(
+      CaptureKey key,
+      @Nullable SettingFit fit,
+      String name,
+      String receivedBy,
+      StoredBytes bytes,
+      Looker.Result result) {
     @Nullable Looked looked = result instanceof Looker.Seen seen ? seen.looked() : null;
     ToneMethod method = key.toneMethod();
     if (looked == null || !looked.mayBeTone()) {
@@ -210,21 +206,25 @@ public class Intake {
       method = ToneMethod.REPLAY; // a test tape or record was made elsewhere
     }
     @Nullable Rejection why = result instanceof Looker.Unusable unusable ? unusable.why() : null;
-    return new Capture(
-        CaptureId.next(),
-        key.by(method),
-        name,
-        bytes,
-        clock.instant().truncatedTo(ChronoUnit.MICROS),
-        receivedBy,
-        looked == null ? CaptureState.REFUSED : CaptureState.RECOGNISED,
-        looked,
-        null,
-        why,
-        null);
+    Capture received =
+        new Capture(
+            CaptureId.next(),
+            key.by(method),
+            fit,
+            name,
+            bytes,
+            clock.instant().truncatedTo(ChronoUnit.MICROS),
+            receivedBy,
+            looked == null ? CaptureState.REFUSED : CaptureState.RECOGNISED,
+            looked,
+            null,
+            why,
+            null);
+    captures.add(received);
+    return received;
   }
 
-  private static RefusedRequestException busy() {
+  static RefusedRequestException busy() {
     return new RefusedRequestException(
         "busy", "This capture is being measured or has been: wait for it, then look at it again.");
   }

@@ -2,7 +2,10 @@ package turnsheet.capture;
 
 import java.io.IOException;
 import java.util.Arrays;
+import java.util.UUID;
 import org.jspecify.annotations.Nullable;
+import org.slf4j.Logger;
+import org.slf4j.LoggerFactory;
 import org.springframework.stereotype.Component;
 import turnsheet.core.format.CaptureFormats;
 import turnsheet.core.format.api.ByteSource;
@@ -18,6 +21,8 @@ import turnsheet.core.signal.SampleReader;
 /** Looks at the head and the first seconds of stored bytes. */
 @Component
 class Looker {
+
+  private static final Logger log = LoggerFactory.getLogger(Looker.class);
 
   /** Long enough for a slow wheel, short enough to be read while a page waits. */
   private static final double SECONDS = 2;
@@ -39,13 +44,38 @@ class Looker {
 
   record Unusable(Rejection why) implements Result {}
 
+  /** Looks, with the rates that the surroundings name. */
+  Result look(StoredBytes bytes, ReadOptions options, Surroundings around) {
+    return look(bytes, options, around.toneHz(), around.pulsesPerSecond());
+  }
+
   /**
-   * Looks.
+   * Looks. A fault of a reader must not lose the upload: it is noted as a refusal with a reference.
    *
    * @param toneHz nominal tone, where known
    * @param pulsesPerSecond nominal tachometer rate, where known
    */
   Result look(
+      StoredBytes bytes,
+      ReadOptions options,
+      @Nullable Double toneHz,
+      @Nullable Double pulsesPerSecond) {
+    try {
+      return lookInto(bytes, options, toneHz, pulsesPerSecond);
+    } catch (IOException | RuntimeException e) {
+      String reference = UUID.randomUUID().toString().substring(0, 8);
+      log.error("Reference {}: cannot look at {}", reference, bytes.sha256(), e);
+      return new Unusable(
+          new Rejection(
+              "readerFailed",
+              "The service failed while reading this file: this is a fault of the service, not of"
+                  + " the recording. Quote the reference "
+                  + reference
+                  + "."));
+    }
+  }
+
+  private Result lookInto(
       StoredBytes bytes,
       ReadOptions options,
       @Nullable Double toneHz,

@@ -1,5 +1,6 @@
 package turnsheet.capture;
 
+import java.util.List;
 import org.jspecify.annotations.Nullable;
 import org.springframework.stereotype.Component;
 import turnsheet.shop.BenchInstrument;
@@ -11,6 +12,7 @@ import turnsheet.shop.Media;
 import turnsheet.shop.MediumId;
 import turnsheet.shop.ReferenceMedium;
 import turnsheet.shop.SpeedSetting;
+import turnsheet.shop.VisitId;
 import turnsheet.shop.VisitSummary;
 import turnsheet.shop.Visits;
 import turnsheet.web.NotFoundException;
@@ -39,8 +41,7 @@ class Shelf {
    * @throws RefusedRequestException if the speed setting is not one of the unit's model
    */
   Surroundings of(CaptureKey key) {
-    VisitSummary visit =
-        visits.summary(key.visit()).orElseThrow(() -> new NotFoundException("visit"));
+    VisitSummary visit = visit(key.visit());
     MachineModel model =
         models.find(visit.modelId()).orElseThrow(() -> new NotFoundException("model"));
     SpeedSetting setting =
@@ -54,6 +55,31 @@ class Shelf {
                             + " model."));
     return new Surroundings(
         visit, model, setting, instrument(key.instrument()), medium(key.medium()));
+  }
+
+  /**
+   * The visit that something comes in for.
+   *
+   * @throws NotFoundException if there is none
+   */
+  VisitSummary visit(VisitId id) {
+    return visits.summary(id).orElseThrow(() -> new NotFoundException("visit"));
+  }
+
+  /**
+   * The speed settings that a recording of a visit can have been made at.
+   *
+   * @throws RefusedRequestException if the unit's model has none
+   */
+  List<SpeedSetting> settings(VisitSummary visit) {
+    List<SpeedSetting> settings =
+        models.find(visit.modelId()).orElseThrow(() -> new NotFoundException("model")).settings();
+    if (settings.isEmpty()) {
+      throw new RefusedRequestException(
+          "noSettings",
+          "The model of this unit has no speed setting yet: enter one, then upload again.");
+    }
+    return settings;
   }
 
   private @Nullable BenchInstrument instrument(@Nullable InstrumentId id) {

@@ -6,6 +6,7 @@ import turnsheet.shop.MachineModel;
 import turnsheet.shop.ReferenceMedium;
 import turnsheet.shop.SpeedSetting;
 import turnsheet.shop.VisitSummary;
+import turnsheet.web.RefusedRequestException;
 
 /** What the shop knows about the things that a {@link CaptureKey} names. */
 public record Surroundings(
@@ -14,6 +15,19 @@ public record Surroundings(
     SpeedSetting setting,
     @Nullable BenchInstrument instrument,
     @Nullable ReferenceMedium medium) {
+
+  /**
+   * Captures come and change only while the unit is here.
+   *
+   * @throws RefusedRequestException if the visit is closed
+   */
+  void requireOpen() {
+    if (!visit.visit().isOpen()) {
+      throw new RefusedRequestException(
+          "visitClosed",
+          "This visit is closed: take it up again before adding or changing captures.");
+    }
+  }
 
   /** Nominal tone: of the medium if it carries one, else of the setting. */
   @Nullable Double toneHz() {

@@ -5,6 +5,7 @@ import java.util.Map;
 import org.jspecify.annotations.Nullable;
 import turnsheet.capture.CaptureId;
 import turnsheet.capture.CaptureState;
+import turnsheet.capture.SettingFit;
 import turnsheet.capture.ToneMethod;
 import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.FigureName;
@@ -14,6 +15,7 @@ import turnsheet.shop.VisitId;
 /**
  * How a capture stands, with the figures of the reading that stands for it.
  *
+ * @param fit how the speed setting was proposed; null once the bench has said or confirmed it
  * @param toneMethod how a tone came onto what was played; null for others and where not said
  * @param refusal sentence of a capture that is refused or failed; null otherwise
  * @param progress 0 to 1, of the job that measures it; 0 where none runs
@@ -29,6 +31,7 @@ public record CaptureResult(
     String fileName,
     Instant receivedAt,
     CaptureState state,
+    @Nullable SettingFit fit,
     @Nullable ToneMethod toneMethod,
     @Nullable String refusal,
     double progress,
@@ -54,6 +57,7 @@ public record CaptureResult(
         fileName,
         receivedAt,
         state,
+        fit,
         toneMethod,
         refusal,
         progress,

@@ -16,6 +16,7 @@ import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.stereotype.Component;
 import turnsheet.capture.CaptureId;
 import turnsheet.capture.CaptureState;
+import turnsheet.capture.SettingFit;
 import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.FigureName;
 import turnsheet.shop.ServiceLimit;
@@ -145,11 +146,17 @@ public final class CaptureResults {
         row.getString("file_name"),
         row.getObject("received_at", OffsetDateTime.class).toInstant(),
         CaptureState.valueOf(row.getString("state").toUpperCase(Locale.ROOT)),
+        fit(row),
         CapturePlaces.method(row),
         text(row, "refusal_message"),
         row.getDouble("progress"),
         reading == null ? null : new ReadingId(reading),
         Map.of());
+  }
+
+  private static @Nullable SettingFit fit(ResultSet row) throws SQLException {
+    String word = row.getString("setting_proposal");
+    return word == null ? null : SettingFit.valueOf(word.toUpperCase(Locale.ROOT));
   }
 
   private static @Nullable String text(ResultSet row, String column) throws SQLException {

@@ -1,31 +1,40 @@
 package turnsheet.shop;
 
 import java.time.Instant;
+import java.util.List;
 import org.jspecify.annotations.Nullable;
 
 /**
  * One stay of a unit on the bench.
  *
  * @param closedAt when it was handed back; null while it stays
- * @param complaint what the customer says; may be empty
- * @param workDone what the bench did and which parts it fitted; may be empty
  */
 public record Visit(
-    VisitId id,
-    UnitId unitId,
-    Instant openedAt,
-    @Nullable Instant closedAt,
-    String complaint,
-    String workDone) {
-
-  public static final int TEXT_LENGTH = 4000;
+    VisitId id, UnitId unitId, Instant openedAt, @Nullable Instant closedAt, VisitNotes notes) {
 
   public Visit {
-    Require.atMost("complaint", complaint, TEXT_LENGTH);
-    Require.atMost("work done", workDone, TEXT_LENGTH);
     if (closedAt != null && closedAt.isBefore(openedAt)) {
       throw new IllegalArgumentException("opened " + openedAt + ", closed " + closedAt);
     }
+  }
+
+  /** A visit without parts and with its sensor as it was. */
+  public Visit(
+      VisitId id,
+      UnitId unitId,
+      Instant openedAt,
+      @Nullable Instant closedAt,
+      String complaint,
+      String workDone) {
+    this(id, unitId, openedAt, closedAt, new VisitNotes(complaint, workDone, List.of(), false, ""));
+  }
+
+  public String complaint() {
+    return notes.complaint();
+  }
+
+  public String workDone() {
+    return notes.workDone();
   }
 
   public boolean isOpen() {
@@ -38,11 +47,11 @@ public record Visit(
    * @throws RefusedChangeException {@code visitClosed}: what was handed back is not rewritten
    *     unawares
    */
-  public Visit recordWork(String complaintNow, String workDoneNow) {
+  public Visit record(VisitNotes now) {
     if (!isOpen()) {
       throw new RefusedChangeException("visitClosed");
     }
-    return new Visit(id, unitId, openedAt, null, complaintNow, workDoneNow);
+    return new Visit(id, unitId, openedAt, null, now);
   }
 
   /**
@@ -54,7 +63,7 @@ public record Visit(
     if (!isOpen()) {
       throw new RefusedChangeException("visitClosed");
     }
-    return new Visit(id, unitId, openedAt, at, complaint, workDone);
+    return new Visit(id, unitId, openedAt, at, notes);
   }
 
   /**
@@ -66,6 +75,10 @@ public record Visit(
     if (isOpen()) {
       throw new RefusedChangeException("visitOpen");
     }
-    return new Visit(id, unitId, openedAt, null, complaint, workDone);
+    return new Visit(id, unitId, openedAt, null, notes);
+  }
+
+  Visit withParts(List<FittedPart> fitted) {
+    return new Visit(id, unitId, openedAt, closedAt, notes.withParts(fitted));
   }
 }

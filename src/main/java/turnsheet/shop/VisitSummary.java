@@ -7,4 +7,9 @@ public record VisitSummary(
     ModelId modelId,
     String modelName,
     CustomerId customerId,
-    String customerName) {}
+    String customerName) {
+
+  VisitSummary withVisit(Visit now) {
+    return new VisitSummary(now, serialNumber, modelId, modelName, customerId, customerName);
+  }
+}

@@ -6,8 +6,10 @@ import java.sql.Types;
 import java.time.Clock;
 import java.time.Instant;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.function.UnaryOperator;
+import org.springframework.dao.DataIntegrityViolationException;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.stereotype.Component;
 import org.springframework.transaction.support.TransactionOperations;
@@ -33,11 +35,13 @@ public final class Visits {
 
   private final JdbcClient jdbc;
   private final TransactionOperations transactions;
+  private final FittedParts parts;
   private final Clock clock;
 
   public Visits(JdbcClient jdbc, TransactionOperations transactions, Clock clock) {
     this.jdbc = jdbc;
     this.transactions = transactions;
+    this.parts = new FittedParts(jdbc);
     this.clock = clock;
   }
 
@@ -45,7 +49,8 @@ public final class Visits {
     return jdbc.sql("select * from visit where id = ?")
         .param(id.value())
         .query(Visits::visit)
-        .optional();
+        .optional()
+        .map(this::whole);
   }
 
   /** The visit with the unit, model and customer it belongs to. */
@@ -53,30 +58,39 @@ public final class Visits {
     return jdbc.sql(LISTING.select() + LISTING.from() + " where v.id = ?")
         .param(id.value())
         .query(Visits::summary)
-        .optional();
+        .optional()
+        .map(s -> s.withVisit(whole(s.visit())));
   }
 
   /** All visits of a unit, newest first. */
   public List<Visit> ofUnit(UnitId unit) {
-    return jdbc.sql("select * from visit where unit_id = ? order by opened_at desc, id")
-        .param(unit.value())
-        .query(Visits::visit)
-        .list();
+    List<Visit> visits =
+        jdbc.sql("select * from visit where unit_id = ? order by opened_at desc, id")
+            .param(unit.value())
+            .query(Visits::visit)
+            .list();
+    Map<VisitId, List<FittedPart>> fitted = parts.of(visits);
+    return visits.stream().map(v -> v.withParts(fitted.getOrDefault(v.id(), List.of()))).toList();
+  }
+
+  /** The visit that a unit is on the bench for. */
+  public Optional<Visit> openOf(UnitId unit) {
+    return ofUnit(unit).stream().filter(Visit::isOpen).findFirst();
   }
 
   /** A page of all visits, newest first; words are looked for in serial number, model, customer. */
   public PageOf<VisitSummary> page(PageQuery query) {
-    return query.run(jdbc, LISTING, Visits::summary);
+    return whole(query.run(jdbc, LISTING, Visits::summary));
   }
 
   /** A page of the visits of one unit, newest first. */
   public PageOf<VisitSummary> page(UnitId unit, PageQuery query) {
-    return query.run(jdbc, LISTING.where("v.unit_id = ?", unit.value()), Visits::summary);
+    return whole(query.run(jdbc, LISTING.where("v.unit_id = ?", unit.value()), Visits::summary));
   }
 
   /** A page of the visits that are still open, newest first. */
   public PageOf<VisitSummary> open(PageQuery query) {
-    return query.run(jdbc, LISTING.where("v.closed_at is null"), Visits::summary);
+    return whole(query.run(jdbc, LISTING.where("v.closed_at is null"), Visits::summary));
   }
 
   /**
@@ -102,9 +116,56 @@ public final class Visits {
         });
   }
 
-  /** Brings complaint and work of an open visit up to date. */
+  /** Brings complaint and work of an open visit up to date; parts and sensor stay as they are. */
   public Optional<Visit> recordWork(VisitId id, String complaint, String workDone) {
-    return change(id, visit -> visit.recordWork(complaint, workDone));
+    return change(
+        id,
+        visit ->
+            visit.record(
+                new VisitNotes(
+                    complaint,
+                    workDone,
+                    visit.notes().parts(),
+                    visit.notes().sensorReplaced(),
+                    visit.notes().sensorNote())));
+  }
+
+  /** Brings all notes of an open visit up to date. */
+  public Optional<Visit> record(VisitId id, VisitNotes notes) {
+    return change(id, visit -> visit.record(notes));
+  }
+
+  /**
+   * Takes a visit away that was opened by mistake.
+   *
+   * @return whether it was there
+   * @throws RefusedChangeException {@code visitHasCaptures}, or {@code visitInUse} where a link or
+   *     a sheet refers to it
+   */
+  public boolean remove(VisitId id) {
+    return Boolean.TRUE.equals(
+        transactions.execute(
+            status -> {
+              find(id).ifPresent(visit -> lockUnit(visit.unitId()));
+              if (captures(id) > 0) {
+                throw new RefusedChangeException("visitHasCaptures");
+              }
+              try {
+                parts.remove(id);
+                jdbc.sql("delete from plate_photo where visit_id = ?").param(id.value()).update();
+                return jdbc.sql("delete from visit where id = ?").param(id.value()).update() > 0;
+              } catch (DataIntegrityViolationException e) {
+                throw new RefusedChangeException("visitInUse");
+              }
+            }));
+  }
+
+  /** How many captures a visit has. */
+  public int captures(VisitId id) {
+    return jdbc.sql("select count(*) from capture where visit_id = ?")
+        .param(id.value())
+        .query(Integer.class)
+        .single();
   }
 
   /** Hands the unit back now. */
@@ -151,13 +212,32 @@ public final class Visits {
 
   private Visit write(Visit visit) {
     Instant closedAt = visit.closedAt();
-    jdbc.sql("update visit set closed_at = ?, complaint = ?, work_done = ? where id = ?")
+    VisitNotes notes = visit.notes();
+    jdbc.sql(
+            """
+            update visit set closed_at = ?, complaint = ?, work_done = ?, sensor_replaced = ?,
+              sensor_note = ?
+            where id = ?
+            """)
         .param(1, closedAt == null ? null : Columns.time(closedAt), Types.TIMESTAMP_WITH_TIMEZONE)
-        .param(2, visit.complaint())
-        .param(3, visit.workDone())
-        .param(4, visit.id().value())
+        .param(2, notes.complaint())
+        .param(3, notes.workDone())
+        .param(4, notes.sensorReplaced())
+        .param(5, notes.sensorNote())
+        .param(6, visit.id().value())
         .update();
+    parts.put(visit.id(), notes.parts());
     return visit;
+  }
+
+  private Visit whole(Visit visit) {
+    return visit.withParts(parts.of(List.of(visit)).getOrDefault(visit.id(), List.of()));
+  }
+
+  private PageOf<VisitSummary> whole(PageOf<VisitSummary> page) {
+    var fitted = parts.of(page.items().stream().map(VisitSummary::visit).toList());
+    return page.map(
+        s -> s.withVisit(s.visit().withParts(fitted.getOrDefault(s.visit().id(), List.of()))));
   }
 
   private static VisitSummary summary(ResultSet row, int number) throws SQLException {
@@ -176,7 +256,11 @@ public final class Visits {
         new UnitId(Columns.uuid(row, "unit_id")),
         Columns.instant(row, "opened_at"),
         Columns.instantOrNull(row, "closed_at"),
-        row.getString("complaint"),
-        row.getString("work_done"));
+        new VisitNotes(
+            row.getString("complaint"),
+            row.getString("work_done"),
+            List.of(),
+            row.getBoolean("sensor_replaced"),
+            row.getString("sensor_note")));
   }
 }

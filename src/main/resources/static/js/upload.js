@@ -1,5 +1,7 @@
 // Sends the files of an upload form one after the other, straight into the store, with progress.
-for (const form of document.querySelectorAll("form.upload")) {
+import { sendFile } from "./send-file.js";
+
+for (const form of document.querySelectorAll("form.upload:not(.zone)")) {
   const input = form.querySelector("input[type=file]");
   const button = form.querySelector("button");
   const shown = form.querySelector(".upload-progress");
@@ -47,45 +49,16 @@ for (const form of document.querySelectorAll("form.upload")) {
     }
   }
 
-  function put(file, said) {
-    const query = new URLSearchParams({ fileName: file.name });
-    for (const name of ["speedSettingId", "condition", "instrumentId", "mediumId", "toneMethod"]) {
-      if (said.get(name)) {
-        query.set(name, said.get(name));
-      }
-    }
+  async function put(file, said) {
     bar.hidden = false;
     bar.value = 0;
     words.className = "";
-    return new Promise((stored, failed) => {
-      const request = new XMLHttpRequest();
-      request.open("POST", `${form.action}?${query}`);
-      request.setRequestHeader("Content-Type", "application/octet-stream");
-      request.setRequestHeader("Accept", "application/json");
-      request.setRequestHeader("X-CSRF-TOKEN", said.get("_csrf") ?? "");
-      request.upload.onprogress = (event) => {
-        bar.value = event.total > 0 ? event.loaded / event.total : 0;
-        const percent = Math.round(100 * bar.value);
-        words.textContent =
-          percent < 100 ? `${shown.dataset.sending} ${file.name}: ${percent} %` : `${shown.dataset.storing} ${file.name}`;
-      };
-      request.onload = () => {
-        if (request.status === 201) {
-          stored(JSON.parse(request.responseText).page);
-        } else {
-          failed(new Error(sentence(request.responseText)));
-        }
-      };
-      request.onerror = () => failed(new Error(""));
-      request.send(file);
+    const answer = await sendFile(form.action, said, file, (share) => {
+      bar.value = share;
+      const percent = Math.round(100 * share);
+      words.textContent =
+        percent < 100 ? `${shown.dataset.sending} ${file.name}: ${percent} %` : `${shown.dataset.storing} ${file.name}`;
     });
-  }
-
-  function sentence(body) {
-    try {
-      return JSON.parse(body).detail ?? "";
-    } catch {
-      return "";
-    }
+    return answer.page;
   }
 }

@@ -63,6 +63,7 @@ class IntakeTest {
   private final CaptureKey key;
   private final Set<Integer> measuredChannels = new HashSet<>();
   private Intake intake;
+  private Corrections corrections;
 
   IntakeTest(Database database) {
     database.empty();
@@ -87,12 +88,16 @@ class IntakeTest {
   @BeforeEach
   void start() throws IOException {
     CaptureStore store = new CaptureStore(data, new IncomingFolder(data, clock));
+    Looker looker = new Looker(store, TestFormats.formats());
+    Shelf shelf = new Shelf(visits, models, instruments, media);
+    corrections = new Corrections(captures, looker, shelf);
     intake =
         new Intake(
             store,
             captures,
-            new Looker(store, TestFormats.formats()),
-            new Shelf(visits, models, instruments, media),
+            looker,
+            new SettingFinder(store, TestFormats.formats()),
+            shelf,
             (capture, settings) -> measuredChannels.contains(settings.channel()),
             jobs,
             database.transactions(),
@@ -107,7 +112,7 @@ class IntakeTest {
     Capture capture = intake.receive(played, "a.wav", "bench", bytes("tone"));
     assertThat(capture.key().toneMethod()).isEqualTo(ToneMethod.REPLAY);
     assertThat(captures.find(capture.id())).contains(capture);
-    assertThat(intake.nameMethod(capture.id(), null).key().toneMethod()).isNull();
+    assertThat(corrections.nameMethod(capture.id(), null).key().toneMethod()).isNull();
     assertThat(receive("tone").key().toneMethod()).isNull();
   }
 

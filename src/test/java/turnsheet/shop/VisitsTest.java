@@ -5,6 +5,7 @@ import static org.assertj.core.api.Assertions.assertThatThrownBy;
 
 import java.time.Clock;
 import java.time.Duration;
+import java.util.List;
 import java.util.concurrent.Callable;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Executors;
@@ -54,6 +55,67 @@ class VisitsTest {
     visits.reopen(visit.id());
     assertRefused("visitOpen", () -> visits.reopen(visit.id()));
     assertThat(visits.recordWork(visit.id(), "", "more")).map(Visit::workDone).contains("more");
+  }
+
+  @Test
+  void keepsPartsAndTheSensorWithTheVisit() {
+    Unit unit = shop.unit("1001");
+    Visit visit = visits.open(unit.id(), "hums");
+    VisitNotes notes =
+        new VisitNotes(
+            "hums",
+            "",
+            List.of(new FittedPart("drive belt 40 mm", 2), new FittedPart("grease", null)),
+            true,
+            "Hall sensor instead of the coil");
+    assertThat(visits.record(visit.id(), notes)).map(Visit::notes).contains(notes);
+    assertThat(visits.find(visit.id())).map(Visit::notes).contains(notes);
+    assertThat(visits.ofUnit(unit.id())).extracting(Visit::notes).containsExactly(notes);
+    assertThat(visits.open(PageQuery.first(10)).items())
+        .extracting(s -> s.visit().notes())
+        .containsExactly(notes);
+    assertThat(visits.recordWork(visit.id(), "hums", "cleaned"))
+        .map(v -> v.notes().parts())
+        .contains(notes.parts());
+    visits.record(visit.id(), VisitNotes.complaint("hums"));
+    assertThat(visits.find(visit.id()).orElseThrow().notes().parts()).isEmpty();
+  }
+
+  @Test
+  void aVisitOpenedByMistakeCanBeRemovedUntilItHasACapture() {
+    Unit unit = shop.unit("1001");
+    Visit visit = visits.open(unit.id(), "");
+    visits.record(
+        visit.id(), new VisitNotes("", "", List.of(new FittedPart("belt", 1)), false, ""));
+    assertThat(visits.remove(visit.id())).isTrue();
+    assertThat(visits.find(visit.id())).isEmpty();
+    assertThat(visits.remove(visit.id())).isFalse();
+
+    Captures.insertOne(database, shop, unit);
+    Visit used = visits.openOf(unit.id()).orElseThrow();
+    assertRefused("visitHasCaptures", () -> visits.remove(used.id()));
+  }
+
+  @Test
+  void aVisitThatALinkOpensStays() {
+    Visit visit = visits.open(shop.unit("1001").id(), "");
+    database
+        .jdbc()
+        .sql(
+            """
+            insert into share_link (id, token_sha256, visit_id, created_at, created_by, expires_at,
+              views)
+            values (?, ?, ?, ?, 'bench', ?, 0)
+            """)
+        .params(
+            java.util.UUID.randomUUID(),
+            "0".repeat(64),
+            visit.id().value(),
+            Columns.time(ShopFixture.NOW),
+            Columns.time(ShopFixture.NOW))
+        .update();
+    assertRefused("visitInUse", () -> visits.remove(visit.id()));
+    assertThat(visits.find(visit.id())).isPresent();
   }
 
   @Test

@@ -17,6 +17,7 @@ import org.springframework.web.bind.annotation.PostMapping;
 import org.springframework.web.bind.annotation.ResponseBody;
 import turnsheet.capture.Capture;
 import turnsheet.capture.CaptureId;
+import turnsheet.capture.Corrections;
 import turnsheet.capture.Intake;
 import turnsheet.capture.Looked;
 import turnsheet.capture.Previews;
@@ -30,12 +31,15 @@ import turnsheet.web.Times;
 class CaptureController {
 
   private final Intake intake;
+  private final Corrections corrections;
   private final CaptureDesk desk;
   private final Previews previews;
   private final Times times;
 
-  CaptureController(Intake intake, CaptureDesk desk, Previews previews, Times times) {
+  CaptureController(
+      Intake intake, Corrections corrections, CaptureDesk desk, Previews previews, Times times) {
     this.intake = intake;
+    this.corrections = corrections;
     this.desk = desk;
     this.previews = previews;
     this.times = times;
@@ -76,7 +80,7 @@ class CaptureController {
 
   @PostMapping("/captures/{id}/tone-method")
   String nameMethod(@PathVariable UUID id, @Valid @ModelAttribute MethodForm said) {
-    intake.nameMethod(new CaptureId(id), said.method());
+    corrections.nameMethod(new CaptureId(id), said.method());
     return "redirect:/captures/" + id;
   }
 

@@ -11,10 +11,10 @@ import org.springframework.http.ContentDisposition;
 import org.springframework.http.MediaType;
 import org.springframework.http.ResponseEntity;
 import org.springframework.stereotype.Component;
+import turnsheet.capture.Arrival;
 import turnsheet.capture.BrokenUploadException;
 import turnsheet.capture.Capture;
 import turnsheet.capture.CaptureId;
-import turnsheet.capture.CaptureKey;
 import turnsheet.capture.CaptureStore;
 import turnsheet.capture.Captures;
 import turnsheet.capture.Intake;
@@ -50,9 +50,9 @@ class CaptureDesk {
    *
    * @throws RefusedRequestException also where the transfer or the disk failed
    */
-  Capture receive(CaptureKey key, String fileName, Principal visitor, InputStream in) {
+  Capture receive(Arrival arrival, String fileName, Principal visitor, InputStream in) {
     try {
-      return intake.receive(key, fileName, visitor.getName(), in);
+      return intake.receive(arrival, fileName, visitor.getName(), in);
     } catch (BrokenUploadException | StoreException e) {
       throw UploadTrouble.refused(e);
     }

@@ -13,12 +13,15 @@ import turnsheet.core.signal.Rejection;
 /**
  * A capture as the REST API shows it; absent things are null.
  *
+ * @param settingProposal how the speed setting was found: {@code only}, {@code rate}, {@code name},
+ *     or {@code several} and {@code none} where it must be said; null once it is said or confirmed
  * @param toneMethod {@code replay} or {@code recordAndReplay}; null for whatever is not a tone
  */
 record CaptureDocument(
     UUID id,
     UUID visitId,
     UUID speedSettingId,
+    @Nullable String settingProposal,
     String condition,
     @Nullable UUID instrumentId,
     @Nullable UUID mediumId,
@@ -41,6 +44,7 @@ record CaptureDocument(
         capture.id().value(),
         key.visit().value(),
         key.setting().value(),
+        capture.fit() == null ? null : capture.fit().word(),
         key.condition(),
         key.instrument() == null ? null : key.instrument().value(),
         key.medium() == null ? null : key.medium().value(),

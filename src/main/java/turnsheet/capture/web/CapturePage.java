@@ -15,11 +15,13 @@ import turnsheet.core.format.api.Contents;
 import turnsheet.core.format.api.Recognised;
 import turnsheet.core.measure.CaptureKind;
 import turnsheet.core.signal.Rejection;
+import turnsheet.shop.SpeedSetting;
 import turnsheet.web.Times;
 
 /**
  * Everything the capture page says, ready to be shown.
  *
+ * @param proposed whether the speed setting was found by the service and is not confirmed
  * @param toneMethod word of {@link turnsheet.capture.ToneMethod}; null where not said
  * @param tone whether it is the recording of a played tone, as far as is known
  */
@@ -31,6 +33,8 @@ record CapturePage(
     String unitName,
     String settingLabel,
     String condition,
+    List<SpeedSetting> settings,
+    boolean proposed,
     @Nullable String instrument,
     @Nullable String medium,
     @Nullable String toneMethod,
@@ -94,6 +98,8 @@ record CapturePage(
         around.model().name() + " " + around.visit().serialNumber(),
         around.setting().label(),
         capture.key().condition(),
+        around.model().settings(),
+        capture.fit() != null,
         around.instrument() == null ? null : around.instrument().name(),
         around.medium() == null ? null : around.medium().name(),
         capture.key().toneMethod() == null ? null : capture.key().toneMethod().word(),
@@ -107,6 +113,11 @@ record CapturePage(
         capture.refusal(),
         looked == null || proposal == null ? null : seen(looked, proposal, drawing),
         form);
+  }
+
+  /** Whether setting and condition can still be corrected. */
+  public boolean placeable() {
+    return visitOpen && open() && !state.equals(CaptureState.MEASURED.word());
   }
 
   /** Whether another choice than the one made could still help. */

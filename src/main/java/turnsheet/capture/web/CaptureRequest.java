@@ -1,11 +1,10 @@
 package turnsheet.capture.web;
 
-import jakarta.validation.constraints.NotBlank;
-import jakarta.validation.constraints.NotNull;
 import jakarta.validation.constraints.Pattern;
 import jakarta.validation.constraints.Size;
 import java.util.UUID;
 import org.jspecify.annotations.Nullable;
+import turnsheet.capture.Arrival;
 import turnsheet.capture.CaptureKey;
 import turnsheet.capture.ToneMethod;
 import turnsheet.shop.InstrumentId;
@@ -16,21 +15,23 @@ import turnsheet.shop.VisitId;
 /**
  * What is said about a file as it is uploaded, in a form or in the query of a raw upload.
  *
+ * @param speedSettingId left out to find it by the rate of the recording
+ * @param condition left out to go by what is noted on the visit
  * @param ownLabel takes the place of the condition where it is filled in
  * @param toneMethod word of {@link ToneMethod}; empty where not said
  */
 record CaptureRequest(
-    @NotNull UUID speedSettingId,
-    @NotBlank @Size(max = CaptureKey.CONDITION_LENGTH) String condition,
+    @Nullable UUID speedSettingId,
+    @Nullable @Size(max = CaptureKey.CONDITION_LENGTH) String condition,
     @Nullable @Size(max = CaptureKey.CONDITION_LENGTH) String ownLabel,
     @Nullable UUID instrumentId,
     @Nullable UUID mediumId,
     @Nullable @Pattern(regexp = "|replay|recordAndReplay") String toneMethod) {
 
-  CaptureKey key(UUID visit) {
-    return new CaptureKey(
+  Arrival arrival(UUID visit) {
+    return new Arrival(
         new VisitId(visit),
-        new SpeedSettingId(speedSettingId),
+        speedSettingId == null ? null : new SpeedSettingId(speedSettingId),
         ownLabel == null || ownLabel.isBlank() ? condition : ownLabel,
         instrumentId == null ? null : new InstrumentId(instrumentId),
         mediumId == null ? null : new MediumId(mediumId),

@@ -23,7 +23,9 @@ import org.springframework.web.bind.annotation.RestController;
 import turnsheet.capture.Capture;
 import turnsheet.capture.CaptureId;
 import turnsheet.capture.Captures;
+import turnsheet.capture.Corrections;
 import turnsheet.capture.Intake;
+import turnsheet.shop.SpeedSettingId;
 import turnsheet.shop.VisitId;
 
 /** Captures by REST. */
@@ -32,11 +34,13 @@ import turnsheet.shop.VisitId;
 class CaptureResource {
 
   private final Intake intake;
+  private final Corrections corrections;
   private final Captures captures;
   private final CaptureDesk desk;
 
-  CaptureResource(Intake intake, Captures captures, CaptureDesk desk) {
+  CaptureResource(Intake intake, Corrections corrections, Captures captures, CaptureDesk desk) {
     this.intake = intake;
+    this.corrections = corrections;
     this.captures = captures;
     this.desk = desk;
   }
@@ -52,7 +56,8 @@ class CaptureResource {
       Principal visitor,
       HttpServletRequest body)
       throws IOException {
-    Capture capture = desk.receive(request.key(visit), fileName, visitor, body.getInputStream());
+    Capture capture =
+        desk.receive(request.arrival(visit), fileName, visitor, body.getInputStream());
     return ResponseEntity.created(
             URI.create(body.getContextPath() + "/api/v1/captures/" + capture.id()))
         .body(CaptureDocument.of(capture));
@@ -81,7 +86,15 @@ class CaptureResource {
   /** Corrects how the tone came onto what was played; no figure changes. */
   @PutMapping("/captures/{id}/tone-method")
   CaptureDocument nameMethod(@PathVariable UUID id, @Valid @RequestBody MethodForm said) {
-    return CaptureDocument.of(intake.nameMethod(new CaptureId(id), said.method()));
+    return CaptureDocument.of(corrections.nameMethod(new CaptureId(id), said.method()));
+  }
+
+  /** Says at which setting and under which condition the recording was made. */
+  @PutMapping("/captures/{id}/place")
+  CaptureDocument place(@PathVariable UUID id, @Valid @RequestBody PlaceForm said) {
+    return CaptureDocument.of(
+        corrections.place(
+            new CaptureId(id), new SpeedSettingId(said.speedSettingId()), said.condition()));
   }
 
   @GetMapping("/captures/{id}/job")

@@ -7,6 +7,7 @@ import java.io.InputStream;
 import java.security.Principal;
 import java.util.List;
 import java.util.UUID;
+import org.jspecify.annotations.Nullable;
 import org.springframework.http.HttpStatus;
 import org.springframework.http.MediaType;
 import org.springframework.stereotype.Controller;
@@ -18,6 +19,12 @@ import org.springframework.web.bind.annotation.ResponseBody;
 import org.springframework.web.bind.annotation.ResponseStatus;
 import org.springframework.web.multipart.MultipartFile;
 import turnsheet.capture.Capture;
+import turnsheet.capture.Looked;
+import turnsheet.core.signal.Rejection;
+import turnsheet.shop.UnitId;
+import turnsheet.shop.Units;
+import turnsheet.shop.Visits;
+import turnsheet.web.NotFoundException;
 import turnsheet.web.RefusedRequestException;
 
 /** Takes files from the pages of a visit. */
@@ -25,9 +32,40 @@ import turnsheet.web.RefusedRequestException;
 class UploadController {
 
   private final CaptureDesk desk;
+  private final Units units;
+  private final Visits visits;
 
-  UploadController(CaptureDesk desk) {
+  UploadController(CaptureDesk desk, Units units, Visits visits) {
     this.desk = desk;
+    this.units = units;
+    this.visits = visits;
+  }
+
+  /** The same for a unit: goes to its open visit, and opens one where there is none. */
+  @PostMapping(path = "/units/{unit}/captures", consumes = MediaType.MULTIPART_FORM_DATA_VALUE)
+  String formOfUnit(
+      @PathVariable UUID unit,
+      @Valid @ModelAttribute CaptureRequest request,
+      @RequestParam(name = "file") List<MultipartFile> files,
+      Principal visitor)
+      throws IOException {
+    if (files.stream().noneMatch(UploadController::isChosen)) {
+      throw noFile();
+    }
+    return form(visitOf(unit), request, files, visitor);
+  }
+
+  @PostMapping(path = "/units/{unit}/captures", consumes = MediaType.APPLICATION_OCTET_STREAM_VALUE)
+  @ResponseStatus(HttpStatus.CREATED)
+  @ResponseBody
+  Uploaded rawOfUnit(
+      @PathVariable UUID unit,
+      @Valid @ModelAttribute CaptureRequest request,
+      @RequestParam String fileName,
+      Principal visitor,
+      HttpServletRequest body)
+      throws IOException {
+    return raw(visitOf(unit), request, fileName, visitor, body);
   }
 
   /** The form as a browser without scripts sends it. */
@@ -40,16 +78,16 @@ class UploadController {
       throws IOException {
     List<MultipartFile> chosen = files.stream().filter(UploadController::isChosen).toList();
     if (chosen.isEmpty()) {
-      throw new RefusedRequestException("noFile", "No file came with the form: choose one.");
+      throw noFile();
     }
     Capture last = null;
     for (MultipartFile file : chosen) {
       try (InputStream in = file.getInputStream()) {
         String name = String.valueOf(file.getOriginalFilename());
-        last = desk.receive(request.key(visit), name, visitor, in);
+        last = desk.receive(request.arrival(visit), name, visitor, in);
       }
     }
-    return last != null && chosen.size() == 1
+    return last != null && chosen.size() == 1 && last.fit() == null
         ? "redirect:/captures/" + last.id()
         : "redirect:/visits/" + visit;
   }
@@ -67,12 +105,37 @@ class UploadController {
       Principal visitor,
       HttpServletRequest body)
       throws IOException {
-    Capture capture = desk.receive(request.key(visit), fileName, visitor, body.getInputStream());
-    return new Uploaded(body.getContextPath() + "/captures/" + capture.id());
+    Capture capture =
+        desk.receive(request.arrival(visit), fileName, visitor, body.getInputStream());
+    String root = body.getContextPath();
+    Looked looked = capture.looked();
+    Rejection refusal = capture.refusal();
+    return new Uploaded(
+        root + "/captures/" + capture.id(),
+        root + "/visits/" + visit,
+        looked == null ? null : looked.recognised().format(),
+        refusal == null ? null : refusal.message());
   }
 
-  /** Where the script goes next. */
-  record Uploaded(String page) {}
+  /**
+   * Where the script goes next, and what it says about the file.
+   *
+   * @param format null where it was not recognised
+   * @param refusal sentence; null where it was
+   */
+  record Uploaded(String page, String visit, @Nullable String format, @Nullable String refusal) {}
+
+  private UUID visitOf(UUID unit) {
+    UnitId id = new UnitId(unit);
+    if (units.find(id).isEmpty()) {
+      throw new NotFoundException("unit");
+    }
+    return visits.openOf(id).orElseGet(() -> visits.open(id, "")).id().value();
+  }
+
+  private static RefusedRequestException noFile() {
+    return new RefusedRequestException("noFile", "No file came with the form: choose one.");
+  }
 
   private static boolean isChosen(MultipartFile file) {
     String name = file.getOriginalFilename();

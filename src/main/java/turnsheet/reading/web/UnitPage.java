@@ -11,6 +11,7 @@ import turnsheet.web.Shown;
  * @param code on its label, in two groups
  * @param note may be empty
  * @param openVisitId the visit that the unit is here for; null where it is not on the bench
+ * @param usualCondition of what comes in now
  */
 record UnitPage(
     String id,
@@ -24,8 +25,14 @@ record UnitPage(
     String customerName,
     String note,
     @Nullable String openVisitId,
+    String usualCondition,
     List<VisitRow> visits,
     History history) {
+
+  /** Whether the model has a speed setting that a recording can belong to. */
+  public boolean isRecordable() {
+    return !history.settings().isEmpty();
+  }
 
   /**
    * One visit.

@@ -8,6 +8,8 @@ import java.util.stream.Collectors;
 import org.jspecify.annotations.Nullable;
 import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
+import turnsheet.capture.CaptureKey;
+import turnsheet.capture.Intake;
 import turnsheet.reading.CaptureResult;
 import turnsheet.reading.CaptureResults;
 import turnsheet.reading.Population;
@@ -93,6 +95,11 @@ class UnitView {
         summary.customerName(),
         summary.unit().note(),
         stays.stream().filter(Visit::isOpen).map(v -> v.id().toString()).findFirst().orElse(null),
+        stays.stream()
+            .filter(Visit::isOpen)
+            .map(Intake::usualCondition)
+            .findFirst()
+            .orElse(CaptureKey.AS_RECEIVED),
         visitRows(stays, all, standing, words),
         history.page(setting, path, typical));
   }

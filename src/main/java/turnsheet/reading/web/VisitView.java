@@ -11,8 +11,10 @@ import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
 import turnsheet.capture.CaptureKey;
 import turnsheet.capture.CaptureState;
+import turnsheet.capture.Intake;
 import turnsheet.reading.CaptureResult;
 import turnsheet.reading.CaptureResults;
+import turnsheet.shop.FittedPart;
 import turnsheet.shop.MachineModel;
 import turnsheet.shop.MachineModels;
 import turnsheet.shop.ServiceLimit;
@@ -35,6 +37,7 @@ class VisitView {
   private final MachineModels models;
   private final CaptureResults results;
   private final ShopRules rules;
+  private final IncomingRows incoming;
   private final MessageSource messages;
   private final Times times;
 
@@ -43,12 +46,14 @@ class VisitView {
       MachineModels models,
       CaptureResults results,
       ShopRules rules,
+      IncomingRows incoming,
       MessageSource messages,
       Times times) {
     this.visits = visits;
     this.models = models;
     this.results = results;
     this.rules = rules;
+    this.incoming = incoming;
     this.messages = messages;
     this.times = times;
   }
@@ -78,9 +83,13 @@ class VisitView {
         visit.closedAt() == null ? "" : times.day(visit.closedAt()),
         visit.complaint(),
         visit.workDone(),
+        visit.notes().parts().stream().map(FittedPart::toString).toList(),
+        visit.notes().sensorReplaced() ? visit.notes().sensorNote() : null,
         conditions,
         rows,
-        isComparable(all));
+        isComparable(all),
+        Intake.usualCondition(visit),
+        incoming.of(visit.id(), words));
   }
 
   static Map<SpeedSettingId, List<ServiceLimit>> limits(List<MachineModel> models) {
@@ -106,6 +115,8 @@ class VisitView {
                         all.stream()
                             .filter(r -> r.settingId().equals(setting.id()))
                             .filter(r -> r.condition().equals(condition))
+                            // what is not placed yet stands among the incoming
+                            .filter(r -> r.fit() == null)
                             .map(r -> ResultItem.of(r, standing, words))
                             .toList()))
             .toList());

@@ -13,7 +13,6 @@ import turnsheet.shop.UnitCode;
 import turnsheet.shop.UnitId;
 import turnsheet.shop.UnitSummary;
 import turnsheet.shop.Units;
-import turnsheet.shop.Visit;
 import turnsheet.shop.Visits;
 import turnsheet.web.NotFoundException;
 
@@ -59,10 +58,6 @@ class QuickEntry {
   }
 
   private String placeOf(UnitId unit) {
-    return visits.ofUnit(unit).stream()
-        .filter(Visit::isOpen)
-        .findFirst()
-        .map(visit -> "/visits/" + visit.id())
-        .orElse("/units/" + unit);
+    return visits.openOf(unit).map(visit -> "/visits/" + visit.id()).orElse("/units/" + unit);
   }
 }

@@ -42,7 +42,7 @@ class VisitPages {
 
   @GetMapping("/units/{id}/visits/new")
   String blank(@PathVariable UUID id, Model model) {
-    model.addAttribute("form", new VisitForm("", ""));
+    model.addAttribute("form", VisitForm.EMPTY);
     return openPage(unit(id), model);
   }
 
@@ -82,6 +82,7 @@ class VisitPages {
       BindingResult errors,
       Model model) {
     VisitSummary visit = visit(id);
+    form.check(errors);
     if (!errors.hasErrors()) {
       try {
         change(visit.visit().id(), verb, form);
@@ -96,18 +97,41 @@ class VisitPages {
     return editPage(visit(id), model);
   }
 
+  /** Hands the unit back, or takes the visit up again, from the page of the visit itself. */
+  @PostMapping("/visits/{id}/standing")
+  String stand(@PathVariable UUID id, @RequestParam boolean open) {
+    VisitId visit = visit(id).visit().id();
+    refusals.orAnswer(() -> open ? visits.reopen(visit) : visits.close(visit));
+    return "redirect:/visits/" + id;
+  }
+
+  @GetMapping("/visits/{id}/remove")
+  String askRemoval(@PathVariable UUID id, Model model) {
+    VisitSummary visit = visit(id);
+    model.addAttribute("captures", visits.captures(visit.visit().id()));
+    editPage(visit, model);
+    return "shop/visit-remove";
+  }
+
+  @PostMapping("/visits/{id}/remove")
+  String remove(@PathVariable UUID id) {
+    Visit visit = visit(id).visit();
+    refusals.orAnswer(() -> visits.remove(visit.id()));
+    return "redirect:/units/" + visit.unitId();
+  }
+
   private void change(VisitId id, String verb, VisitForm form) {
     switch (verb) {
       case "reopen" -> visits.reopen(id);
       case "reopenAndSave" -> {
         visits.reopen(id);
-        visits.recordWork(id, form.complaint(), form.workDone());
+        visits.record(id, form.notes());
       }
       case "close" -> {
-        visits.recordWork(id, form.complaint(), form.workDone());
+        visits.record(id, form.notes());
         visits.close(id);
       }
-      default -> visits.recordWork(id, form.complaint(), form.workDone());
+      default -> visits.record(id, form.notes());
     }
   }
 

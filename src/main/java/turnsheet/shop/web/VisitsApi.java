@@ -83,7 +83,7 @@ class VisitsApi {
     if (open != null && open && !now.isOpen()) {
       visits.reopen(id);
     }
-    Optional<Visit> recorded = visits.recordWork(id, sent.complaint(), sent.workDone());
+    Optional<Visit> recorded = visits.record(id, sent.notes(now.notes()));
     return open != null && !open ? visits.close(id) : recorded;
   }
 
