@@ -20,6 +20,7 @@ import turnsheet.shop.VisitId;
  * @param refusal sentence of a capture that is refused or failed; null otherwise
  * @param progress 0 to 1, of the job that measures it; 0 where none runs
  * @param readingId null until it is measured
+ * @param measuredAt when that reading was made; null until then
  * @param figures those with a value; empty until it is measured
  */
 public record CaptureResult(
@@ -36,6 +37,7 @@ public record CaptureResult(
     @Nullable String refusal,
     double progress,
     @Nullable ReadingId readingId,
+    @Nullable Instant measuredAt,
     Map<FigureName, Figure> figures) {
 
   public CaptureResult {
@@ -62,6 +64,7 @@ public record CaptureResult(
         refusal,
         progress,
         readingId,
+        measuredAt,
         found);
   }
 }

@@ -78,7 +78,8 @@ public final class CaptureResults {
     List<CaptureResult> plain =
         jdbc.sql(
                 """
-                select c.*, s.label as setting_label, j.progress, r.id as reading_id
+                select c.*, s.label as setting_label, j.progress, r.id as reading_id,
+                  r.made_at as measured_at
                 from capture c join visit v on v.id = c.visit_id
                   join speed_setting s on s.id = c.speed_setting_id
                   left join job j on j.id = c.job_id %s
@@ -137,6 +138,7 @@ public final class CaptureResults {
 
   private static CaptureResult result(ResultSet row, int number) throws SQLException {
     UUID reading = row.getObject("reading_id", UUID.class);
+    OffsetDateTime measured = row.getObject("measured_at", OffsetDateTime.class);
     return new CaptureResult(
         new CaptureId(row.getObject("id", UUID.class)),
         new VisitId(row.getObject("visit_id", UUID.class)),
@@ -151,6 +153,7 @@ public final class CaptureResults {
         text(row, "refusal_message"),
         row.getDouble("progress"),
         reading == null ? null : new ReadingId(reading),
+        measured == null ? null : measured.toInstant(),
         Map.of());
   }
 

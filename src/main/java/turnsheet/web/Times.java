@@ -34,6 +34,11 @@ public class Times {
         : DateTimeFormatter.ofLocalizedDate(FormatStyle.MEDIUM).withLocale(locale).format(date(at));
   }
 
+  /** When the shop's day began. */
+  public Instant startOfDay(Instant at) {
+    return date(at).atStartOfDay(zone).toInstant();
+  }
+
   /** The shop's date at an instant. */
   public LocalDate date(Instant at) {
     return at.atZone(zone).toLocalDate();

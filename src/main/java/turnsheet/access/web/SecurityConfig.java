@@ -85,7 +85,8 @@ class SecurityConfig {
                     .permitAll()
                     .requestMatchers(OPEN_TO_ALL)
                     .permitAll()
-                    .requestMatchers("/shop/people/**", "/shop/profile", "/shop/rules")
+                    .requestMatchers(
+                        "/shop/people/**", "/shop/profile", "/shop/rules", "/shop/preferences")
                     .hasRole(Role.OWNER.name())
                     .anyRequest()
                     .authenticated())

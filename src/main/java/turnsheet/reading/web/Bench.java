@@ -1,8 +1,9 @@
 package turnsheet.reading.web;
 
+import java.time.Instant;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Map;
-import turnsheet.capture.CaptureKey;
 import turnsheet.capture.CaptureState;
 import turnsheet.core.diagnose.Verdict;
 import turnsheet.reading.CaptureResult;
@@ -42,24 +43,39 @@ final class Bench {
         .toList();
   }
 
-  List<BenchPage.Stay> stays(Need need) {
-    return stays.stream().filter(s -> need.has(this, captures(s))).map(this::stay).toList();
+  /** The visits whose next step is one of these. */
+  List<BenchPage.Stay> stays(NextStep... steps) {
+    return stays.stream().filter(s -> List.of(steps).contains(next(s))).map(this::stay).toList();
   }
 
-  /** The last capture of some speed setting breaks a limit. */
-  boolean isOutside(List<CaptureResult> captures) {
+  /** The visits where the last capture of some speed setting breaks a limit. */
+  List<BenchPage.Stay> outside() {
+    return stays.stream().filter(s -> isOutside(captures(s))).map(this::stay).toList();
+  }
+
+  /** What was measured since an instant, the last first. */
+  List<BenchPage.Recording> measuredSince(Instant start) {
+    return stays.stream()
+        .flatMap(stay -> captures(stay).stream().map(c -> new Measured(stay, c)))
+        .filter(m -> !m.at().isBefore(start))
+        .sorted(Comparator.comparing(Measured::at).reversed())
+        .map(m -> recording(m.stay(), m.capture()))
+        .toList();
+  }
+
+  private record Measured(VisitSummary stay, CaptureResult capture) {
+    Instant at() {
+      Instant measured = capture.measuredAt();
+      return measured == null ? Instant.MIN : measured;
+    }
+  }
+
+  private NextStep next(VisitSummary stay) {
+    return NextStep.of(stay.visit(), captures(stay), standing);
+  }
+
+  private boolean isOutside(List<CaptureResult> captures) {
     return Standing.latest(captures).stream().anyMatch(c -> standing.worst(c) == Verdict.OUTSIDE);
-  }
-
-  /** Last measured after the work at every speed setting, nothing outside, nothing on its way. */
-  boolean isReady(List<CaptureResult> captures) {
-    return !isOutside(captures)
-        && captures.stream()
-            .noneMatch(
-                c -> c.state() == CaptureState.RECOGNISED || c.state() == CaptureState.QUEUED)
-        && !Standing.latest(captures).isEmpty()
-        && Standing.latest(captures).stream()
-            .noneMatch(c -> c.condition().equals(CaptureKey.AS_RECEIVED));
   }
 
   private List<CaptureResult> captures(VisitSummary stay) {
@@ -85,6 +101,8 @@ final class Bench {
         times.day(stay.visit().openedAt()),
         stay.visit().complaint(),
         captures.size(),
+        words.text("reading.next." + next(stay).word()),
+        next(stay).hrefOn(stay.visit().id().toString()),
         Standing.latest(captures).stream()
             .map(
                 c ->
@@ -95,10 +113,5 @@ final class Bench {
 
   private static String nameOf(VisitSummary stay) {
     return stay.modelName() + " " + stay.serialNumber();
-  }
-
-  /** A question to the captures of one visit. */
-  interface Need {
-    boolean has(Bench bench, List<CaptureResult> captures);
   }
 }

@@ -6,6 +6,10 @@ import java.util.List;
  * What is on the bench.
  *
  * @param summary how many wait, are measured, are outside, are ready
+ * @param arrived not measured yet
+ * @param working measured, and neither outside nor ready
+ * @param today measured since midnight
+ * @param empty whether no visit is open
  * @param start what a visit needs and whether it is there
  */
 record BenchPage(
@@ -16,7 +20,10 @@ record BenchPage(
     List<Recording> refused,
     List<Stay> outside,
     List<Stay> ready,
-    List<Stay> open) {
+    List<Stay> arrived,
+    List<Stay> working,
+    List<Recording> today,
+    boolean empty) {
 
   /** Which of the things that a visit needs are there. */
   record Start(boolean models, boolean customers, boolean units) {
@@ -34,6 +41,8 @@ record BenchPage(
    *
    * @param latest the last measured capture of each speed setting
    * @param captures how many it has
+   * @param next what it waits for
+   * @param nextHref where that is done
    */
   record Stay(
       String visitId,
@@ -43,6 +52,8 @@ record BenchPage(
       String opened,
       String complaint,
       int captures,
+      String next,
+      String nextHref,
       List<Latest> latest) {}
 
   record Latest(String setting, String condition, ResultItem item) {}

@@ -1,9 +1,12 @@
 package turnsheet.reading.web;
 
+import java.time.Clock;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import java.util.Set;
 import java.util.stream.Collectors;
+import java.util.stream.Stream;
 import org.springframework.context.MessageSource;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.stereotype.Component;
@@ -29,6 +32,7 @@ class BenchView {
   private final ShopRules rules;
   private final MessageSource messages;
   private final Times times;
+  private final Clock clock;
 
   BenchView(
       Visits visits,
@@ -43,6 +47,7 @@ class BenchView {
     this.rules = rules;
     this.messages = messages;
     this.times = times;
+    this.clock = clock;
   }
 
   BenchPage page(Locale locale) {
@@ -55,8 +60,19 @@ class BenchView {
     List<BenchPage.Recording> waiting = bench.recordings(CaptureState.RECOGNISED);
     List<BenchPage.Recording> measuring = bench.recordings(CaptureState.QUEUED);
     List<BenchPage.Recording> refused = bench.recordings(CaptureState.REFUSED, CaptureState.FAILED);
-    List<BenchPage.Stay> outside = bench.stays(Bench::isOutside);
-    List<BenchPage.Stay> ready = bench.stays(Bench::isReady);
+    List<BenchPage.Stay> outside = bench.outside();
+    List<BenchPage.Stay> ready = bench.stays(NextStep.READY);
+    Set<String> elsewhere =
+        Stream.concat(outside.stream(), ready.stream())
+            .map(BenchPage.Stay::visitId)
+            .collect(Collectors.toSet());
+    List<BenchPage.Stay> arrived = bench.stays(NextStep.RECORD);
+    List<BenchPage.Stay> working =
+        bench
+            .stays(NextStep.CONFIRM, NextStep.WAIT, NextStep.WORK, NextStep.AGAIN, NextStep.OUTSIDE)
+            .stream()
+            .filter(stay -> !elsewhere.contains(stay.visitId()))
+            .toList();
     return new BenchPage(
         words.text(
             "reading.bench.summary",
@@ -72,7 +88,10 @@ class BenchView {
         refused,
         outside,
         ready,
-        bench.stays((b, captures) -> true));
+        arrived,
+        working,
+        bench.measuredSince(times.startOfDay(clock.instant())),
+        stays.isEmpty());
   }
 
   private BenchPage.Start start() {

@@ -8,6 +8,7 @@ import java.util.OptionalDouble;
 import org.jspecify.annotations.Nullable;
 import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
+import turnsheet.access.ShopPreferences;
 import turnsheet.capture.ToneMethod;
 import turnsheet.core.measure.FigureName;
 import turnsheet.core.measure.MeasureSettings;
@@ -40,6 +41,7 @@ class ReadingView {
   private final MachineModels models;
   private final ShopRules rules;
   private final ChannelTables channels;
+  private final ShopPreferences preferences;
   private final MessageSource messages;
   private final Times times;
 
@@ -49,6 +51,7 @@ class ReadingView {
       MachineModels models,
       ShopRules rules,
       ChannelTables channels,
+      ShopPreferences preferences,
       MessageSource messages,
       Times times) {
     this.readings = readings;
@@ -56,6 +59,7 @@ class ReadingView {
     this.models = models;
     this.rules = rules;
     this.channels = channels;
+    this.preferences = preferences;
     this.messages = messages;
     this.times = times;
   }
@@ -187,7 +191,7 @@ class ReadingView {
     return facts;
   }
 
-  private static List<ReadingPage.Fact> signalFacts(Reading reading, Wording words) {
+  private List<ReadingPage.Fact> signalFacts(Reading reading, Wording words) {
     Reading.Signal signal = reading.signal();
     List<ReadingPage.Fact> facts = new ArrayList<>();
     facts.add(fact(words, "reading.signal.clipped", Long.toString(signal.clippedSamples())));
@@ -214,7 +218,9 @@ class ReadingView {
                     .map(
                         m ->
                             words.text(
-                                "reading.signal.mainsLine",
+                                m.rateHz() % preferences.get().mainsHz() == 0
+                                    ? "reading.signal.mainsLine"
+                                    : "reading.signal.mainsOther",
                                 words.numbers().plain(m.rateHz()),
                                 words.numbers().fixed(m.relativeDb(), 1)))
                     .toList());

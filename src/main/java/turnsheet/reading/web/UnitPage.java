@@ -11,6 +11,7 @@ import turnsheet.web.Shown;
  * @param code on its label, in two groups
  * @param note may be empty
  * @param openVisitId the visit that the unit is here for; null where it is not on the bench
+ * @param plateVisitId the latest visit with a photograph of the type plate; null where none has
  * @param usualCondition of what comes in now
  */
 record UnitPage(
@@ -26,6 +27,7 @@ record UnitPage(
     String note,
     @Nullable String openVisitId,
     String usualCondition,
+    @Nullable String plateVisitId,
     List<VisitRow> visits,
     History history) {
 

@@ -10,6 +10,7 @@ import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
 import turnsheet.capture.CaptureKey;
 import turnsheet.capture.Intake;
+import turnsheet.capture.PlatePhotos;
 import turnsheet.reading.CaptureResult;
 import turnsheet.reading.CaptureResults;
 import turnsheet.reading.Population;
@@ -36,6 +37,7 @@ class UnitView {
   private final Visits visits;
   private final MachineModels models;
   private final CaptureResults results;
+  private final PlatePhotos photos;
   private final ShopRules rules;
   private final Populations populations;
   private final MessageSource messages;
@@ -46,6 +48,7 @@ class UnitView {
       Visits visits,
       MachineModels models,
       CaptureResults results,
+      PlatePhotos photos,
       ShopRules rules,
       Populations populations,
       MessageSource messages,
@@ -54,6 +57,7 @@ class UnitView {
     this.visits = visits;
     this.models = models;
     this.results = results;
+    this.photos = photos;
     this.rules = rules;
     this.populations = populations;
     this.messages = messages;
@@ -100,6 +104,7 @@ class UnitView {
             .map(Intake::usualCondition)
             .findFirst()
             .orElse(CaptureKey.AS_RECEIVED),
+        photos.latestOf(id).map(p -> p.visit().toString()).orElse(null),
         visitRows(stays, all, standing, words),
         history.page(setting, path, typical));
   }

@@ -11,6 +11,9 @@ import turnsheet.web.Crumb;
  * @param sensor which one was fitted; null where the old one stayed
  * @param conditions heads of the columns
  * @param comparable whether two conditions are measured at one speed setting
+ * @param next what the visit waits for
+ * @param nextHref where that is done; empty once it is closed
+ * @param plate whether it has a photograph of the type plate
  * @param usualCondition of what comes in now
  * @param incoming not confirmed yet
  */
@@ -31,6 +34,9 @@ record VisitPage(
     List<String> conditions,
     List<Row> rows,
     boolean comparable,
+    String next,
+    String nextHref,
+    boolean plate,
     String usualCondition,
     List<Incoming> incoming) {
 

@@ -12,6 +12,7 @@ import org.springframework.stereotype.Component;
 import turnsheet.capture.CaptureKey;
 import turnsheet.capture.CaptureState;
 import turnsheet.capture.Intake;
+import turnsheet.capture.PlatePhotos;
 import turnsheet.reading.CaptureResult;
 import turnsheet.reading.CaptureResults;
 import turnsheet.shop.FittedPart;
@@ -38,6 +39,7 @@ class VisitView {
   private final CaptureResults results;
   private final ShopRules rules;
   private final IncomingRows incoming;
+  private final PlatePhotos photos;
   private final MessageSource messages;
   private final Times times;
 
@@ -47,6 +49,7 @@ class VisitView {
       CaptureResults results,
       ShopRules rules,
       IncomingRows incoming,
+      PlatePhotos photos,
       MessageSource messages,
       Times times) {
     this.visits = visits;
@@ -54,6 +57,7 @@ class VisitView {
     this.results = results;
     this.rules = rules;
     this.incoming = incoming;
+    this.photos = photos;
     this.messages = messages;
     this.times = times;
   }
@@ -70,6 +74,7 @@ class VisitView {
     Standing standing = new Standing(limits(List.of(model)), rules.get().rule());
     List<VisitPage.Row> rows =
         model.settings().stream().map(s -> row(s, conditions, all, standing, words)).toList();
+    NextStep next = NextStep.of(visit, all, standing);
     String unitName = summary.modelName() + " " + summary.serialNumber();
     return new VisitPage(
         visit.id().toString(),
@@ -88,6 +93,9 @@ class VisitView {
         conditions,
         rows,
         isComparable(all),
+        words.text("reading.next." + next.word()),
+        next.hrefOn(visit.id().toString()),
+        photos.of(visit.id()).isPresent(),
         Intake.usualCondition(visit),
         incoming.of(visit.id(), words));
   }

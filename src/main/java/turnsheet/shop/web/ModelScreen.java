@@ -10,6 +10,7 @@ import org.springframework.context.MessageSource;
 import org.springframework.context.i18n.LocaleContextHolder;
 import org.springframework.stereotype.Component;
 import org.springframework.ui.Model;
+import turnsheet.access.ShopPreferences;
 import turnsheet.core.measure.FigureName;
 import turnsheet.shop.MachineModel;
 import turnsheet.shop.MachineModels;
@@ -36,8 +37,15 @@ class ModelScreen {
   private final Units units;
   private final TypicalFigures typical;
   private final MessageSource messages;
+  private final ShopPreferences preferences;
 
-  ModelScreen(MachineModels models, Units units, TypicalFigures typical, MessageSource messages) {
+  ModelScreen(
+      MachineModels models,
+      Units units,
+      TypicalFigures typical,
+      MessageSource messages,
+      ShopPreferences preferences) {
+    this.preferences = preferences;
     this.typical = typical;
     this.messages = messages;
     this.models = models;
@@ -58,7 +66,7 @@ class ModelScreen {
     screen.addAttribute("opened", opened);
     addChoices(model, screen);
     screen.addAttribute("typical", typical.of(model, LocaleContextHolder.getLocale()));
-    addUnlessTyped(screen, "settingForm", SettingForm.EMPTY);
+    addUnlessTyped(screen, "settingForm", SettingForm.empty(preferences.get().speeds()));
     addUnlessTyped(screen, "partForm", PartForm.EMPTY);
     addUnlessTyped(screen, "limitForm", LimitForm.EMPTY);
     return PAGE;
@@ -93,13 +101,13 @@ class ModelScreen {
         model.limits().stream().map(l -> limitRow(model, l)).toList());
   }
 
-  private static ModelPage.SettingRow settingRow(MachineModel model, SpeedSetting setting) {
+  private ModelPage.SettingRow settingRow(MachineModel model, SpeedSetting setting) {
     OptionalDouble pulses = model.pulsesPerSecond(setting);
     Double tone = setting.toneHz();
     return new ModelPage.SettingRow(
         setting.id().toString(),
         setting.label(),
-        SpeedText.of(setting),
+        SpeedText.of(setting, preferences.get().speeds()),
         tone == null ? "" : SpeedText.digits(tone),
         pulses.isPresent() ? SpeedText.digits(pulses.getAsDouble()) : "",
         pulses.isPresent() && setting.pulsesPerSecond() == null);

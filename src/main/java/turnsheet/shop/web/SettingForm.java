@@ -4,6 +4,7 @@ import jakarta.validation.constraints.NotBlank;
 import jakarta.validation.constraints.Size;
 import java.util.Optional;
 import org.springframework.validation.Errors;
+import turnsheet.access.ShopPreferences.SpeedLiking;
 import turnsheet.shop.SpeedSetting;
 import turnsheet.shop.SpeedSettingId;
 import turnsheet.shop.SpeedUnit;
@@ -21,7 +22,11 @@ record SettingForm(
   /** Offered beside the stored units: converted when it is read. */
   static final String IN_PER_S = "IN_PER_S";
 
-  static final SettingForm EMPTY = new SettingForm("", "", SpeedUnit.CM_PER_S.name(), "", "");
+  /** Begins with the unit that the shop likes. */
+  static SettingForm empty(SpeedLiking liking) {
+    String unit = liking == SpeedLiking.IN_PER_S ? IN_PER_S : SpeedUnit.CM_PER_S.name();
+    return new SettingForm("", "", unit, "", "");
+  }
 
   SettingForm {
     label = Typed.text(label);

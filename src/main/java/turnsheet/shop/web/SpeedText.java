@@ -3,6 +3,7 @@ package turnsheet.shop.web;
 import java.math.BigDecimal;
 import java.math.MathContext;
 import java.math.RoundingMode;
+import turnsheet.access.ShopPreferences.SpeedLiking;
 import turnsheet.shop.SpeedSetting;
 import turnsheet.shop.SpeedUnit;
 
@@ -16,17 +17,15 @@ public final class SpeedText {
 
   private SpeedText() {}
 
-  /** {@code 9.525 cm/s (3.75 in/s)} or {@code 33.3333 rev/min}. */
-  public static String of(SpeedSetting setting) {
+  /** {@code 9.525 cm/s (3.75 in/s)}, the other way round where liked, or {@code 45 rev/min}. */
+  public static String of(SpeedSetting setting, SpeedLiking liking) {
     double speed = setting.nominalSpeed();
-    return setting.unit() == SpeedUnit.REV_PER_MIN
-        ? digits(speed) + SPACE + "rev/min"
-        : digits(speed)
-            + SPACE
-            + "cm/s ("
-            + digits(speed / SpeedUnit.CM_PER_INCH)
-            + SPACE
-            + "in/s)";
+    String cm = digits(speed) + SPACE + "cm/s";
+    String inches = digits(speed / SpeedUnit.CM_PER_INCH) + SPACE + "in/s";
+    if (setting.unit() == SpeedUnit.REV_PER_MIN) {
+      return digits(speed) + SPACE + "rev/min";
+    }
+    return liking == SpeedLiking.IN_PER_S ? inches + " (" + cm + ")" : cm + " (" + inches + ")";
   }
 
   /** A number with at most six significant digits and no idle zeros. */

@@ -1,0 +1,74 @@
+package turnsheet.access.web;
+
+import jakarta.validation.Valid;
+import jakarta.validation.constraints.NotNull;
+import jakarta.validation.constraints.Pattern;
+import org.springframework.http.CacheControl;
+import org.springframework.http.MediaType;
+import org.springframework.http.ResponseEntity;
+import org.springframework.stereotype.Controller;
+import org.springframework.ui.Model;
+import org.springframework.web.bind.annotation.GetMapping;
+import org.springframework.web.bind.annotation.ModelAttribute;
+import org.springframework.web.bind.annotation.PostMapping;
+import org.springframework.web.servlet.mvc.support.RedirectAttributes;
+import turnsheet.access.AuditTrail;
+import turnsheet.access.ShopPreferences;
+import turnsheet.access.ShopPreferences.Liked;
+import turnsheet.access.ShopPreferences.Paper;
+import turnsheet.access.ShopPreferences.SpeedLiking;
+
+/** How the shop likes to see things, and the paper that print follows. */
+@Controller
+class PreferencesController {
+
+  static final String PATH = "/shop/preferences";
+
+  /** The choices as sent. */
+  record PreferencesForm(
+      @NotNull SpeedLiking speeds,
+      @NotNull @Pattern(regexp = "50|60") String mains,
+      @NotNull Paper paper) {
+
+    static PreferencesForm of(Liked liked) {
+      return new PreferencesForm(liked.speeds(), Integer.toString(liked.mainsHz()), liked.paper());
+    }
+
+    Liked liked() {
+      return new Liked(speeds, Integer.parseInt(mains), paper);
+    }
+  }
+
+  private final ShopPreferences preferences;
+  private final AuditTrail audit;
+
+  PreferencesController(ShopPreferences preferences, AuditTrail audit) {
+    this.preferences = preferences;
+    this.audit = audit;
+  }
+
+  @GetMapping(PATH)
+  String show(Model model) {
+    model.addAttribute("form", PreferencesForm.of(preferences.get()));
+    model.addAttribute("speedChoices", SpeedLiking.values());
+    model.addAttribute("papers", Paper.values());
+    return "access/preferences";
+  }
+
+  @PostMapping(PATH)
+  String change(@Valid @ModelAttribute("form") PreferencesForm form, RedirectAttributes flash) {
+    preferences.put(form.liked());
+    audit.record("access.audit.preferencesChanged", form.liked().toString());
+    flash.addFlashAttribute("done", "access.preferences.saved");
+    return "redirect:" + ShopController.PATH;
+  }
+
+  /** The content policy forbids style within pages, so the paper comes as a sheet of its own. */
+  @GetMapping("/css/paper.css")
+  ResponseEntity<String> paper() {
+    return ResponseEntity.ok()
+        .contentType(new MediaType("text", "css"))
+        .cacheControl(CacheControl.noCache())
+        .body("@page { size: " + preferences.get().paper().css() + "; }\n");
+  }
+}
