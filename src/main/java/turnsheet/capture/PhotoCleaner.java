@@ -37,6 +37,7 @@ final class PhotoCleaner {
   private PhotoCleaner() {}
 
   /** A cleaned picture. */
+  @SuppressWarnings("ArrayRecordComponent") // handed on at once, never compared
   record Cleaned(byte[] jpeg, int widthPx, int heightPx) {}
 
   /**

@@ -48,6 +48,11 @@ final class Visitor implements AutoCloseable {
     return chrome.findElements(By.cssSelector(css));
   }
 
+  /** What a key pressed now goes to. */
+  WebElement focused() {
+    return chrome.switchTo().activeElement();
+  }
+
   void fill(String name, String text) {
     WebElement field = chrome.findElement(By.name(name));
     field.clear();

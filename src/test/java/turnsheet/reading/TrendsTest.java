@@ -155,8 +155,10 @@ class TrendsTest {
             CaptureState.MEASURED,
             null,
             null,
+            null,
             0,
             ReadingId.next(),
+            at,
             Map.of(name, figure)));
   }
 

@@ -40,7 +40,8 @@ class BenchView {
       JdbcClient jdbc,
       ShopRules rules,
       MessageSource messages,
-      Times times) {
+      Times times,
+      Clock clock) {
     this.visits = visits;
     this.results = results;
     this.jdbc = jdbc;

@@ -230,7 +230,10 @@ class ReadingPagesTest {
         .contains(bench.model.name())
         .contains("Waiting for you to confirm")
         .contains("Outside a limit")
+        .contains("Confirm the recordings that have come in")
         .doesNotContain("??");
+    String today = page.substring(page.indexOf("id=\"today\""));
+    assertThat(today).contains("/visits/" + bench.visit.id());
   }
 
   private String page(String address) throws Exception {
