@@ -101,6 +101,16 @@ public class Captures {
         .update();
   }
 
+  /** Takes a capture away that was never measured. */
+  boolean remove(CaptureId id) {
+    return jdbc.sql(
+                "delete from capture where id = :id and state in ('recognised', 'refused', 'failed')"
+                    + " and not exists (select 1 from reading r where r.capture_id = :id)")
+            .param("id", id.value())
+            .update()
+        == 1;
+  }
+
   /** The bench says at which setting and under which condition the recording was made. */
   boolean place(CaptureId id, SpeedSettingId setting, String condition) {
     return jdbc.sql(

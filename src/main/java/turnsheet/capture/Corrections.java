@@ -57,4 +57,20 @@ public class Corrections {
     captures.name(id, method);
     return captures.find(id).orElseThrow();
   }
+
+  /**
+   * Takes a capture away that was brought by mistake. Its bytes stay in the store, where another
+   * capture may share them.
+   *
+   * @throws RefusedRequestException if the visit is closed, or the capture is being measured or has
+   *     been: what a reading was made of stays
+   */
+  public void remove(CaptureId id) {
+    Capture capture = captures.find(id).orElseThrow(() -> new NotFoundException("capture"));
+    shelf.of(capture.key()).requireOpen();
+    if (!captures.remove(id)) {
+      throw new RefusedRequestException(
+          "measured", "This capture is being measured or has been: what was measured stays.");
+    }
+  }
 }

@@ -7,6 +7,8 @@ import java.util.Map;
 import java.util.UUID;
 import org.jspecify.annotations.Nullable;
 import org.springframework.stereotype.Controller;
+import org.springframework.ui.Model;
+import org.springframework.web.bind.annotation.GetMapping;
 import org.springframework.web.bind.annotation.ModelAttribute;
 import org.springframework.web.bind.annotation.PathVariable;
 import org.springframework.web.bind.annotation.PostMapping;
@@ -27,7 +29,7 @@ import turnsheet.shop.SpeedSettingId;
 import turnsheet.shop.VisitId;
 import turnsheet.web.RefusedRequestException;
 
-/** Confirms what was proposed for the recordings of a visit, one of them or all at once. */
+/** Confirms what was proposed for the recordings of a visit, and puts single ones right. */
 @Controller
 class ConfirmController {
 
@@ -84,6 +86,22 @@ class ConfirmController {
     corrections.place(
         new CaptureId(id), new SpeedSettingId(said.speedSettingId()), said.condition());
     return "redirect:/captures/" + desk.capture(id).id();
+  }
+
+  @GetMapping("/captures/{id}/remove")
+  String askRemoval(@PathVariable UUID id, Model model) {
+    Capture capture = desk.capture(id);
+    model.addAttribute("id", id);
+    model.addAttribute("visit", capture.key().visit().value());
+    model.addAttribute("fileName", capture.fileName());
+    return "capture/remove";
+  }
+
+  @PostMapping("/captures/{id}/remove")
+  String remove(@PathVariable UUID id) {
+    Capture capture = desk.capture(id);
+    corrections.remove(capture.id());
+    return "redirect:/visits/" + capture.key().visit();
   }
 
   private void confirm(Capture capture, String setting, String condition) {

@@ -159,6 +159,27 @@ class DropPagesTest {
   }
 
   @Test
+  void aRecordingBroughtByMistakeCanBeRemovedUntilItIsMeasured() throws Exception {
+    Visit visit = visits.open(unit, "");
+    drop("/visits/" + visit.id(), TACHO, TACHO);
+    drop("/visits/" + visit.id(), EDGES, EDGES);
+    List<Capture> dropped = captures.ofVisit(visit.id());
+    String first = "/captures/" + dropped.get(0).id();
+    assertThat(mvc.get().uri(first)).bodyText().contains(first + "/remove");
+    assertThat(mvc.get().uri(first + "/remove"))
+        .bodyText()
+        .contains(TACHO, "cannot be undone")
+        .doesNotContain("??");
+    assertThat(mvc.post().uri(first + "/remove").with(csrf())).hasStatus(302);
+    assertThat(mvc.get().uri(first)).hasStatus(404);
+
+    String second = "/captures/" + dropped.get(1).id();
+    mvc.post().uri(second + "/measure").with(csrf()).exchange();
+    assertThat(mvc.post().uri(second + "/remove").with(csrf())).hasStatus(422);
+    assertThat(mvc.get().uri(second)).hasStatusOk();
+  }
+
+  @Test
   void theFormWithoutScriptTakesSeveralFilesToo() {
     var request = mvc.post().uri("/units/{id}/captures", unit.value()).multipart();
     request.file(new MockMultipartFile("file", TACHO, "audio/wav", sample(TACHO)));
