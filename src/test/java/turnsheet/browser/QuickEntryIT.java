@@ -154,6 +154,9 @@ class QuickEntryIT {
   }
 
   private void setting(String label, String speed, String pulses) {
+    if (!visitor.find("input[name=label]").isDisplayed()) {
+      visitor.find("#settings summary").click(); // folded once there is a setting
+    }
     visitor.fill("label", label);
     visitor.fill("nominalSpeed", speed);
     visitor.fill("toneHz", "3150");
