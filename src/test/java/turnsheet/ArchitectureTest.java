@@ -121,6 +121,8 @@ class ArchitectureTest {
             "java..",
             "turnsheet.core..",
             "org.jspecify..",
+            "org.jtransforms..",
+            "pl.edu.icm.jlargearrays..",
             "org.hipparchus..",
             "de.siegmar.fastcsv..")
         .check(CLASSES);

@@ -17,6 +17,7 @@ import turnsheet.web.Wording;
  * @param origin where the bound comes from; empty with it
  * @param verdict {@code within}, {@code outside} or {@code undecided}; null where there is no limit
  *     or no value
+ * @param probability that the figure conforms; empty where there is no verdict or no uncertainty
  * @param undecidedWhy reason of an undecided verdict; null for others
  */
 record FigureRow(
@@ -25,24 +26,26 @@ record FigureRow(
     String limit,
     String origin,
     @Nullable String verdict,
+    String probability,
     @Nullable String undecidedWhy) {
 
   static FigureRow plain(Wording words, String key, Figure figure, String unit, Numbers.Sign sign) {
     return new FigureRow(
-        words.text(key), words.numbers().show(figure, unit, sign), "", "", null, null);
+        words.text(key), words.numbers().show(figure, unit, sign), "", "", null, "", null);
   }
 
   /** A figure that may have a limit. */
   static FigureRow of(Wording words, FigureName name, Figure figure, @Nullable Judged judged) {
     Shown shown = words.show(name, figure);
     return judged == null
-        ? new FigureRow(words.nameOf(name), shown, "", "", null, null)
+        ? new FigureRow(words.nameOf(name), shown, "", "", null, "", null)
         : new FigureRow(
             words.nameOf(name),
             shown,
             words.bound(name, judged.limit().upperBound()),
             judged.limit().origin(),
             word(judged.judgement().verdict()),
+            words.probability(judged.judgement()),
             words.undecided(judged.judgement()));
   }
 

@@ -73,7 +73,7 @@ final class FigureTables {
               words.numbers().plain(band.toHz()));
       rows.add(
           new FigureRow(
-              name, words.numbers().show(band.rmsPercent(), "%", PLAIN), "", "", null, null));
+              name, words.numbers().show(band.rmsPercent(), "%", PLAIN), "", "", null, "", null));
     }
     return rows;
   }
