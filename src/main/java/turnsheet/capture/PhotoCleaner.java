@@ -24,7 +24,7 @@ import turnsheet.web.RefusedRequestException;
  * Makes a photograph into one that can be kept and shown: an upright JPEG of moderate size without
  * anything beside the picture, such as the place where it was taken.
  */
-final class PhotoCleaner {
+public final class PhotoCleaner {
 
   static final int MOST_BYTES = 20_000_000;
   static final int LONGEST_SIDE_PX = 2000;
@@ -47,19 +47,28 @@ final class PhotoCleaner {
    * @throws RefusedRequestException if it is too big, neither JPEG nor PNG by its bytes, or damaged
    */
   static Cleaned clean(InputStream in) throws IOException {
+    BufferedImage upright = upright(in, LONGEST_SIDE_PX);
+    return new Cleaned(jpeg(upright), upright.getWidth(), upright.getHeight());
+  }
+
+  /**
+   * The picture alone, upright, on white.
+   *
+   * @param longestSide of the result at most, in pixels
+   * @throws RefusedRequestException as {@link #clean}
+   */
+  public static BufferedImage upright(InputStream in, int longestSide) throws IOException {
     byte[] bytes = in.readNBytes(MOST_BYTES + 1);
     if (bytes.length > MOST_BYTES) {
       throw new RefusedRequestException(
-          "photoTooBig", "The photograph is larger than 20 MB: take it with fewer pixels.");
+          "photoTooBig", "The picture is larger than 20 MB: take one with fewer pixels.");
     }
     String format = format(bytes);
-    BufferedImage upright;
     try {
-      upright = ExifOrientation.of(bytes).upright(smaller(format, bytes));
+      return ExifOrientation.of(bytes).upright(smaller(format, bytes, longestSide));
     } catch (IOException | IllegalArgumentException | IndexOutOfBoundsException e) {
       throw damaged(e);
     }
-    return new Cleaned(jpeg(upright), upright.getWidth(), upright.getHeight());
   }
 
   private static String format(byte[] b) {
@@ -73,7 +82,8 @@ final class PhotoCleaner {
         "photoFormat", "The file is neither a JPEG nor a PNG picture: choose another.");
   }
 
-  private static BufferedImage smaller(String format, byte[] bytes) throws IOException {
+  private static BufferedImage smaller(String format, byte[] bytes, int longestSide)
+      throws IOException {
     Iterator<ImageReader> readers = ImageIO.getImageReadersByFormatName(format);
     ImageReader reader = readers.next();
     ImageIO.setUseCache(false);
@@ -83,22 +93,22 @@ final class PhotoCleaner {
       int height = reader.getHeight(0);
       if ((long) width * height > MOST_PIXELS) {
         throw new RefusedRequestException(
-            "photoTooBig", "The photograph has more than 120 million pixels: take a smaller one.");
+            "photoTooBig", "The picture has more than 120 million pixels: take a smaller one.");
       }
       ImageReadParam param = reader.getDefaultReadParam();
       // leaves up to twice the wanted size; the rest is done smoothly
-      int step = Math.max(1, Math.max(width, height) / (2 * LONGEST_SIDE_PX));
+      int step = Math.max(1, Math.max(width, height) / (2 * longestSide));
       param.setSourceSubsampling(step, step, 0, 0);
-      return scaled(reader.read(0, param));
+      return scaled(reader.read(0, param), longestSide);
     } finally {
       reader.dispose();
     }
   }
 
   /** Also puts the picture on white, where a PNG lets through what is behind it. */
-  private static BufferedImage scaled(BufferedImage image) {
+  private static BufferedImage scaled(BufferedImage image, int longestSide) {
     double scale =
-        Math.min(1, LONGEST_SIDE_PX / (double) Math.max(image.getWidth(), image.getHeight()));
+        Math.min(1, longestSide / (double) Math.max(image.getWidth(), image.getHeight()));
     int width = Math.max(1, (int) Math.round(image.getWidth() * scale));
     int height = Math.max(1, (int) Math.round(image.getHeight() * scale));
     BufferedImage plain = new BufferedImage(width, height, BufferedImage.TYPE_INT_RGB);

@@ -8,6 +8,7 @@ import org.jspecify.annotations.Nullable;
  *
  * @param number runs without a gap through all reports of the shop
  * @param language {@code en} or {@code de}
+ * @param paper that it is printed on, as CSS names it: {@code A4} or {@code letter}
  * @param measuredBy who did the work
  * @param releasedBy who answers for the report
  * @param conditions of the test: mains, room, warming up; may be empty
@@ -19,6 +20,7 @@ public record Issue(
     long number,
     Instant issuedAt,
     String language,
+    String paper,
     String measuredBy,
     String releasedBy,
     String conditions,

@@ -4,6 +4,7 @@ import java.time.Instant;
 import java.util.List;
 import org.jspecify.annotations.Nullable;
 import turnsheet.core.diagnose.DecisionRule;
+import turnsheet.shop.FittedPart;
 
 /**
  * What a visit has shown, with everything that page, paper and an issued report need of it: it
@@ -32,6 +33,9 @@ public record Sheet(
    * The unit and its stay.
    *
    * @param closedAt when it was handed back; null while it stays
+   * @param parts that were fitted
+   * @param sensor which sensor was fitted in place of the old one; may be empty, null where none
+   *     was
    */
   public record Item(
       String modelName,
@@ -41,7 +45,14 @@ public record Sheet(
       Instant openedAt,
       @Nullable Instant closedAt,
       String complaint,
-      String workDone) {}
+      String workDone,
+      List<FittedPart> parts,
+      @Nullable String sensor) {
+
+    public Item {
+      parts = List.copyOf(parts);
+    }
+  }
 
   /**
    * By what the figures were judged and compared.

@@ -116,6 +116,8 @@ public class Sheets {
         visit.openedAt(),
         visit.closedAt(),
         visit.complaint(),
-        visit.workDone());
+        visit.workDone(),
+        visit.notes().parts(),
+        visit.notes().sensorReplaced() ? visit.notes().sensorNote() : null);
   }
 }

@@ -86,7 +86,11 @@ class SecurityConfig {
                     .requestMatchers(OPEN_TO_ALL)
                     .permitAll()
                     .requestMatchers(
-                        "/shop/people/**", "/shop/profile", "/shop/rules", "/shop/preferences")
+                        "/shop/people/**",
+                        "/shop/profile",
+                        "/shop/rules",
+                        "/shop/logo/**",
+                        "/shop/preferences")
                     .hasRole(Role.OWNER.name())
                     .anyRequest()
                     .authenticated())

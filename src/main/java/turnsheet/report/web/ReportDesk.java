@@ -8,6 +8,7 @@ import org.springframework.stereotype.Service;
 import org.springframework.transaction.annotation.Transactional;
 import turnsheet.access.AuditTrail;
 import turnsheet.access.CurrentUser;
+import turnsheet.access.ShopPreferences;
 import turnsheet.report.Issue;
 import turnsheet.report.Report;
 import turnsheet.report.Reports;
@@ -24,6 +25,7 @@ public class ReportDesk {
   private final Sheets sheets;
   private final Reports reports;
   private final SheetPrinting printing;
+  private final ShopPreferences preferences;
   private final CurrentUser user;
   private final AuditTrail audit;
   private final Clock clock;
@@ -32,12 +34,14 @@ public class ReportDesk {
       Sheets sheets,
       Reports reports,
       SheetPrinting printing,
+      ShopPreferences preferences,
       CurrentUser user,
       AuditTrail audit,
       Clock clock) {
     this.sheets = sheets;
     this.reports = reports;
     this.printing = printing;
+    this.preferences = preferences;
     this.user = user;
     this.audit = audit;
     this.clock = clock;
@@ -118,6 +122,7 @@ public class ReportDesk {
                         number,
                         clock.instant().truncatedTo(ChronoUnit.MICROS),
                         wish.language(),
+                        preferences.get().paper().css(),
                         wish.measuredBy().strip(),
                         wish.releasedBy().strip(),
                         wish.conditions().strip(),

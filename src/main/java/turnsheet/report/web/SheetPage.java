@@ -6,6 +6,7 @@ import org.jspecify.annotations.Nullable;
 /**
  * A sheet with everything in words, as page, paper and PDF show it.
  *
+ * @param paper as CSS names it; empty for a sheet that is not issued
  * @param title of the sheet
  * @param identity line that runs along on every sheet of paper
  * @param logo data address; null where the shop has none
@@ -19,6 +20,7 @@ import org.jspecify.annotations.Nullable;
  */
 public record SheetPage(
     String language,
+    String paper,
     String title,
     String identity,
     String shopName,

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
+import java.util.stream.Collectors;
 import org.jspecify.annotations.Nullable;
 import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
@@ -47,6 +48,7 @@ public class SheetPages {
     String identity = sheet.item().modelName() + ", " + sheet.item().serialNumber();
     return new SheetPage(
         locale.getLanguage(),
+        report == null ? "" : issue(report).paper(),
         title,
         title + ", " + identity,
         sheet.shop().name(),
@@ -89,6 +91,10 @@ public class SheetPages {
             : times.day(item.openedAt(), locale) + " – " + times.day(item.closedAt(), locale));
     add(facts, words, "complaint", item.complaint());
     add(facts, words, "work", item.workDone());
+    add(facts, words, "parts", parts(item));
+    if (item.sensor() != null) {
+      add(facts, words, "sensor", words.text("report.fact.sensor.replaced") + "\n" + item.sensor());
+    }
     if (report != null) {
       Issue issue = issue(report);
       add(facts, words, "conditions", issue.conditions());
@@ -105,6 +111,12 @@ public class SheetPages {
     if (!lines.isEmpty()) {
       facts.add(new SheetPage.Fact(words.text("report.fact." + key), lines));
     }
+  }
+
+  private static String parts(Sheet.Item item) {
+    return item.parts().stream()
+        .map(p -> p.quantity() == null ? p.name() : p.quantity() + " × " + p.name())
+        .collect(Collectors.joining("\n"));
   }
 
   private static List<String> lines(String text) {

@@ -3,14 +3,18 @@ package turnsheet.report.web;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.springframework.security.test.web.servlet.request.SecurityMockMvcRequestPostProcessors.csrf;
 import static org.springframework.test.web.servlet.request.MockMvcRequestBuilders.get;
+import static org.springframework.test.web.servlet.request.MockMvcRequestBuilders.multipart;
 import static org.springframework.test.web.servlet.request.MockMvcRequestBuilders.post;
 import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.header;
 import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.status;
 
+import java.awt.image.BufferedImage;
+import java.io.ByteArrayOutputStream;
 import java.time.Clock;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Objects;
+import javax.imageio.ImageIO;
 import org.apache.pdfbox.Loader;
 import org.apache.pdfbox.pdmodel.PDDocument;
 import org.apache.pdfbox.pdmodel.PDPage;
@@ -20,6 +24,7 @@ import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.springframework.beans.factory.annotation.Autowired;
 import org.springframework.jdbc.core.simple.JdbcClient;
+import org.springframework.mock.web.MockMultipartFile;
 import org.springframework.test.web.servlet.MockMvc;
 import org.springframework.transaction.support.TransactionTemplate;
 import turnsheet.access.ShopProfiles;
@@ -158,6 +163,31 @@ class ReportPagesTest {
       assertThat(document.getDocumentCatalog().getLanguage()).isEqualTo("de");
       assertThat(new PDFTextStripper().getText(document)).contains("Seite 1 / ");
     }
+  }
+
+  @Test
+  void aMarkStandsAtTheHeadOfReportsToCome() throws Exception {
+    BufferedImage picture = new BufferedImage(900, 300, BufferedImage.TYPE_INT_ARGB);
+    ByteArrayOutputStream png = new ByteArrayOutputStream();
+    ImageIO.write(picture, "png", png);
+    mvc.perform(
+            multipart("/shop/logo")
+                .file(new MockMultipartFile("picture", "m.png", "image/png", png.toByteArray()))
+                .with(csrf()))
+        .andExpect(status().is3xxRedirection());
+    long number = issue("en");
+    mvc.perform(post("/shop/logo/remove").with(csrf())).andExpect(status().is3xxRedirection());
+
+    assertThat(page("/reports/" + number)).contains("src=\"data:image/png;base64,");
+    try (PDDocument document = Loader.loadPDF(pdf(number))) {
+      assertThat(document.getPage(0).getResources().getXObjectNames()).isNotEmpty();
+    }
+    mvc.perform(
+            multipart("/shop/logo")
+                .file(new MockMultipartFile("picture", "m.png", "image/png", new byte[100]))
+                .with(csrf()))
+        .andExpect(status().is(422));
+    assertThat(profiles.logo()).isEmpty();
   }
 
   @Test
