@@ -18,6 +18,7 @@ import turnsheet.demo.SampleFolder;
       "turnsheet.access",
       "turnsheet.bench",
       "turnsheet.capture",
+      "turnsheet.exchange",
       "turnsheet.job",
       "turnsheet.reading",
       "turnsheet.report",

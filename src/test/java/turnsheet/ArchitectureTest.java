@@ -39,6 +39,7 @@ class ArchitectureTest {
           "turnsheet.bench",
           "turnsheet.report",
           "turnsheet.share",
+          "turnsheet.exchange",
           "turnsheet.demo");
 
   private static final JavaClasses CLASSES =

@@ -35,7 +35,9 @@ public class Corrections {
       throw Intake.busy();
     }
     Looked looked = capture.looked();
-    if (looked != null && capture.state() == CaptureState.RECOGNISED) {
+    if (looked != null
+        && capture.state() == CaptureState.RECOGNISED
+        && looker.holds(capture.bytes())) {
       captures.noted(id, looker.look(capture.bytes(), looked.options(), around));
     }
     return captures.find(id).orElseThrow();

@@ -157,6 +157,9 @@ public class Intake {
     }
     CaptureChoices choices = Choosing.choices(wish, looked, around);
     if (!chosen(capture, looked, choices)) {
+      if (!store.holds(capture.bytes())) {
+        throw MissingFile.refused();
+      }
       order(id, looked, choices);
     }
     return captures.find(id).orElseThrow();

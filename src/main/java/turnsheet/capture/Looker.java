@@ -44,6 +44,11 @@ class Looker {
 
   record Unusable(Rejection why) implements Result {}
 
+  /** Whether the bytes lie here; those of an imported capture may not. */
+  boolean holds(StoredBytes bytes) {
+    return store.holds(bytes);
+  }
+
   /** Looks, with the rates that the surroundings name. */
   Result look(StoredBytes bytes, ReadOptions options, Surroundings around) {
     return look(bytes, options, around.toneHz(), around.pulsesPerSecond());
@@ -60,6 +65,9 @@ class Looker {
       ReadOptions options,
       @Nullable Double toneHz,
       @Nullable Double pulsesPerSecond) {
+    if (!holds(bytes)) {
+      throw MissingFile.refused();
+    }
     try {
       return lookInto(bytes, options, toneHz, pulsesPerSecond);
     } catch (IOException | RuntimeException e) {

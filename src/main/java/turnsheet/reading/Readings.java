@@ -168,7 +168,9 @@ public final class Readings {
             .query(UUID.class)
             .optional();
     if (same.isPresent()) {
-      return new ReadingId(same.get());
+      ReadingId kept = new ReadingId(same.get());
+      addCurves(kept, series);
+      return kept;
     }
     ReadingId id = ReadingId.next();
     jdbc.sql(
@@ -184,13 +186,30 @@ public final class Readings {
             document,
             reading.source().channel())
         .update();
+    addFigures(id, reading);
+    addCurves(id, series);
+    return id;
+  }
+
+  /** A reading that came with an import has none before its capture is measured again. */
+  private void addCurves(ReadingId id, KeptSeries series) {
+    long kept =
+        jdbc.sql("select count(*) from reading_series where reading_id = ?")
+            .param(id.value())
+            .query(Long.class)
+            .single();
+    if (kept == 0) {
+      series.contents().forEach((name, content) -> addSeries(id, name, content));
+    }
+  }
+
+  /** Enters the figures of a reading whose document is there, for whoever looks for figures. */
+  public void addFigures(ReadingId id, Reading reading) {
     for (FigureName name : FigureName.values()) {
       Figure figure = name.of(reading);
       addFigure(id, name.path(), figure.value(), figure.expandedUncertainty());
     }
     addFigure(id, Floors.PATH, reading.signal().floorPercent().value(), null);
-    series.contents().forEach((name, content) -> addSeries(id, name, content));
-    return id;
   }
 
   private void addFigure(

@@ -9,14 +9,15 @@ import turnsheet.access.Secrets;
  * <p>The first 80 bits of the content's SHA-256, in twenty hexadecimal digits by fives: a second
  * content of the same code takes 2^80 trials to find.
  */
-final class CheckCode {
+public final class CheckCode {
 
   private static final int DIGITS = 20;
   private static final int GROUP = 5;
 
   private CheckCode() {}
 
-  static String of(String content) {
+  /** The code of a content, as it is printed: {@code 0a1b2-c3d4e-5f607-18293}. */
+  public static String of(String content) {
     return grouped(Secrets.sha256(content).substring(0, DIGITS));
   }
 

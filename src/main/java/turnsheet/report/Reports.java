@@ -88,12 +88,19 @@ public final class Reports {
         .optional();
   }
 
-  /** The printed form as it was made when the report was issued. */
-  public Optional<byte[]> pdf(long number) {
-    return jdbc.sql("select pdf from report where number = ?")
-        .param(number)
-        .query((row, n) -> row.getBytes(1))
-        .optional();
+  /**
+   * The printed form as it was made when the report was issued; afresh where the report came with
+   * an import.
+   *
+   * @param print makes the PDF of a report
+   */
+  public Optional<byte[]> pdf(long number, Function<Report, byte[]> print) {
+    List<byte[]> kept =
+        jdbc.sql("select pdf from report where number = ? and pdf is not null")
+            .param(number)
+            .query((row, n) -> row.getBytes(1))
+            .list();
+    return kept.isEmpty() ? find(number).map(print) : Optional.of(kept.get(0));
   }
 
   /** Reports of a visit, newest first. */

@@ -90,7 +90,8 @@ class SecurityConfig {
                         "/shop/profile",
                         "/shop/rules",
                         "/shop/logo/**",
-                        "/shop/preferences")
+                        "/shop/preferences",
+                        "/import")
                     .hasRole(Role.OWNER.name())
                     .anyRequest()
                     .authenticated())

@@ -122,11 +122,12 @@ class CaptureController {
     Looked looked = capture.looked();
     Proposal proposal = looked == null ? null : intake.proposal(looked, around);
     PreviewDrawing drawing =
-        looked == null
+        looked == null || !desk.holds(capture)
             ? null
             : previews.of(capture.bytes(), looked).map(PreviewDrawing::of).orElse(null);
     WishForm form = typed == null ? WishForm.prefilled(capture, proposal) : typed;
     model.addAttribute("page", CapturePage.of(capture, around, proposal, drawing, form, times));
+    model.addAttribute("fileMissing", !desk.holds(capture));
     model.addAttribute("progress", desk.progress(capture.id().value()));
     return "capture/capture";
   }

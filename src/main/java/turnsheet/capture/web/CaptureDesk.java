@@ -18,6 +18,7 @@ import turnsheet.capture.CaptureId;
 import turnsheet.capture.CaptureStore;
 import turnsheet.capture.Captures;
 import turnsheet.capture.Intake;
+import turnsheet.capture.MissingFile;
 import turnsheet.capture.StoreException;
 import turnsheet.capture.UploadTrouble;
 import turnsheet.job.JobId;
@@ -58,6 +59,11 @@ class CaptureDesk {
     }
   }
 
+  /** Whether the file of a capture lies here; that of an imported one may not. */
+  boolean holds(Capture capture) {
+    return store.holds(capture.bytes());
+  }
+
   ProgressDocument progress(UUID id) {
     Capture capture = capture(id);
     JobId job = capture.job();
@@ -67,6 +73,9 @@ class CaptureDesk {
   /** The original bytes, always as a download, never as something that a browser would run. */
   ResponseEntity<Resource> file(UUID id) throws IOException {
     Capture capture = capture(id);
+    if (!holds(capture)) {
+      throw MissingFile.refused();
+    }
     return ResponseEntity.ok()
         .contentType(MediaType.APPLICATION_OCTET_STREAM)
         .contentLength(capture.bytes().length())

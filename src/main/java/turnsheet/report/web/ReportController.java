@@ -67,7 +67,8 @@ class ReportController {
 
   @GetMapping("/reports/{number}/pdf")
   ResponseEntity<byte[]> pdf(@PathVariable long number) {
-    byte[] pdf = reports.pdf(number).orElseThrow(() -> new NotFoundException("report"));
+    byte[] pdf =
+        reports.pdf(number, printing::pdf).orElseThrow(() -> new NotFoundException("report"));
     return ResponseEntity.ok()
         .contentType(MediaType.APPLICATION_PDF)
         .header(

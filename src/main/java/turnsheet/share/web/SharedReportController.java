@@ -140,7 +140,7 @@ class SharedReportController {
 
   private ResponseEntity<byte[]> pdf(Optional<Long> number) {
     return number
-        .flatMap(reports::pdf)
+        .flatMap(n -> reports.pdf(n, printing::pdf))
         .map(
             pdf ->
                 ResponseEntity.ok()

@@ -1,0 +1,265 @@
+package turnsheet.exchange;
+
+import static turnsheet.exchange.Member.decimal;
+import static turnsheet.exchange.Member.document;
+import static turnsheet.exchange.Member.id;
+import static turnsheet.exchange.Member.text;
+import static turnsheet.exchange.Member.time;
+import static turnsheet.exchange.Member.whole;
+
+import java.util.List;
+
+/** What an export holds; a kind refers to kinds before it only. */
+final class Kinds {
+
+  static final String SETTING_TABLE = "speed_setting";
+  static final String SETTINGS = "settings";
+
+  static final Kind INSTRUMENTS =
+      new Kind(
+          "instruments",
+          "bench_instrument",
+          "name",
+          "",
+          "id in (select instrument_id from capture where visit_id in ({visits}))",
+          List.of(
+              id("id"),
+              text("name"),
+              decimal("clockErrorPpm"),
+              decimal("clockExpandedUncertaintyPpm").orNull(),
+              Member.of("checkedOn", MemberType.DAY).orNull(),
+              text("note")),
+          List.of());
+
+  static final Kind MEDIA =
+      new Kind(
+          "media",
+          "reference_medium",
+          "name",
+          "",
+          "id in (select medium_id from capture where visit_id in ({visits}))",
+          List.of(
+              id("id"),
+              text("name"),
+              decimal("toneHz").orNull(),
+              decimal("speedTolerancePercent"),
+              decimal("ownFlutterPercent").orNull(),
+              text("note")),
+          List.of());
+
+  static final Kind MODELS =
+      new Kind(
+          "models",
+          "machine_model",
+          "name",
+          "",
+          "id in (select model_id from unit where {unit})",
+          List.of(id("id"), text("name"), whole("pulsesPerTurn").orNull(), text("note")),
+          List.of(
+              new Part(
+                  SETTINGS,
+                  SETTING_TABLE,
+                  "model_id",
+                  "position",
+                  "position",
+                  List.of(
+                      id("id"),
+                      text("label"),
+                      text("speedUnit"),
+                      decimal("nominalSpeed"),
+                      decimal("toneHz").orNull(),
+                      decimal("pulsesPerSecond").orNull())),
+              new Part(
+                  "parts",
+                  "rotating_part",
+                  "model_id",
+                  "position",
+                  "position",
+                  List.of(
+                      text("name"),
+                      text("basis"),
+                      decimal("amount"),
+                      text("referencePart").orNull())),
+              new Part(
+                  "limits",
+                  "service_limit",
+                  "model_id",
+                  "position",
+                  "position",
+                  List.of(
+                      id("speedSettingId"),
+                      text("figure"),
+                      decimal("upperBound"),
+                      text("origin")))));
+
+  static final Kind CUSTOMERS =
+      new Kind(
+          "customers",
+          "customer",
+          "name",
+          "created_at,",
+          "id in (select customer_id from unit where {unit})",
+          List.of(id("id"), text("name"), text("contact"), time("createdAt")),
+          List.of());
+
+  static final Kind UNITS =
+      new Kind(
+          "units",
+          "unit",
+          "serialNumber",
+          "created_at,",
+          "{unit}",
+          List.of(
+              id("id"),
+              text("code"),
+              id("modelId").naming("machine_model"),
+              id("customerId").naming("customer"),
+              text("serialNumber"),
+              text("note"),
+              time("createdAt")),
+          List.of());
+
+  static final Kind VISITS =
+      new Kind(
+          "visits",
+          "visit",
+          "openedAt",
+          "opened_at,",
+          "id in ({visits})",
+          List.of(
+              id("id"),
+              id("unitId").naming("unit"),
+              time("openedAt"),
+              time("closedAt").orNull(),
+              text("complaint"),
+              text("workDone"),
+              Member.of("sensorReplaced", MemberType.FLAG),
+              text("sensorNote")),
+          List.of(
+              new Part(
+                  "partsFitted",
+                  "fitted_part",
+                  "visit_id",
+                  "position",
+                  "position",
+                  List.of(text("name"), whole("quantity").orNull()))));
+
+  static final Kind CLOCK_CHECKS =
+      new Kind(
+          "clockChecks",
+          "clock_check",
+          "madeAt",
+          "made_at,",
+          "instrument_id in (select instrument_id from capture where visit_id in ({visits}))",
+          List.of(
+              id("id"),
+              id("instrumentId").naming("bench_instrument"),
+              time("madeAt"),
+              text("madeBy"),
+              text("source"),
+              decimal("referenceHz"),
+              decimal("referenceExpandedUncertaintyPpm"),
+              text("fileName"),
+              text("sha256"),
+              whole("byteLength"),
+              text("format"),
+              text("kind"),
+              whole("channel"),
+              decimal("sampleRateHz").orNull(),
+              decimal("durationSeconds"),
+              text("methodVersion"),
+              decimal("measuredHz"),
+              decimal("recordingPpm"),
+              decimal("errorPpm"),
+              decimal("expandedUncertaintyPpm"),
+              decimal("keepingPpm"),
+              document("warnings"),
+              time("takenAt").orNull(),
+              text("takenBy").orNull(),
+              decimal("beforeErrorPpm").orNull(),
+              decimal("beforeExpandedUncertaintyPpm").orNull(),
+              Member.of("beforeCheckedOn", MemberType.DAY).orNull()),
+          List.of());
+
+  static final Kind CAPTURES =
+      new Kind(
+          "captures",
+          "capture",
+          "fileName",
+          "received_at,",
+          "visit_id in ({visits})",
+          List.of(
+              id("id"),
+              id("visitId").naming("visit"),
+              id("speedSettingId").naming(SETTING_TABLE),
+              text("condition").in("bench_condition"),
+              id("instrumentId").naming("bench_instrument").orNull(),
+              id("mediumId").naming("reference_medium").orNull(),
+              text("fileName"),
+              text("sha256"),
+              whole("byteLength"),
+              time("receivedAt"),
+              text("receivedBy"),
+              // the order to measure does not travel
+              text("state")
+                  .selectedBy("case when state = 'queued' then 'recognised' else state end"),
+              whole("mainChannel"),
+              text("toneMethod").orNull(),
+              text("settingProposal").orNull(),
+              document("recognition").orNull(),
+              document("choices").orNull(),
+              text("refusalCode").orNull(),
+              text("refusalMessage").orNull()),
+          List.of(
+              new Part(
+                  "refusedChannels",
+                  "refused_channel",
+                  "capture_id",
+                  null,
+                  "channel",
+                  List.of(whole("channel"), text("code"), text("message")))));
+
+  static final Kind READINGS =
+      new Kind(
+          "readings",
+          "reading",
+          "madeAt",
+          "made_at,",
+          "capture_id in (select id from capture where visit_id in ({visits}))",
+          List.of(
+              id("id"),
+              id("captureId").naming("capture"),
+              whole("channel"),
+              time("madeAt"),
+              document("document")),
+          List.of());
+
+  static final Kind REPORTS =
+      new Kind(
+          "reports",
+          "report",
+          "number",
+          "number,",
+          "visit_id in ({visits})",
+          List.of(
+              whole("number"),
+              id("visitId").naming("visit"),
+              text("checkCode"),
+              Member.of("content", MemberType.CONTENT)),
+          List.of());
+
+  static final List<Kind> ALL =
+      List.of(
+          INSTRUMENTS,
+          MEDIA,
+          MODELS,
+          CUSTOMERS,
+          UNITS,
+          VISITS,
+          CLOCK_CHECKS,
+          CAPTURES,
+          READINGS,
+          REPORTS);
+
+  private Kinds() {}
+}
