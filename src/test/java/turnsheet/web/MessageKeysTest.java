@@ -90,6 +90,24 @@ class MessageKeysTest {
     }
   }
 
+  /**
+   * A text is a pattern, in which an apostrophe stands twice, only where something is filled in.
+   */
+  @Test
+  void apostrophesArriveAsOne() throws IOException {
+    for (Path file : files("resources/messages", ".properties")) {
+      Properties texts = read(file);
+      for (String key : texts.stringPropertyNames()) {
+        String text = texts.getProperty(key);
+        if (places(text).isEmpty()) {
+          assertThat(text).as(key).doesNotContain("''");
+        } else {
+          assertThat(text.replace("''", "")).as(key).doesNotContain("'");
+        }
+      }
+    }
+  }
+
   private static Set<String> places(String text) {
     return Pattern.compile("\\{\\d")
         .matcher(text)
