@@ -2,6 +2,7 @@ package turnsheet.browser;
 
 import static org.assertj.core.api.Assertions.assertThat;
 
+import java.io.IOException;
 import java.nio.file.Path;
 import java.time.Duration;
 import java.util.ArrayDeque;
@@ -46,6 +47,7 @@ class AccessibilityIT {
   private RunningService service;
   private Visitor visitor;
   private Audit audit;
+  private SentPages sent;
   private String linksPage = "";
 
   @BeforeAll
@@ -53,6 +55,7 @@ class AccessibilityIT {
     service = RunningService.start("demo", folder);
     visitor = new Visitor(1280, 900);
     audit = new Audit(visitor);
+    sent = new SentPages(visitor);
   }
 
   @AfterAll
@@ -67,13 +70,13 @@ class AccessibilityIT {
     var wrong = new ArrayList<String>();
 
     visitor.open(service.address("/sign-in"));
-    wrong.addAll(audit.of("/sign-in", 200));
+    wrong.addAll(look("/sign-in", 200));
     visitor.open(door);
-    wrong.addAll(audit.of("/enter", 200));
+    wrong.addAll(look("/enter", 200));
     visitor.pressButton("Sign in");
     Set<String> shapes = crawl(wrong);
     visitor.open(service.address("/no-such-page"));
-    wrong.addAll(audit.of("/no-such-page", 404));
+    wrong.addAll(look("/no-such-page", 404));
     wrong.addAll(sharing(shapes));
 
     System.out.println("Pages looked at: " + String.join(" ", shapes));
@@ -82,10 +85,18 @@ class AccessibilityIT {
         .contains("/", "/units/{id}", "/visits/{id}", "/readings/{id}", "/models/{id}", "/shop")
         .contains("/units/{id}/label", "/shop/preferences", "/visits/{id}/remove")
         .contains("/instruments/{id}/clock-checks/{id}", "/instruments/{id}/clock-checks/new");
+    // the signed-in shapes and the six pages opened by hand, each with its file for the checker
+    assertThat(sent.count()).isGreaterThanOrEqualTo(shapes.size() + 6);
     assertThat(wrong).as(String.join("\n", wrong)).isEmpty();
   }
 
-  private Set<String> crawl(List<String> wrong) {
+  /** Keeps the page for the markup checker and tells what is wrong with it. */
+  private List<String> look(String page, int status) throws IOException {
+    sent.keep(page);
+    return audit.of(page, status);
+  }
+
+  private Set<String> crawl(List<String> wrong) throws IOException {
     var seen = new HashMap<String, Integer>();
     var queued = new HashSet<String>();
     var queue = new ArrayDeque<String>();
@@ -98,7 +109,7 @@ class AccessibilityIT {
       }
       seen.merge(shape, 1, Integer::sum);
       visitor.open(address);
-      wrong.addAll(audit.of(shape, 200));
+      wrong.addAll(look(shape, 200));
       for (Object link : (List<?>) visitor.script(LINKS)) {
         String next = String.valueOf(link);
         if (next.startsWith(service.address("/"))
@@ -112,17 +123,17 @@ class AccessibilityIT {
   }
 
   /** The customer's page, and what is left of it when the link is withdrawn. */
-  private List<String> sharing(Set<String> shapes) {
+  private List<String> sharing(Set<String> shapes) throws IOException {
     assertThat(shapes).contains("/reports/{id}/links");
     var wrong = new ArrayList<String>();
     visitor.open(service.address(linksPage));
     visitor.pressButton("Make a link");
-    wrong.addAll(audit.of("/reports/{id}/links with a new link", 200));
+    wrong.addAll(look("/reports/{id}/links with a new link", 200));
     String shared = visitor.find("#address").getDomProperty("value");
     visitor.open(shared);
-    wrong.addAll(audit.of("/s/{token}", 200));
+    wrong.addAll(look("/s/{token}", 200));
     visitor.open(service.address("/s/none"));
-    wrong.addAll(audit.of("/s/none", 404));
+    wrong.addAll(look("/s/none", 404));
     return wrong;
   }
 
