@@ -58,7 +58,7 @@ public final class Export {
 
   /** A row a figure; the caller closes the writer. */
   public void writeCsv(Scope scope, Writer out) throws IOException {
-    inSnapshot(() -> figures.write(books.keys(Kinds.READINGS, scope), out));
+    inSnapshot(() -> figures.write(books.keys(BenchKinds.READINGS, scope), out));
     out.flush();
   }
 

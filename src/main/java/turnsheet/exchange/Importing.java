@@ -120,7 +120,7 @@ final class Importing implements ExportReader.Taker {
       missing.add(member.name());
     }
     Long revised = revised(entry, place);
-    if (revised != null && left.contains(new Row(Kinds.REPORTS.table(), revised))) {
+    if (revised != null && left.contains(new Row(BenchKinds.REPORTS.table(), revised))) {
       missing.add("revises");
     } else if (revised != null && !places.hasReport(revised)) {
       throw refused(entry, place, "it revises a report that is neither here nor in the file");
@@ -140,12 +140,12 @@ final class Importing implements ExportReader.Taker {
   }
 
   private boolean revisedOtherwise(Entry entry) {
-    Long revised = entry.is(Kinds.REPORTS) ? Checks.revises(entry) : null;
+    Long revised = entry.is(BenchKinds.REPORTS) ? Checks.revises(entry) : null;
     return revised != null && places.reportRevised(revised);
   }
 
   private static @Nullable Long revised(Entry entry, Place place) {
-    if (!entry.is(Kinds.REPORTS)) {
+    if (!entry.is(BenchKinds.REPORTS)) {
       return null;
     }
     try {

@@ -1,7 +1,6 @@
 package turnsheet.exchange;
 
 import static turnsheet.exchange.Member.decimal;
-import static turnsheet.exchange.Member.document;
 import static turnsheet.exchange.Member.id;
 import static turnsheet.exchange.Member.text;
 import static turnsheet.exchange.Member.time;
@@ -144,110 +143,6 @@ final class Kinds {
                   "position",
                   List.of(text("name"), whole("quantity").orNull()))));
 
-  static final Kind CLOCK_CHECKS =
-      new Kind(
-          "clockChecks",
-          "clock_check",
-          "madeAt",
-          "made_at,",
-          "instrument_id in (select instrument_id from capture where visit_id in ({visits}))",
-          List.of(
-              id("id"),
-              id("instrumentId").naming("bench_instrument"),
-              time("madeAt"),
-              text("madeBy"),
-              text("source"),
-              decimal("referenceHz"),
-              decimal("referenceExpandedUncertaintyPpm"),
-              text("fileName"),
-              text("sha256"),
-              whole("byteLength"),
-              text("format"),
-              text("kind"),
-              whole("channel"),
-              decimal("sampleRateHz").orNull(),
-              decimal("durationSeconds"),
-              text("methodVersion"),
-              decimal("measuredHz"),
-              decimal("recordingPpm"),
-              decimal("errorPpm"),
-              decimal("expandedUncertaintyPpm"),
-              decimal("keepingPpm"),
-              document("warnings"),
-              time("takenAt").orNull(),
-              text("takenBy").orNull(),
-              decimal("beforeErrorPpm").orNull(),
-              decimal("beforeExpandedUncertaintyPpm").orNull(),
-              Member.of("beforeCheckedOn", MemberType.DAY).orNull()),
-          List.of());
-
-  static final Kind CAPTURES =
-      new Kind(
-          "captures",
-          "capture",
-          "fileName",
-          "received_at,",
-          "visit_id in ({visits})",
-          List.of(
-              id("id"),
-              id("visitId").naming("visit"),
-              id("speedSettingId").naming(SETTING_TABLE),
-              text("condition").in("bench_condition"),
-              id("instrumentId").naming("bench_instrument").orNull(),
-              id("mediumId").naming("reference_medium").orNull(),
-              text("fileName"),
-              text("sha256"),
-              whole("byteLength"),
-              time("receivedAt"),
-              text("receivedBy"),
-              // the order to measure does not travel
-              text("state")
-                  .selectedBy("case when state = 'queued' then 'recognised' else state end"),
-              whole("mainChannel"),
-              text("toneMethod").orNull(),
-              text("settingProposal").orNull(),
-              document("recognition").orNull(),
-              document("choices").orNull(),
-              text("refusalCode").orNull(),
-              text("refusalMessage").orNull()),
-          List.of(
-              new Part(
-                  "refusedChannels",
-                  "refused_channel",
-                  "capture_id",
-                  null,
-                  "channel",
-                  List.of(whole("channel"), text("code"), text("message")))));
-
-  static final Kind READINGS =
-      new Kind(
-          "readings",
-          "reading",
-          "madeAt",
-          "made_at,",
-          "capture_id in (select id from capture where visit_id in ({visits}))",
-          List.of(
-              id("id"),
-              id("captureId").naming("capture"),
-              whole("channel"),
-              time("madeAt"),
-              document("document")),
-          List.of());
-
-  static final Kind REPORTS =
-      new Kind(
-          "reports",
-          "report",
-          "number",
-          "number,",
-          "visit_id in ({visits})",
-          List.of(
-              whole("number"),
-              id("visitId").naming("visit"),
-              text("checkCode"),
-              Member.of("content", MemberType.CONTENT)),
-          List.of());
-
   static final List<Kind> ALL =
       List.of(
           INSTRUMENTS,
@@ -256,10 +151,10 @@ final class Kinds {
           CUSTOMERS,
           UNITS,
           VISITS,
-          CLOCK_CHECKS,
-          CAPTURES,
-          READINGS,
-          REPORTS);
+          BenchKinds.CLOCK_CHECKS,
+          BenchKinds.CAPTURES,
+          BenchKinds.READINGS,
+          BenchKinds.REPORTS);
 
   private Kinds() {}
 }

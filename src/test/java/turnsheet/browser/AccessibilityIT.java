@@ -77,16 +77,19 @@ class AccessibilityIT {
     Set<String> shapes = crawl(wrong);
     visitor.open(service.address("/no-such-page"));
     wrong.addAll(look("/no-such-page", 404));
+    visitor.open(service.address("/import"));
+    wrong.addAll(look("/import", 200));
     wrong.addAll(sharing(shapes));
 
     System.out.println("Pages looked at: " + String.join(" ", shapes));
     assertThat(shapes)
         .contains("/reports", "/reports/{id}", "/reports/{id}/revise", "/check")
+        .contains("/export", "/export?unit=", "/export?visit=")
         .contains("/", "/units/{id}", "/visits/{id}", "/readings/{id}", "/models/{id}", "/shop")
         .contains("/units/{id}/label", "/shop/preferences", "/visits/{id}/remove")
         .contains("/instruments/{id}/clock-checks/{id}", "/instruments/{id}/clock-checks/new");
-    // the signed-in shapes and the six pages opened by hand, each with its file for the checker
-    assertThat(sent.count()).isGreaterThanOrEqualTo(shapes.size() + 6);
+    // the signed-in shapes and the seven pages opened by hand, each with its file for the checker
+    assertThat(sent.count()).isGreaterThanOrEqualTo(shapes.size() + 7);
     assertThat(wrong).as(String.join("\n", wrong)).isEmpty();
   }
 
