@@ -120,10 +120,11 @@ public final class Readings {
     return jdbc.sql(
             """
             select r.*, c.speed_setting_id, c.bench_condition, c.file_name, c.received_at,
-              c.tone_method, i.name as instrument_name, m.name as medium_name
+              c.tone_method, i.name as instrument_name, m.name as medium_name, l.reason as left_out
             from reading r join capture c on c.id = r.capture_id
               left join bench_instrument i on i.id = c.instrument_id
               left join reference_medium m on m.id = c.medium_id
+              left join left_out_capture l on l.capture_id = c.id
             where c.visit_id = ? and c.state = 'measured' and %s
             order by c.received_at, c.id
             """

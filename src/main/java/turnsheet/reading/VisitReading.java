@@ -17,6 +17,7 @@ import turnsheet.shop.SpeedSettingId;
  * @param instrument that recorded it; null where nobody said
  * @param medium that was played; null where nobody said
  * @param method how the tone came onto it; null for what was not played, or where nobody said
+ * @param leftOut why sheets and reports leave the capture out; null where they do not
  */
 public record VisitReading(
     SpeedSettingId settingId,
@@ -26,6 +27,7 @@ public record VisitReading(
     @Nullable String instrument,
     @Nullable String medium,
     @Nullable ToneMethod method,
+    @Nullable String leftOut,
     StoredReading stored) {
 
   static VisitReading of(ResultSet row, int number) throws SQLException {
@@ -37,6 +39,7 @@ public record VisitReading(
         row.getString("instrument_name"),
         row.getString("medium_name"),
         CapturePlaces.method(row),
+        row.getString("left_out"),
         Readings.stored(row, number));
   }
 }

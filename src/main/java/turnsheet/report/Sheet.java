@@ -12,13 +12,20 @@ import turnsheet.shop.FittedPart;
  *
  * @param pairs conditions that can be compared, in the order of the model's speed settings
  * @param singles conditions without a partner, in the same order
+ * @param leftOut recordings that enter nothing of this, in the order of their arrival
  */
 public record Sheet(
-    Letterhead shop, Item item, Terms terms, List<SheetPair> pairs, List<SheetSingle> singles) {
+    Letterhead shop,
+    Item item,
+    Terms terms,
+    List<SheetPair> pairs,
+    List<SheetSingle> singles,
+    List<LeftOut> leftOut) {
 
   public Sheet {
     pairs = List.copyOf(pairs);
     singles = List.copyOf(singles);
+    leftOut = List.copyOf(leftOut);
   }
 
   /**
@@ -62,6 +69,9 @@ public record Sheet(
    */
   public record Terms(
       DecisionRule rule, double leastFlutterChangePercent, double leastSpeedChangePercent) {}
+
+  /** A recording that the bench left out, and why. */
+  public record LeftOut(String setting, String condition, String fileName, String reason) {}
 
   /** Whether there is nothing to show. */
   public boolean isEmpty() {

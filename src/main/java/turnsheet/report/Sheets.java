@@ -57,7 +57,8 @@ public class Sheets {
   private Sheet sheet(VisitSummary visit) {
     MachineModel model = models.find(visit.modelId()).orElseThrow();
     ShopRules.Rules inForce = rules.get();
-    List<VisitReading> all = readings.ofVisit(visit.visit().id());
+    List<VisitReading> measured = readings.ofVisit(visit.visit().id());
+    List<VisitReading> all = measured.stream().filter(r -> r.leftOut() == null).toList();
     List<SheetPair> pairs = new ArrayList<>();
     List<SheetSingle> singles = new ArrayList<>();
     for (SpeedSetting setting : model.settings()) {
@@ -87,7 +88,23 @@ public class Sheets {
         new Sheet.Terms(
             inForce.rule(), inForce.leastFlutterChangePercent(), inForce.leastSpeedChangePercent()),
         pairs,
-        singles);
+        singles,
+        leftOut(model, measured));
+  }
+
+  private static List<Sheet.LeftOut> leftOut(MachineModel model, List<VisitReading> measured) {
+    List<Sheet.LeftOut> leftOut = new ArrayList<>();
+    for (VisitReading r : measured) {
+      if (r.leftOut() != null) {
+        leftOut.add(
+            new Sheet.LeftOut(
+                model.setting(r.settingId()).map(SpeedSetting::label).orElse(""),
+                r.condition(),
+                r.fileName(),
+                r.leftOut()));
+      }
+    }
+    return leftOut;
   }
 
   /** The captures of each condition, oldest first. */

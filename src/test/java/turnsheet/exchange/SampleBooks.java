@@ -176,6 +176,7 @@ final class SampleBooks {
                             "Model", "0043", "A. Customer", "", at, null, "", "", List.of(), ""),
                         new Sheet.Terms(DecisionRule.GUARDED, 10, 0.02),
                         List.of(),
+                        List.of(),
                         List.of())),
             report -> report.contentJson().getBytes(StandardCharsets.UTF_8));
   }

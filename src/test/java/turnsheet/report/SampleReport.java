@@ -101,7 +101,8 @@ public final class SampleReport {
                 List.of(run(15, "after repair", REPAIRED, 0.36, 0.0675, false)))),
         List.of(
             wheel.single(
-                List.of(run(16, "after cleaning the wheel", REPAIRED, 0.01, 0.05, true)))));
+                List.of(run(16, "after cleaning the wheel", REPAIRED, 0.01, 0.05, true)))),
+        List.of());
   }
 
   private static Conditions conditions(String setting, CaptureKind kind, double limitPercent) {
@@ -145,6 +146,7 @@ public final class SampleReport {
         places ? "recorder 1" : null,
         places ? "reference tape 3150 Hz" : null,
         places ? ToneMethod.REPLAY : null,
+        null,
         new StoredReading(
             new ReadingId(id(number)),
             new CaptureId(id(number)),

@@ -11,6 +11,9 @@ final class Coverage {
   /** Of a Gaussian within two standard deviations, so that k is 2 for many degrees of freedom. */
   private static final double LEVEL = 0.9545;
 
+  /** Student's factor then differs from the Gaussian's by less than a thousandth. */
+  static final double MANY = 1000;
+
   private Coverage() {}
 
   /** Standard uncertainty of a figure that has one. */
@@ -36,9 +39,28 @@ final class Coverage {
     return new Figure(value, k * standardUncertainty, k, null, List.of());
   }
 
+  /** Degrees of freedom behind a coverage factor; infinite for 2 and less. */
+  static double freedomOf(double factor) {
+    if (factor <= Budget.K) {
+      return Double.POSITIVE_INFINITY;
+    }
+    // the factor falls as the degrees of freedom rise
+    double low = 0.1;
+    double high = MANY;
+    for (int i = 0; i < 100; i++) {
+      double middle = Math.sqrt(low * high);
+      if (factor(middle) > factor) {
+        low = middle;
+      } else {
+        high = middle;
+      }
+    }
+    return high;
+  }
+
   /** Coverage factor; exactly 2 for infinitely many degrees of freedom. */
   static double factor(double degreesOfFreedom) {
-    return degreesOfFreedom > 1000
+    return degreesOfFreedom > MANY
         ? Budget.K
         : new TDistribution(degreesOfFreedom).inverseCumulativeProbability((1 + LEVEL) / 2);
   }

@@ -1,6 +1,8 @@
 package turnsheet.core.diagnose;
 
+import java.util.Objects;
 import org.hipparchus.distribution.continuous.NormalDistribution;
+import org.hipparchus.distribution.continuous.TDistribution;
 import turnsheet.core.measure.Figure;
 
 /** Figures against an upper bound of their magnitude, by the rule that the shop has chosen. */
@@ -33,7 +35,7 @@ public final class Verdicts {
     double standard = Coverage.standardUncertainty(figure);
     Double probability =
         standard > 0
-            ? conformanceProbability(value, standard, -upperBound, upperBound)
+            ? withinProbability(figure, upperBound)
             : Double.valueOf(magnitude <= upperBound ? 1 : 0);
     if (magnitude - uncertainty > upperBound) {
       return new Judgement(Verdict.OUTSIDE, probability, null, null);
@@ -48,6 +50,22 @@ public final class Verdicts {
     return magnitude + uncertainty <= upperBound
         ? new Judgement(Verdict.WITHIN, probability, null, null)
         : new Judgement(Verdict.UNDECIDED, probability, Judgement.Why.LIMIT_IN_INTERVAL, null);
+  }
+
+  /**
+   * Probability that the true value lies within a limit of either sign: Gaussian at k = 2, Student's
+   * with the degrees of freedom behind a larger k.
+   */
+  private static double withinProbability(Figure figure, double bound) {
+    double value = Objects.requireNonNull(figure.value());
+    double standard = Coverage.standardUncertainty(figure);
+    double freedom = Coverage.freedomOf(Objects.requireNonNull(figure.k()));
+    if (freedom >= Coverage.MANY) {
+      return conformanceProbability(value, standard, -bound, bound);
+    }
+    TDistribution t = new TDistribution(freedom);
+    return t.cumulativeProbability((bound - value) / standard)
+        - t.cumulativeProbability((-bound - value) / standard);
   }
 
   /**

@@ -11,7 +11,9 @@ import turnsheet.core.signal.Warning;
  * Edges of a waveform: the times at which it crosses a level, each counted only after it has gone
  * beyond a band about that level. Between samples the waveform is what a band-limited one must be
  * ({@link SampleInterpolator}); within half its reach of the ends, a cubic through the four
- * nearest.
+ * nearest. A step from one level to another within a single sample, as a logic signal has it, is
+ * not band-limited and tells nothing of where in the sample it was: it is taken in the middle, so
+ * that such a train keeps its step of one sample and is known by it.
  */
 public final class CrossingReader implements EdgeReader {
 
@@ -20,6 +22,9 @@ public final class CrossingReader implements EdgeReader {
 
   /** Samples that must be known beyond c. */
   private static final int AHEAD = TAPS / 2 - 1;
+
+  /** A band-limited step swings by a tenth and more of itself beside the crossing. */
+  private static final double HARD = 0.02;
 
   private final SampleReader samples;
   private final double rateHertz;
@@ -123,7 +128,7 @@ public final class CrossingReader implements EdgeReader {
   /** Where the waveform passes the level, as a share of the step from b to c. */
   private double crossing(long before) {
     double coarse = root(a, b, c, d);
-    if (before < AHEAD || ended) {
+    if (before < AHEAD || ended || isHard()) {
       return coarse;
     }
     int steps = SampleInterpolator.STEPS;
@@ -142,6 +147,17 @@ public final class CrossingReader implements EdgeReader {
     double left = SampleInterpolator.at(ring, oldest, k - 1);
     double right = SampleInterpolator.at(ring, oldest, k + 2);
     return here < 0 == next < 0 ? coarse : (k + root(left, here, next, right)) / steps;
+  }
+
+  /** Whether all samples around lie on the two levels between which this step goes. */
+  private boolean isHard() {
+    double near = HARD * Math.abs(c - b);
+    for (int i = oldest; i < oldest + TAPS; i++) {
+      if (Math.abs(ring[i] - b) > near && Math.abs(ring[i] - c) > near) {
+        return false;
+      }
+    }
+    return true;
   }
 
   /** Where the cubic through four even values is zero, as a share of the step from b to c. */

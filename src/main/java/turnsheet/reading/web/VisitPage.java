@@ -10,7 +10,7 @@ import turnsheet.web.Crumb;
  * @param closed date; empty while the unit is on the bench
  * @param sensor which one was fitted; null where the old one stayed
  * @param conditions heads of the columns
- * @param comparable whether two conditions are measured at one speed setting
+ * @param measured whether there is anything for a sheet
  * @param next what the visit waits for
  * @param nextHref where that is done; empty once it is closed
  * @param plate whether it has a photograph of the type plate
@@ -33,7 +33,7 @@ record VisitPage(
     @Nullable String sensor,
     List<String> conditions,
     List<Row> rows,
-    boolean comparable,
+    boolean measured,
     String next,
     String nextHref,
     boolean plate,

@@ -92,7 +92,7 @@ class VisitView {
         visit.notes().sensorReplaced() ? visit.notes().sensorNote() : null,
         conditions,
         rows,
-        isComparable(all),
+        isMeasured(all),
         words.text("reading.next." + next.word()),
         next.hrefOn(visit.id().toString()),
         photos.of(visit.id()).isPresent(),
@@ -139,15 +139,7 @@ class VisitView {
     return List.copyOf(conditions);
   }
 
-  private static boolean isComparable(List<CaptureResult> all) {
-    return all.stream()
-        .filter(r -> r.state() == CaptureState.MEASURED)
-        .collect(
-            Collectors.groupingBy(
-                CaptureResult::settingId,
-                Collectors.mapping(CaptureResult::condition, Collectors.toSet())))
-        .values()
-        .stream()
-        .anyMatch(conditions -> conditions.size() > 1);
+  private static boolean isMeasured(List<CaptureResult> all) {
+    return all.stream().anyMatch(r -> r.state() == CaptureState.MEASURED);
   }
 }

@@ -137,6 +137,15 @@ public class SheetPages {
               words.numbers().plain(sheet.terms().leastFlutterChangePercent()),
               words.numbers().plain(sheet.terms().leastSpeedChangePercent())));
     }
+    for (Sheet.LeftOut left : sheet.leftOut()) {
+      notes.add(
+          words.text(
+              "report.note.leftOut",
+              left.setting(),
+              SheetParts.condition(words, left.condition()),
+              left.fileName(),
+              left.reason()));
+    }
     notes.add(words.text("report.note.customer"));
     notes.add(words.text("report.note.scope"));
     return notes;

@@ -202,6 +202,11 @@ final class SheetParts {
   }
 
   private String condition(String condition) {
+    return condition(words, condition);
+  }
+
+  /** The two usual conditions in the language of the sheet, a free label as it is. */
+  static String condition(Wording words, String condition) {
     return switch (condition) {
       case "as received" -> words.text("report.column.before");
       case "after repair" -> words.text("report.column.after");

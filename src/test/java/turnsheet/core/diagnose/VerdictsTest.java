@@ -69,6 +69,18 @@ class VerdictsTest {
     assertThat(judge(Figure.of(1, 0), 1).conformanceProbability()).isEqualTo(1);
   }
 
+  /** Student's t for one degree of freedom is the Cauchy distribution: 3/4 lie below u, 1/4 above. */
+  @Test
+  void fewDegreesOfFreedomMakeTheProbabilityStudents() {
+    double k = Coverage.factor(1);
+    Figure figure = new Figure(5.0, k, k, null, java.util.List.of()); // u = 1
+    double below = 0.75; // of 6; of -6 next to nothing: arctan(11) leaves 0.0289
+    assertThat(judge(figure, 6).conformanceProbability())
+        .isCloseTo(below - Math.atan(1 / 11.0) / Math.PI, within(1e-6));
+    assertThat(Coverage.freedomOf(Coverage.factor(7.5))).isCloseTo(7.5, within(1e-6));
+    assertThat(Coverage.freedomOf(2)).isInfinite();
+  }
+
   /**
    * JCGM 106:2012, example of resistors: production N(0, 0.12), tolerance 0.2, u 0.04 (ohm,
    * centred; set-up from memory, risks recomputed): global risks of consumer and producer 0.01894

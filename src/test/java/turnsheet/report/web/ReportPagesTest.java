@@ -28,6 +28,7 @@ import org.springframework.mock.web.MockMultipartFile;
 import org.springframework.test.web.servlet.MockMvc;
 import org.springframework.transaction.support.TransactionTemplate;
 import turnsheet.access.ShopProfiles;
+import turnsheet.capture.CaptureId;
 import turnsheet.reading.Readings;
 import turnsheet.reading.SampleBench;
 import turnsheet.reading.SampleReadings;
@@ -163,6 +164,37 @@ class ReportPagesTest {
       assertThat(document.getDocumentCatalog().getLanguage()).isEqualTo("de");
       assertThat(new PDFTextStripper().getText(document)).contains("Seite 1 / ");
     }
+  }
+
+  @Test
+  void severalRecordingsArePooledAndALeftOutOneIsNamedWithItsReason() throws Exception {
+    readings.add(
+        bench.capture("after repair", "measured"),
+        SampleReadings.tone(0.06),
+        SampleReadings.series());
+    CaptureId knocked = bench.capture("after repair", "measured");
+    readings.add(knocked, SampleReadings.tone(9), SampleReadings.series());
+    mvc.perform(
+            post("/captures/" + knocked + "/leave-out")
+                .with(csrf())
+                .param("reason", "table knocked"))
+        .andExpect(status().is3xxRedirection());
+    assertThat(page("/captures/" + knocked)).contains("table knocked").contains("Take it in again");
+
+    String sheet = text(page(visit + "/sheet"));
+    // the mean of 0.02 and 0.06; their standard deviation is 0.0283, of the mean 0.02, and
+    // Student's
+    // factor for one degree of freedom and 95.45 of 100 is 13.97, a little less beside the own part
+    assertThat(sheet)
+        .contains("(+0.04 ± 0.25) %")
+        .contains("mean of the recordings; spread 0.0283 %, worst +0.06 %")
+        .contains("Left out: 19 cm/s, After repair, tone.wav: table knocked");
+
+    mvc.perform(post("/captures/" + knocked + "/take-in").with(csrf()))
+        .andExpect(status().is3xxRedirection());
+    assertThat(text(page(visit + "/sheet"))).contains("worst +9").doesNotContain("Left out");
+    mvc.perform(post("/captures/" + knocked + "/leave-out").with(csrf()).param("reason", " "))
+        .andExpect(status().is(422));
   }
 
   @Test
