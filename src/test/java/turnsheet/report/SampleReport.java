@@ -100,8 +100,7 @@ public final class SampleReport {
                 List.of(run(14, "as received", RECEIVED, 0.37, 0.0690, true)),
                 List.of(run(15, "after repair", REPAIRED, 0.36, 0.0675, false)))),
         List.of(
-            wheel.single(
-                List.of(run(16, "after cleaning the wheel", REPAIRED, 0.01, 0.05, true)))),
+            wheel.single(List.of(run(16, "after cleaning the wheel", REPAIRED, 0.01, 0.05, true)))),
         List.of());
   }
 

@@ -53,8 +53,8 @@ public final class Verdicts {
   }
 
   /**
-   * Probability that the true value lies within a limit of either sign: Gaussian at k = 2, Student's
-   * with the degrees of freedom behind a larger k.
+   * Probability that the true value lies within a limit of either sign: Gaussian at k = 2,
+   * Student's with the degrees of freedom behind a larger k.
    */
   private static double withinProbability(Figure figure, double bound) {
     double value = Objects.requireNonNull(figure.value());

@@ -69,7 +69,9 @@ class VerdictsTest {
     assertThat(judge(Figure.of(1, 0), 1).conformanceProbability()).isEqualTo(1);
   }
 
-  /** Student's t for one degree of freedom is the Cauchy distribution: 3/4 lie below u, 1/4 above. */
+  /**
+   * Student's t for one degree of freedom is the Cauchy distribution: 3/4 lie below u, 1/4 above.
+   */
   @Test
   void fewDegreesOfFreedomMakeTheProbabilityStudents() {
     double k = Coverage.factor(1);
