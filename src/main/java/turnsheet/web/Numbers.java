@@ -41,6 +41,11 @@ public final class Numbers {
     return new Numbers(DecimalFormatSymbols.getInstance(locale).getDecimalSeparator());
   }
 
+  /** The decimal sign. */
+  public char decimalSign() {
+    return point;
+  }
+
   /** A figure of a reading. */
   public Shown show(Figure figure, String unit, Sign sign) {
     Double value = figure.value();

@@ -63,6 +63,7 @@ final class HealthCharts {
     double air = Math.max(30, 0.05 * (last - first));
     Axis x = Axis.linear(words.text("reading.chart.day"), "", first - air, last + air);
     return new SvgChart(x, y, HEIGHT, words.text(title), words.text(more))
+        .decimalSign(words.numbers().decimalSign())
         .xTicks(DateTicks.between(x.from(), x.to()));
   }
 

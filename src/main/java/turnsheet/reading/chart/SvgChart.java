@@ -44,6 +44,8 @@ public final class SvgChart {
   private final List<Supplier<String>> marks = new ArrayList<>();
   private final List<Flag> flags = new ArrayList<>();
   private List<Axis.Tick> xTicks;
+  private boolean dated;
+  private char decimalSign = '.';
   private int series;
 
   /**
@@ -61,9 +63,16 @@ public final class SvgChart {
     this.xTicks = x.ticks(8);
   }
 
+  /** The decimal sign of the numbers at the axes; a point where nothing is said. */
+  public SvgChart decimalSign(char sign) {
+    decimalSign = sign;
+    return this;
+  }
+
   /** Marks along the horizontal axis in place of round numbers, such as dates. */
   public SvgChart xTicks(List<Axis.Tick> ticks) {
     xTicks = List.copyOf(ticks);
+    dated = true;
     return this;
   }
 
@@ -144,17 +153,23 @@ public final class SvgChart {
     for (Axis.Tick tick : y.ticks(Math.max(2, height / 55))) {
       double level = top(tick.value());
       svg.append(Svg.grid(LEFT, level, RIGHT, level));
-      svg.append(Svg.words("drawn-tick", LEFT - 8, level + 4, "end", tick.text()));
+      svg.append(Svg.words("drawn-tick", LEFT - 8, level + 4, "end", number(tick.text())));
     }
     for (Axis.Tick tick : xTicks) {
       double at = left(tick.value());
       svg.append(Svg.grid(at, bottom, at, bottom + 5));
-      svg.append(Svg.words("drawn-tick", at, bottom + 18, "middle", tick.text()));
+      svg.append(
+          Svg.words(
+              "drawn-tick", at, bottom + 18, "middle", dated ? tick.text() : number(tick.text())));
     }
     String axes = "M%d %sV%sH%d".formatted(LEFT, n(frameTop()), n(bottom), RIGHT);
     svg.append(Svg.path("drawn-axis", axes, 1, ""));
     svg.append(Svg.words("drawn-name", (LEFT + RIGHT) / 2.0, height - 8, "middle", x.title()));
     svg.append(Svg.upright(14, (frameTop() + bottom) / 2, y.title()));
+  }
+
+  private String number(String text) {
+    return text.replace('.', decimalSign);
   }
 
   private String trail(List<Curve> parts) {

@@ -58,11 +58,13 @@ final class Drawings {
             Math.max(whole.end(), whole.start() + whole.step()));
     SvgChart chart =
         new SvgChart(
-            x,
-            y,
-            HEIGHT,
-            words.text("reading.chart.trace.title"),
-            words.text("reading.chart.trace.more", n(x.to(), 1), n(own.from(), 3), n(own.to(), 3)));
+                x,
+                y,
+                HEIGHT,
+                words.text("reading.chart.trace.title"),
+                words.text(
+                    "reading.chart.trace.more", n(x.to(), 1), n(own.from(), 3), n(own.to(), 3)))
+            .decimalSign(words.numbers().decimalSign());
     chart.curve(curve);
     levels.forEach(level -> chart.limit(level.value(), level.name()));
     return new Drawn(
@@ -96,11 +98,12 @@ final class Drawings {
     Axis y = percent("reading.chart.peak", 0, highest == 0 ? 1 : 1.08 * highest);
     SvgChart chart =
         new SvgChart(
-            x,
-            y,
-            SPECTRUM_HEIGHT,
-            words.text("reading.chart.spectrum.title"),
-            words.text("reading.chart.spectrum.more"));
+                x,
+                y,
+                SPECTRUM_HEIGHT,
+                words.text("reading.chart.spectrum.title"),
+                words.text("reading.chart.spectrum.more"))
+            .decimalSign(words.numbers().decimalSign());
     List<Flag> flags = flags(lines, x);
     flags.forEach(flag -> chart.flag(flag.x(), flag.y(), flag.word()));
     return new Drawn(
@@ -141,11 +144,12 @@ final class Drawings {
     Axis y = Axis.linear(words.text("reading.chart.count"), "", 0, 1.05 * most);
     SvgChart chart =
         new SvgChart(
-            x,
-            y,
-            HEIGHT,
-            words.text("reading.chart.histogram.title"),
-            words.text("reading.chart.histogram.more"));
+                x,
+                y,
+                HEIGHT,
+                words.text("reading.chart.histogram.title"),
+                words.text("reading.chart.histogram.more"))
+            .decimalSign(words.numbers().decimalSign());
     return new Drawn(
         chart.bars(from, width, counts).toSvg(),
         source(SeriesName.HISTOGRAM),

@@ -47,11 +47,12 @@ final class History {
     Axis y = values(history, limits, band);
     SvgChart chart =
         new SvgChart(
-            x,
-            y,
-            HEIGHT,
-            words.text("history.chart.title", words.nameOf(history.figure()), setting),
-            words.text("history.chart.more", String.join(", ", history.conditions())));
+                x,
+                y,
+                HEIGHT,
+                words.text("history.chart.title", words.nameOf(history.figure()), setting),
+                words.text("history.chart.more", String.join(", ", history.conditions())))
+            .decimalSign(words.numbers().decimalSign());
     chart.xTicks(DateTicks.between(x.from(), x.to()));
     limits.forEach(level -> chart.limit(level.value(), level.name()));
     if (band != null) {

@@ -38,6 +38,7 @@ final class OverlaidSpectra {
             HEIGHT,
             words.text("report.spectrum.title"),
             words.text("report.spectrum.more"))
+        .decimalSign(words.numbers().decimalSign())
         .curve(full)
         .curve(dashed)
         .toSvg();
