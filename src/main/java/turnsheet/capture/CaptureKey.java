@@ -27,10 +27,23 @@ public record CaptureKey(
   public static final int CONDITION_LENGTH = 60;
 
   public CaptureKey {
-    condition = condition.strip();
+    condition = label(condition);
     if (condition.isEmpty() || condition.length() > CONDITION_LENGTH) {
       throw new IllegalArgumentException("condition of " + condition.length() + " characters");
     }
+  }
+
+  /**
+   * A condition as it is kept: the two that every visit has are kept in English, and a page in
+   * German names and takes them in German.
+   */
+  public static String label(String typed) {
+    String label = typed.strip();
+    return switch (label) {
+      case "wie erhalten" -> AS_RECEIVED;
+      case "nach der Reparatur" -> AFTER_REPAIR;
+      default -> label;
+    };
   }
 
   /** Nothing said about the tone. */

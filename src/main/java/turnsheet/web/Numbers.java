@@ -6,6 +6,7 @@ import java.math.RoundingMode;
 import java.text.DecimalFormatSymbols;
 import java.util.Locale;
 import org.jspecify.annotations.Nullable;
+import org.springframework.context.i18n.LocaleContextHolder;
 import turnsheet.core.measure.Figure;
 
 /**
@@ -39,6 +40,11 @@ public final class Numbers {
   /** Numbers with the decimal sign of a language. */
   public static Numbers in(Locale locale) {
     return new Numbers(DecimalFormatSymbols.getInstance(locale).getDecimalSeparator());
+  }
+
+  /** A decimal number already written with a point, with the sign of the page at hand. */
+  public static String onPage(String digits) {
+    return digits.replace('.', in(LocaleContextHolder.getLocale()).point);
   }
 
   /** The decimal sign. */

@@ -4,34 +4,54 @@ import java.time.Instant;
 import java.time.LocalDate;
 import java.time.ZoneId;
 import java.time.format.DateTimeFormatter;
-import java.time.format.FormatStyle;
 import java.util.Locale;
+import org.springframework.context.i18n.LocaleContextHolder;
 import org.springframework.stereotype.Component;
 
-/** Times as the log writes them, in the zone of the shop: the machine's own. */
+/**
+ * Times in the zone of the shop, the machine's own: as the log writes them on English pages, as
+ * usual on German ones.
+ */
 @Component("times")
 public class Times {
 
   private static final DateTimeFormatter MINUTE =
       DateTimeFormatter.ofPattern("yyyy-MM-dd HH:mm", Locale.ROOT);
 
+  private static final DateTimeFormatter MINUTE_GERMAN = german("dd.MM.yyyy, HH:mm");
+  private static final DateTimeFormatter DAY_GERMAN = german("dd.MM.yyyy");
+  private static final DateTimeFormatter MONTH =
+      DateTimeFormatter.ofPattern("yyyy-MM", Locale.ROOT);
+  private static final DateTimeFormatter MONTH_GERMAN = german("LLLL yyyy");
+
   private final ZoneId zone = ZoneId.systemDefault();
 
-  /** {@code 2026-12-01 14:05}. */
+  /** {@code 2026-12-01 14:05}, or {@code 01.12.2026, 14:05}. */
   public String minute(Instant at) {
-    return MINUTE.format(at.atZone(zone));
+    return (isGerman() ? MINUTE_GERMAN : MINUTE).format(at.atZone(zone));
   }
 
-  /** {@code 2026-12-01}. */
+  /** {@code 2026-12-01}, or {@code 01.12.2026}. */
   public String day(Instant at) {
-    return date(at).toString();
+    return day(at, LocaleContextHolder.getLocale());
   }
 
-  /** A day as a language writes it on paper; in English as the log does. */
+  /** A day in a language that is not that of the page around it. */
   public String day(Instant at, Locale locale) {
-    return locale.getLanguage().equals(Locale.ENGLISH.getLanguage())
-        ? day(at)
-        : DateTimeFormatter.ofLocalizedDate(FormatStyle.MEDIUM).withLocale(locale).format(date(at));
+    return PageLanguage.isGerman(locale) ? DAY_GERMAN.format(date(at)) : date(at).toString();
+  }
+
+  /** {@code 2026-12}, or {@code Dezember 2026}. */
+  public String month(Instant at) {
+    return (isGerman() ? MONTH_GERMAN : MONTH).format(at.atZone(zone));
+  }
+
+  private static boolean isGerman() {
+    return PageLanguage.isGerman(LocaleContextHolder.getLocale());
+  }
+
+  private static DateTimeFormatter german(String pattern) {
+    return DateTimeFormatter.ofPattern(pattern, PageLanguage.GERMAN);
   }
 
   /** When the shop's day began. */

@@ -26,6 +26,11 @@ public final class Wording {
     return messages.getMessage(key, parts, locale);
   }
 
+  /** What the core says in English, or a condition, in this language. */
+  public String said(String english) {
+    return CoreWords.in(locale, english);
+  }
+
   public Numbers numbers() {
     return numbers;
   }
@@ -66,7 +71,10 @@ public final class Wording {
       return null;
     }
     return switch (why) {
-      case NO_UNCERTAINTY -> judgement.detail();
+      case NO_UNCERTAINTY -> {
+        String reason = judgement.detail();
+        yield reason == null ? null : said(reason);
+      }
       case LIMIT_IN_INTERVAL -> text("web.undecided.interval");
       case NOT_RESOLVED -> text("web.undecided.resolution");
     };

@@ -150,7 +150,7 @@ class Plot {
     if (this.logarithmic) {
       scale.ticks.callback = (value) => {
         const digit = value / Math.pow(10, Math.floor(Math.log10(value) + 1e-9));
-        return [1, 2, 5].includes(Math.round(digit * 1e6) / 1e6) ? value.toLocaleString() : "";
+        return [1, 2, 5].includes(Math.round(digit * 1e6) / 1e6) ? value.toLocaleString(Chart.defaults.locale) : "";
       };
     }
     return scale;
@@ -169,7 +169,7 @@ class Plot {
   }
 
   place(x) {
-    return `${this.titles.x}: ${x.toLocaleString(undefined, { maximumFractionDigits: 4 })}`;
+    return `${this.titles.x}: ${x.toLocaleString(Chart.defaults.locale, { maximumFractionDigits: 4 })}`;
   }
 
   zoom() {

@@ -49,6 +49,7 @@ class AccessibilityIT {
   private Audit audit;
   private SentPages sent;
   private String linksPage = "";
+  private final List<String> visited = new ArrayList<>();
 
   @BeforeAll
   void start(@TempDir Path folder) throws Exception {
@@ -80,6 +81,7 @@ class AccessibilityIT {
     visitor.open(service.address("/import"));
     wrong.addAll(look("/import", 200));
     wrong.addAll(sharing(shapes));
+    wrong.addAll(german());
 
     System.out.println("Pages looked at: " + String.join(" ", shapes));
     assertThat(shapes)
@@ -112,6 +114,7 @@ class AccessibilityIT {
       }
       seen.merge(shape, 1, Integer::sum);
       visitor.open(address);
+      visited.add(address);
       wrong.addAll(look(shape, 200));
       for (Object link : (List<?>) visitor.script(LINKS)) {
         String next = String.valueOf(link);
@@ -137,6 +140,19 @@ class AccessibilityIT {
     wrong.addAll(look("/s/{token}", 200));
     visitor.open(service.address("/s/none"));
     wrong.addAll(look("/s/none", 404));
+    return wrong;
+  }
+
+  /** The same addresses once more: German words are longer, and no English may be left. */
+  private List<String> german() {
+    var wrong = new ArrayList<String>();
+    visitor.open(service.address("/shop/preferences"));
+    visitor.choose("language", "de");
+    visitor.pressButton("Save the preferences");
+    for (String address : visited) {
+      visitor.open(address);
+      wrong.addAll(audit.ofGerman(shape(address)));
+    }
     return wrong;
   }
 

@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
+import turnsheet.web.EnglishLeft;
 
 /** What holds for every page: looks at the one that stands open and tells what is wrong with it. */
 final class Audit {
@@ -80,6 +81,22 @@ final class Audit {
       }
     }
     return wrong.stream().map(line -> page + ": " + line).toList();
+  }
+
+  /**
+   * Everything wrong with a page in German that has been looked at in English: at one width, the
+   * narrowest, since words, names and lengths are all that differs.
+   */
+  List<String> ofGerman(String page) {
+    var wrong = new ArrayList<String>();
+    EnglishLeft.in(String.valueOf(visitor.script(HTML)))
+        .forEach(text -> wrong.add("English: " + text));
+    visitor.script(AXE);
+    visitor.size(NARROW_PHONE_PX, 740);
+    wrong.addAll(list("narrow phone", visitor.awaitScript(RULES)));
+    wrong.addAll(spills("narrow phone"));
+    visitor.anySize();
+    return wrong.stream().map(line -> "in German, " + page + ": " + line).toList();
   }
 
   /** What sticks out of the page as it stands now. */

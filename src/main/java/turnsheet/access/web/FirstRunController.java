@@ -3,6 +3,7 @@ package turnsheet.access.web;
 import jakarta.servlet.http.HttpServletRequest;
 import jakarta.servlet.http.HttpServletResponse;
 import jakarta.validation.Valid;
+import java.util.Locale;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
 import org.springframework.validation.BindingResult;
@@ -13,6 +14,7 @@ import org.springframework.web.bind.annotation.PostMapping;
 import turnsheet.access.Account;
 import turnsheet.access.Accounts;
 import turnsheet.access.FirstRun;
+import turnsheet.access.ShopLanguage;
 import turnsheet.access.ShopProfiles.ShopProfile;
 import turnsheet.web.NotFoundException;
 
@@ -26,11 +28,13 @@ class FirstRunController {
   private final FirstRun firstRun;
   private final Accounts accounts;
   private final SignIn signIn;
+  private final ShopLanguage language;
 
-  FirstRunController(FirstRun firstRun, Accounts accounts, SignIn signIn) {
+  FirstRunController(FirstRun firstRun, Accounts accounts, SignIn signIn, ShopLanguage language) {
     this.firstRun = firstRun;
     this.accounts = accounts;
     this.signIn = signIn;
+    this.language = language;
   }
 
   @GetMapping(NOT_SET_UP)
@@ -50,6 +54,7 @@ class FirstRunController {
       @PathVariable String token,
       @Valid @ModelAttribute("form") FirstRunForm form,
       BindingResult errors,
+      Locale locale,
       HttpServletRequest request,
       HttpServletResponse response) {
     requireOpen(token);
@@ -66,6 +71,7 @@ class FirstRunController {
             form.displayName().strip(),
             form.password(),
             new ShopProfile(form.shopName().strip(), form.shopAddress().strip()));
+    language.put(locale); // as this page was read
     signIn.as(owner, request, response);
     return "redirect:/";
   }

@@ -3,6 +3,7 @@ package turnsheet.access.web;
 import jakarta.validation.Valid;
 import jakarta.validation.constraints.NotNull;
 import jakarta.validation.constraints.Pattern;
+import java.util.Locale;
 import org.springframework.http.CacheControl;
 import org.springframework.http.MediaType;
 import org.springframework.http.ResponseEntity;
@@ -13,10 +14,12 @@ import org.springframework.web.bind.annotation.ModelAttribute;
 import org.springframework.web.bind.annotation.PostMapping;
 import org.springframework.web.servlet.mvc.support.RedirectAttributes;
 import turnsheet.access.AuditTrail;
+import turnsheet.access.ShopLanguage;
 import turnsheet.access.ShopPreferences;
 import turnsheet.access.ShopPreferences.Liked;
 import turnsheet.access.ShopPreferences.Paper;
 import turnsheet.access.ShopPreferences.SpeedLiking;
+import turnsheet.web.PageLanguage;
 
 /** How the shop likes to see things, and the paper that print follows. */
 @Controller
@@ -28,10 +31,12 @@ class PreferencesController {
   record PreferencesForm(
       @NotNull SpeedLiking speeds,
       @NotNull @Pattern(regexp = "50|60") String mains,
-      @NotNull Paper paper) {
+      @NotNull Paper paper,
+      @NotNull @Pattern(regexp = "en|de") String language) {
 
-    static PreferencesForm of(Liked liked) {
-      return new PreferencesForm(liked.speeds(), Integer.toString(liked.mainsHz()), liked.paper());
+    static PreferencesForm of(Liked liked, Locale language) {
+      return new PreferencesForm(
+          liked.speeds(), Integer.toString(liked.mainsHz()), liked.paper(), language.getLanguage());
     }
 
     Liked liked() {
@@ -40,16 +45,19 @@ class PreferencesController {
   }
 
   private final ShopPreferences preferences;
+  private final ShopLanguage language;
   private final AuditTrail audit;
 
-  PreferencesController(ShopPreferences preferences, AuditTrail audit) {
+  PreferencesController(ShopPreferences preferences, ShopLanguage language, AuditTrail audit) {
     this.preferences = preferences;
+    this.language = language;
     this.audit = audit;
   }
 
   @GetMapping(PATH)
-  String show(Model model) {
-    model.addAttribute("form", PreferencesForm.of(preferences.get()));
+  String show(Model model, Locale locale) {
+    model.addAttribute(
+        "form", PreferencesForm.of(preferences.get(), language.get().orElse(locale)));
     model.addAttribute("speedChoices", SpeedLiking.values());
     model.addAttribute("papers", Paper.values());
     return "access/preferences";
@@ -58,7 +66,8 @@ class PreferencesController {
   @PostMapping(PATH)
   String change(@Valid @ModelAttribute("form") PreferencesForm form, RedirectAttributes flash) {
     preferences.put(form.liked());
-    audit.record("access.audit.preferencesChanged", form.liked().toString());
+    language.put(PageLanguage.of(form.language()));
+    audit.record("access.audit.preferencesChanged", form.liked() + ", " + form.language());
     flash.addFlashAttribute("done", "access.preferences.saved");
     return "redirect:" + ShopController.PATH;
   }

@@ -16,6 +16,7 @@ import turnsheet.core.format.api.Recognised;
 import turnsheet.core.measure.CaptureKind;
 import turnsheet.core.signal.Rejection;
 import turnsheet.shop.SpeedSetting;
+import turnsheet.web.Numbers;
 import turnsheet.web.Times;
 
 /**
@@ -154,10 +155,11 @@ record CapturePage(
       value /= 1000;
       unit++;
     }
-    return String.format(Locale.ROOT, "%.1f %s", value, units[unit]);
+    return Numbers.onPage(String.format(Locale.ROOT, "%.1f %s", value, units[unit]));
   }
 
   private static String short6(double value) {
-    return new BigDecimal(value).round(new MathContext(6)).stripTrailingZeros().toPlainString();
+    return Numbers.onPage(
+        new BigDecimal(value).round(new MathContext(6)).stripTrailingZeros().toPlainString());
   }
 }

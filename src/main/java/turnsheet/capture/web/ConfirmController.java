@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.UUID;
 import org.jspecify.annotations.Nullable;
+import org.springframework.context.i18n.LocaleContextHolder;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
 import org.springframework.web.bind.annotation.GetMapping;
@@ -27,6 +28,7 @@ import turnsheet.capture.Wish;
 import turnsheet.core.format.api.ReadOptions;
 import turnsheet.shop.SpeedSettingId;
 import turnsheet.shop.VisitId;
+import turnsheet.web.CoreWords;
 import turnsheet.web.RefusedRequestException;
 
 /** Confirms what was proposed for the recordings of a visit, and puts single ones right. */
@@ -70,7 +72,9 @@ class ConfirmController {
               fields.getOrDefault("setting-" + id, ""),
               fields.getOrDefault("condition-" + id, ""));
         } catch (RefusedRequestException e) {
-          troubles.add(capture.fileName() + ": " + e.getMessage());
+          String sentence = String.valueOf(e.getMessage());
+          troubles.add(
+              capture.fileName() + ": " + CoreWords.in(LocaleContextHolder.getLocale(), sentence));
         }
       }
     }

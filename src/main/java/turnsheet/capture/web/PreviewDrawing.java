@@ -48,9 +48,10 @@ record PreviewDrawing(
 
   /** Three digits are enough beside a sketch. */
   private static String number(double value) {
-    return new java.math.BigDecimal(value)
-        .round(new java.math.MathContext(3))
-        .stripTrailingZeros()
-        .toPlainString();
+    return turnsheet.web.Numbers.onPage(
+        new java.math.BigDecimal(value)
+            .round(new java.math.MathContext(3))
+            .stripTrailingZeros()
+            .toPlainString());
   }
 }

@@ -1,9 +1,11 @@
 package turnsheet.capture.web;
 
 import org.jspecify.annotations.Nullable;
+import org.springframework.context.i18n.LocaleContextHolder;
 import turnsheet.capture.Capture;
 import turnsheet.capture.CaptureState;
 import turnsheet.job.Job;
+import turnsheet.web.CoreWords;
 
 /**
  * How the measurement of a capture stands.
@@ -26,7 +28,7 @@ record ProgressDocument(
         capture.state().word(),
         job == null ? null : job.state().name().toLowerCase(java.util.Locale.ROOT),
         job == null ? 0 : job.progress(),
-        job == null ? "" : job.message(),
+        job == null ? "" : CoreWords.in(LocaleContextHolder.getLocale(), job.message()),
         job == null ? 0 : job.attempts(),
         capture.state() != CaptureState.QUEUED);
   }

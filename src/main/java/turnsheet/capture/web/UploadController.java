@@ -6,8 +6,10 @@ import java.io.IOException;
 import java.io.InputStream;
 import java.security.Principal;
 import java.util.List;
+import java.util.Locale;
 import java.util.UUID;
 import org.jspecify.annotations.Nullable;
+import org.springframework.context.i18n.LocaleContextHolder;
 import org.springframework.http.HttpStatus;
 import org.springframework.http.MediaType;
 import org.springframework.stereotype.Controller;
@@ -24,6 +26,7 @@ import turnsheet.core.signal.Rejection;
 import turnsheet.shop.UnitId;
 import turnsheet.shop.Units;
 import turnsheet.shop.Visits;
+import turnsheet.web.CoreWords;
 import turnsheet.web.NotFoundException;
 import turnsheet.web.RefusedRequestException;
 
@@ -110,11 +113,12 @@ class UploadController {
     String root = body.getContextPath();
     Looked looked = capture.looked();
     Rejection refusal = capture.refusal();
+    Locale locale = LocaleContextHolder.getLocale();
     return new Uploaded(
         root + "/captures/" + capture.id(),
         root + "/visits/" + visit,
-        looked == null ? null : looked.recognised().format(),
-        refusal == null ? null : refusal.message());
+        looked == null ? null : CoreWords.in(locale, looked.recognised().format()),
+        refusal == null ? null : CoreWords.in(locale, refusal.message()));
   }
 
   /**

@@ -51,7 +51,8 @@ record BudgetTable(List<String> causes, List<Row> rows) {
             .distinct()
             .toList();
     return new BudgetTable(
-        causes, named.stream().map(name -> row(words, name, name.of(reading), causes)).toList());
+        causes.stream().map(words::said).toList(),
+        named.stream().map(name -> row(words, name, name.of(reading), causes)).toList());
   }
 
   private static Row row(Wording words, FigureName name, Figure figure, List<String> causes) {

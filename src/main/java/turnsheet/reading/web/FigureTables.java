@@ -68,7 +68,7 @@ final class FigureTables {
       String name =
           words.text(
               "reading.figure.band",
-              band.name(),
+              words.said(band.name()),
               words.numbers().plain(band.fromHz()),
               words.numbers().plain(band.toHz()));
       rows.add(

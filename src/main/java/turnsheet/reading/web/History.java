@@ -51,7 +51,9 @@ final class History {
                 y,
                 HEIGHT,
                 words.text("history.chart.title", words.nameOf(history.figure()), setting),
-                words.text("history.chart.more", String.join(", ", history.conditions())))
+                words.text(
+                    "history.chart.more",
+                    String.join(", ", history.conditions().stream().map(words::said).toList())))
             .decimalSign(words.numbers().decimalSign());
     chart.xTicks(DateTicks.between(x.from(), x.to()));
     limits.forEach(level -> chart.limit(level.value(), level.name()));

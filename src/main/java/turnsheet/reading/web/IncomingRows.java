@@ -56,11 +56,11 @@ class IncomingRows {
     KindGuess guess = looked.guess();
     Double rate = guess == null ? null : guess.rateHertz();
     if (guess == null || rate == null) {
-      return looked.recognised().format();
+      return words.said(looked.recognised().format());
     }
     return words.text(
         "reading.visit.swings",
-        looked.recognised().format(),
+        words.said(looked.recognised().format()),
         words.text("reading.kind." + guess.kind().name().toLowerCase(Locale.ROOT)),
         words.numbers().show(rate, null, "Hz", Numbers.Sign.PLAIN).valueAndUnit());
   }

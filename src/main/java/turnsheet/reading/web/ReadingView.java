@@ -78,7 +78,7 @@ class ReadingView {
         stored.id().toString(),
         place.captureId().toString(),
         trail(place, words),
-        words.text("reading.page.title", place.settingLabel(), place.condition()),
+        words.text("reading.page.title", place.settingLabel(), words.said(place.condition())),
         new Sentence(words).of(name -> name.of(reading), judged),
         toneSentence(place, words),
         words.text(
@@ -235,7 +235,7 @@ class ReadingView {
     facts.add(fact(words, "reading.source.file", place.fileName()));
     facts.add(fact(words, "reading.source.received", times.minute(place.receivedAt())));
     facts.add(fact(words, "reading.source.sha256", source.sha256()));
-    facts.add(fact(words, "reading.source.format", source.format()));
+    facts.add(fact(words, "reading.source.format", words.said(source.format())));
     facts.add(fact(words, "reading.source.kind", kind(reading.source().kind().name(), words)));
     facts.add(fact(words, "reading.source.channel", Integer.toString(source.channel())));
     if (rate != null) {

@@ -92,6 +92,6 @@ final class TrendText {
 
   /** A day would claim more than a line can tell. */
   private String month(Instant at) {
-    return times.day(at).substring(0, 7);
+    return times.month(at);
   }
 }

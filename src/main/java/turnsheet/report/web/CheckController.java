@@ -1,5 +1,6 @@
 package turnsheet.report.web;
 
+import jakarta.servlet.http.HttpServletRequest;
 import jakarta.servlet.http.HttpServletResponse;
 import org.jspecify.annotations.Nullable;
 import org.springframework.stereotype.Controller;
@@ -10,6 +11,7 @@ import turnsheet.access.Secrets;
 import turnsheet.report.Issue;
 import turnsheet.report.Report;
 import turnsheet.report.Reports;
+import turnsheet.web.PageLanguage;
 import turnsheet.web.Times;
 
 /**
@@ -41,7 +43,9 @@ class CheckController {
   String check(
       @RequestParam(required = false) @Nullable String code,
       Model model,
+      HttpServletRequest request,
       HttpServletResponse response) {
+    PageLanguage.useBrowsers(request.getLocale());
     response.setHeader("X-Robots-Tag", "noindex, nofollow");
     response.setHeader("Referrer-Policy", "no-referrer");
     model.addAttribute("code", code == null ? "" : code);

@@ -1,6 +1,7 @@
 package turnsheet.report.web;
 
 import jakarta.validation.Valid;
+import java.util.Locale;
 import java.util.UUID;
 import org.springframework.http.ContentDisposition;
 import org.springframework.http.HttpHeaders;
@@ -81,9 +82,9 @@ class ReportController {
   }
 
   @GetMapping("/visits/{id}/report")
-  String ask(@PathVariable UUID id, Model model) {
+  String ask(@PathVariable UUID id, Model model, Locale locale) {
     String name = user.account().displayName();
-    model.addAttribute("form", new ReportForm("en", name, name, "", "", ""));
+    model.addAttribute("form", new ReportForm(locale.getLanguage(), name, name, "", "", ""));
     return form(id, null, model);
   }
 

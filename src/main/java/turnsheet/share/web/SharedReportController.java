@@ -1,5 +1,6 @@
 package turnsheet.share.web;
 
+import jakarta.servlet.http.HttpServletRequest;
 import jakarta.servlet.http.HttpServletResponse;
 import java.time.Instant;
 import java.util.Locale;
@@ -23,6 +24,7 @@ import turnsheet.share.ShareLink;
 import turnsheet.share.ShareLinks;
 import turnsheet.shop.UnitId;
 import turnsheet.shop.Visits;
+import turnsheet.web.PageLanguage;
 import turnsheet.web.Times;
 
 /**
@@ -56,34 +58,46 @@ class SharedReportController {
   }
 
   @GetMapping(ShareDesk.PATH + "{token}")
-  String show(@PathVariable String token, Model model, HttpServletResponse response) {
+  String show(
+      @PathVariable String token,
+      Model model,
+      HttpServletRequest request,
+      HttpServletResponse response) {
     ShareLink link = links.open(token).orElse(null);
-    return page(token, link, report(link), model, response);
+    return page(token, link, report(link), model, request, response);
   }
 
   /** The report that is current today, where the one that the link was made for was revised. */
   @GetMapping(ShareDesk.PATH + "{token}/current")
-  String current(@PathVariable String token, Model model, HttpServletResponse response) {
+  String current(
+      @PathVariable String token,
+      Model model,
+      HttpServletRequest request,
+      HttpServletResponse response) {
     ShareLink link = links.peek(token).orElse(null);
-    return page(token, link, report(link).map(this::newest), model, response);
+    return page(token, link, report(link).map(this::newest), model, request, response);
   }
 
   /** The unit over the years, where the shop allows it for this link. */
   @GetMapping(ShareDesk.PATH + "{token}/history")
   String history(
-      @PathVariable String token, Model model, Locale locale, HttpServletResponse response) {
+      @PathVariable String token,
+      Model model,
+      HttpServletRequest request,
+      HttpServletResponse response) {
     ShareLink link = links.peek(token).filter(ShareLink::showsHistory).orElse(null);
     Report report = report(link).orElse(null);
     if (report == null) {
-      return gone(response);
+      return gone(request, response);
     }
     keepPrivate(response);
+    Locale locale = inLanguageOf(report);
     Sheet sheet = report.content().sheet();
     Instant issued = report.content().issue().issuedAt();
     UnitId unit = visits.find(report.visitId()).orElseThrow().unitId();
     model.addAttribute("unit", sheet.item().modelName() + ", " + sheet.item().serialNumber());
     model.addAttribute("shopName", sheet.shop().name());
-    model.addAttribute("until", times.day(issued));
+    model.addAttribute("until", times.day(issued, locale));
     model.addAttribute("printedNumber", Issue.printed(report.number()));
     model.addAttribute("back", ShareDesk.PATH + token);
     model.addAttribute("drawings", histories.of(unit, issued, locale));
@@ -105,18 +119,19 @@ class SharedReportController {
       @Nullable ShareLink link,
       Optional<Report> found,
       Model model,
+      HttpServletRequest request,
       HttpServletResponse response) {
     Report report = found.orElse(null);
     if (link == null || report == null) {
-      return gone(response);
+      return gone(request, response);
     }
     keepPrivate(response);
+    Locale locale = inLanguageOf(report);
     String here = ShareDesk.PATH + token;
     model.addAttribute("article", printing.article(report));
-    model.addAttribute("language", report.content().issue().language());
     model.addAttribute("title", report.content().issue().printedNumber());
     model.addAttribute("shopName", report.content().sheet().shop().name());
-    model.addAttribute("until", times.day(link.expiresAt()));
+    model.addAttribute("until", times.day(link.expiresAt(), locale));
     model.addAttribute(
         "pdf", report.number() == link.reportNumber() ? here + "/pdf" : here + "/current/pdf");
     model.addAttribute("current", here + "/current");
@@ -126,10 +141,18 @@ class SharedReportController {
     return "share/report";
   }
 
-  private static String gone(HttpServletResponse response) {
+  private static String gone(HttpServletRequest request, HttpServletResponse response) {
+    PageLanguage.useBrowsers(request.getLocale());
     keepPrivate(response);
     response.setStatus(HttpStatus.NOT_FOUND.value());
     return "share/gone";
+  }
+
+  /** The page around a report speaks as the report does. */
+  private static Locale inLanguageOf(Report report) {
+    Locale locale = PageLanguage.of(report.content().issue().language());
+    PageLanguage.use(locale);
+    return locale;
   }
 
   private static void keepPrivate(HttpServletResponse response) {

@@ -96,6 +96,7 @@ class PreferencesPagesTest {
         .with(csrf())
         .param("speeds", speeds)
         .param("mains", mains)
-        .param("paper", paper);
+        .param("paper", paper)
+        .param("language", "en");
   }
 }

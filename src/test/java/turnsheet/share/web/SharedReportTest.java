@@ -23,6 +23,7 @@ import turnsheet.share.ShareDesk;
 import turnsheet.share.ShareLinks;
 import turnsheet.testing.AsOwner;
 import turnsheet.testing.ServiceTest;
+import turnsheet.web.EnglishLeft;
 
 @ServiceTest
 @AsOwner
@@ -92,6 +93,27 @@ class SharedReportTest {
     assertThat(new String(pdf, 0, 5, java.nio.charset.StandardCharsets.US_ASCII))
         .isEqualTo("%PDF-");
     mvc.perform(get(path + "/history").with(anonymous())).andExpect(status().isNotFound());
+  }
+
+  /** The shop reads English here; the customer reads the report and all around it in German. */
+  @Test
+  void thePageAroundAGermanReportIsGerman() throws Exception {
+    report =
+        reports.revise(
+            report.number(), new ReportDesk.Wish("de", "A. Person", "B. Person", "", ""), "x");
+    String path = path(true);
+    for (String address : new String[] {path, path + "/history"}) {
+      String page =
+          mvc.perform(get(address).with(anonymous()).header("Accept-Language", "en"))
+              .andExpect(status().isOk())
+              .andReturn()
+              .getResponse()
+              .getContentAsString();
+      assertThat(EnglishLeft.in(page)).isEmpty();
+      assertThat(page)
+          .containsIgnoringCase("wie erhalten")
+          .containsPattern("\\d\\d\\.\\d\\d\\.\\d{4}");
+    }
   }
 
   @Test
