@@ -22,8 +22,12 @@ public final class EnglishLeft {
   /** Shorter texts are words that both languages have, or parts of words. */
   private static final int LENGTH = 12;
 
-  private static final Pattern MARKED_ENGLISH =
-      Pattern.compile("<(\\w+)[^>]*\\slang=\"en\"[^>]*>[^<]*</\\1>");
+  /** What says that it is English, an article as a whole; and what nobody sees. */
+  private static final Pattern MEANT =
+      Pattern.compile(
+          "(?s)<article[^>]*\\slang=\"en\".*?</article>"
+              + "|<(\\w+)[^>]*\\slang=\"en\"[^>]*>[^<]*</\\1>"
+              + "|<input type=\"hidden\"[^>]*>");
 
   private static final Pattern GERMAN_ROOT = Pattern.compile("<html[^>]*\\slang=\"de\"");
 
@@ -40,7 +44,7 @@ public final class EnglishLeft {
     if (page.contains("??")) {
       found.add("a text without message");
     }
-    String shown = MARKED_ENGLISH.matcher(page).replaceAll("").replace("&#39;", "'");
+    String shown = MEANT.matcher(page).replaceAll("").replace("&#39;", "'");
     TEXTS.stream().filter(shown::contains).forEach(found::add);
     return found;
   }
