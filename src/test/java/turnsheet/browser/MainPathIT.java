@@ -64,6 +64,7 @@ class MainPathIT {
     theRepairIsDroppedOnThePageWithAnotherFile();
     theSheetComparesAndPrintsOnBothPapers();
     theOwnerIssuesTheReport();
+    theUnitTellsWhatBecameOfIt();
     aShareLinkOpensTheReportToAnyoneUntilItIsWithdrawn();
     aFileOfAnotherKindIsRefusedWithItsReason();
     everythingNeededWorksWithoutScript();
@@ -185,6 +186,22 @@ class MainPathIT {
     wrong.addAll(audit.of("/reports/{number}", 200));
     printsOn(210 / 25.4, 297 / 25.4);
     printsOn(8.5, 11);
+  }
+
+  private void theUnitTellsWhatBecameOfIt() {
+    visitor.open(visit);
+    visitor.press(visitor.find("nav[aria-label] a[href*='/units/'], .trail a[href*='/units/']"));
+    assertThat(visitor.awaitVisible("figure.plot svg").isDisplayed()).isTrue();
+    // before and after of one visit are joined in the drawing and stand in its table
+    assertThat(visitor.find("details.numbers tbody").getText())
+        .contains("as received")
+        .contains("outside")
+        .contains("after repair")
+        .contains("within");
+    assertThat(visitor.find("main").getText()).contains("No trend is shown");
+    visitor.choose("figure", "speed.deviationPercent");
+    visitor.pressButton("Show");
+    assertThat(visitor.find("#history ~ h3").getText()).contains("Speed deviation");
   }
 
   private void aShareLinkOpensTheReportToAnyoneUntilItIsWithdrawn() {

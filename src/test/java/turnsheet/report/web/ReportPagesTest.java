@@ -13,6 +13,7 @@ import java.io.ByteArrayOutputStream;
 import java.time.Clock;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 import java.util.Objects;
 import javax.imageio.ImageIO;
 import org.apache.pdfbox.Loader;
@@ -37,6 +38,8 @@ import turnsheet.report.Reports;
 import turnsheet.testing.AsOwner;
 import turnsheet.testing.AsTechnician;
 import turnsheet.testing.ServiceTest;
+import turnsheet.web.Numbers;
+import turnsheet.web.Wording;
 
 @ServiceTest
 @AsOwner
@@ -220,6 +223,34 @@ class ReportPagesTest {
                 .with(csrf()))
         .andExpect(status().is(422));
     assertThat(profiles.logo()).isEmpty();
+  }
+
+  /** Every figure of both sides and every difference, as stored, stands in the PDF's own text. */
+  @Test
+  void everyStoredFigureIsReadBackFromThePdf() throws Exception {
+    long number = issue("en");
+    Numbers numbers = Numbers.in(Locale.ENGLISH);
+    try (PDDocument document = Loader.loadPDF(pdf(number))) {
+      String text = squeezed(new PDFTextStripper().getText(document));
+      var figures = reports.find(number).orElseThrow().content().sheet().pairs().get(0).figures();
+      assertThat(figures).hasSizeGreaterThan(4);
+      for (var c : figures) {
+        Numbers.Sign sign = Wording.signOf(c.name());
+        String unit = c.name().unit();
+        assertThat(text)
+            .as(c.name().path())
+            .contains(squeezed(numbers.show(c.before().figure(), unit, sign).text()))
+            .contains(squeezed(numbers.show(c.after().figure(), unit, sign).text()))
+            .contains(
+                squeezed(
+                    numbers.show(c.difference().difference(), unit, Numbers.Sign.SHOWN).text()));
+      }
+    }
+  }
+
+  /** Lines may break within a figure on paper. */
+  private static String squeezed(String text) {
+    return text.replaceAll("[\\s\u202f]+", "");
   }
 
   @Test
