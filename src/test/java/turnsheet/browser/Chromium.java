@@ -1,8 +1,11 @@
 package turnsheet.browser;
 
 import java.io.IOException;
+import java.nio.channels.FileChannel;
+import java.nio.channels.FileLock;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.nio.file.StandardOpenOption;
 import java.time.Duration;
 import java.util.List;
 import java.util.Map;
@@ -30,8 +33,8 @@ final class Chromium {
 
   /** Starts a headless browser; the caller quits it. */
   static ChromeDriver start(int width, int height) throws IOException, InterruptedException {
-    if (first(BROWSERS) == null || first(DRIVERS) == null) {
-      install();
+    if (isMissing()) {
+      installAlone();
     }
     String browser = first(BROWSERS);
     String driver = first(DRIVERS);
@@ -72,6 +75,22 @@ final class Chromium {
     chrome.manage().timeouts().pageLoadTimeout(Duration.ofSeconds(30));
     chrome.manage().window().setSize(new Dimension(width, height));
     return chrome;
+  }
+
+  private static boolean isMissing() {
+    return first(BROWSERS) == null || first(DRIVERS) == null;
+  }
+
+  /** Two test processes may find the browser missing; the one that comes second finds it there. */
+  private static void installAlone() throws IOException, InterruptedException {
+    Path lock = Path.of(System.getProperty("java.io.tmpdir"), "turnsheet-chromium.lock");
+    try (FileChannel channel =
+            FileChannel.open(lock, StandardOpenOption.CREATE, StandardOpenOption.WRITE);
+        FileLock held = channel.lock()) {
+      if (held.isValid() && isMissing()) {
+        install();
+      }
+    }
   }
 
   private static String first(List<String> paths) {
