@@ -3,6 +3,7 @@ package turnsheet.report.web;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Objects;
 import org.jspecify.annotations.Nullable;
 import turnsheet.core.diagnose.Difference;
 import turnsheet.core.diagnose.LineChange;
@@ -183,22 +184,31 @@ final class SheetParts {
         .map(
             run ->
                 new SheetPage.Recording(
-                    condition(side.condition()),
-                    words.text(
-                        "report.recording",
-                        run.fileName(),
-                        run.sha256().substring(0, SHORT_HASH),
-                        times.day(run.receivedAt(), locale),
-                        words.numbers().fixed(run.durationSeconds(), 1),
-                        run.instrument() == null
-                            ? words.text("report.recording.unknown")
-                            : run.instrument(),
-                        run.medium() == null
-                            ? words.text("report.recording.unknown")
-                            : run.medium(),
-                        run.methodVersion()),
-                    "/readings/" + run.readingId()))
+                    condition(side.condition()), recording(run), "/readings/" + run.readingId()))
         .toList();
+  }
+
+  private String recording(SheetSide.Run run) {
+    String unknown = words.text("report.recording.unknown");
+    // practice names beside a tone's figures how it came onto what was played
+    String tone =
+        run.settings().kind() == CaptureKind.TONE
+            ? words.text(
+                "report.recording.tone",
+                run.method() == null
+                    ? unknown
+                    : words.text("report.recording.tone." + run.method().word()))
+            : "";
+    return words.text(
+        "report.recording",
+        run.fileName(),
+        run.sha256().substring(0, SHORT_HASH),
+        times.day(run.receivedAt(), locale),
+        words.numbers().fixed(run.durationSeconds(), 1),
+        Objects.requireNonNullElse(run.instrument(), unknown),
+        Objects.requireNonNullElse(run.medium(), unknown),
+        tone,
+        run.methodVersion());
   }
 
   private String condition(String condition) {
