@@ -25,6 +25,11 @@ public class CurrentUser {
         : authentication.getName();
   }
 
+  /** Whether the service itself acts, outside any request; an anonymous visitor is one. */
+  public boolean isService() {
+    return SecurityContextHolder.getContext().getAuthentication() == null;
+  }
+
   public boolean isOwner() {
     Authentication authentication = SecurityContextHolder.getContext().getAuthentication();
     return authentication != null

@@ -90,8 +90,8 @@ class AccessibilityIT {
         .contains("/", "/units/{id}", "/visits/{id}", "/readings/{id}", "/models/{id}", "/shop")
         .contains("/units/{id}/label", "/shop/preferences", "/visits/{id}/remove")
         .contains("/instruments/{id}/clock-checks/{id}", "/instruments/{id}/clock-checks/new");
-    // the signed-in shapes and the seven pages opened by hand, each with its file for the checker
-    assertThat(sent.count()).isGreaterThanOrEqualTo(shapes.size() + 7);
+    // the signed-in shapes and the eight pages opened by hand, each with its file for the checker
+    assertThat(sent.count()).isGreaterThanOrEqualTo(shapes.size() + 8);
     assertThat(wrong).as(String.join("\n", wrong)).isEmpty();
   }
 
@@ -133,11 +133,14 @@ class AccessibilityIT {
     assertThat(shapes).contains("/reports/{id}/links");
     var wrong = new ArrayList<String>();
     visitor.open(service.address(linksPage));
+    visitor.find("input[name=history]").click();
     visitor.pressButton("Make a link");
     wrong.addAll(look("/reports/{id}/links with a new link", 200));
     String shared = visitor.find("#address").getDomProperty("value");
     visitor.open(shared);
     wrong.addAll(look("/s/{token}", 200));
+    visitor.open(shared + "/history");
+    wrong.addAll(look("/s/{token}/history", 200));
     visitor.open(service.address("/s/none"));
     wrong.addAll(look("/s/none", 404));
     return wrong;

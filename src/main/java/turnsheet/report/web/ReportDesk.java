@@ -1,7 +1,9 @@
 package turnsheet.report.web;
 
 import java.time.Clock;
+import java.time.Instant;
 import java.time.temporal.ChronoUnit;
+import java.util.Set;
 import org.jspecify.annotations.Nullable;
 import org.springframework.security.access.AccessDeniedException;
 import org.springframework.stereotype.Service;
@@ -21,6 +23,13 @@ import turnsheet.web.RefusedRequestException;
 /** Issues and revises reports in the name of an owner, and keeps a record of it. */
 @Service
 public class ReportDesk {
+
+  static final int NAME_LENGTH = 120;
+  static final int CONDITIONS_LENGTH = 1000;
+  static final int REMARKS_LENGTH = 2000;
+  static final int REASON_LENGTH = 1000;
+
+  private static final Set<String> LANGUAGES = Set.of("en", "de");
 
   private final Sheets sheets;
   private final Reports reports;
@@ -53,7 +62,52 @@ public class ReportDesk {
    * @param language {@code en} or {@code de}
    */
   public record Wish(
-      String language, String measuredBy, String releasedBy, String conditions, String remarks) {}
+      @Nullable String language,
+      @Nullable String measuredBy,
+      @Nullable String releasedBy,
+      @Nullable String conditions,
+      @Nullable String remarks) {
+
+    /** Whichever way a wish came: what is issued cannot be mended. */
+    private Issue issue(
+        long number, Instant at, String paper, @Nullable Long revises, String reason) {
+      if (language == null || !LANGUAGES.contains(language)) {
+        throw incomplete("language is en or de");
+      }
+      return new Issue(
+          number,
+          at,
+          language,
+          paper,
+          required("measuredBy", measuredBy),
+          required("releasedBy", releasedBy),
+          text("conditions", conditions, CONDITIONS_LENGTH),
+          text("remarks", remarks, REMARKS_LENGTH),
+          revises,
+          text("reason", reason, REASON_LENGTH));
+    }
+
+    private static String required(String name, @Nullable String given) {
+      String text = text(name, given, NAME_LENGTH);
+      if (text.isEmpty()) {
+        throw incomplete(name + " must not be empty");
+      }
+      return text;
+    }
+
+    private static String text(String name, @Nullable String given, int longest) {
+      String text = given == null ? "" : given.strip();
+      if (text.length() > longest) {
+        throw incomplete(name + " has more than " + longest + " characters");
+      }
+      return text;
+    }
+
+    private static RefusedRequestException incomplete(String what) {
+      return new RefusedRequestException(
+          "reportIncomplete", "The report cannot be issued like this: " + what + ".");
+    }
+  }
 
   /**
    * Issues the sheet of a visit as it stands now.
@@ -104,7 +158,7 @@ public class ReportDesk {
   }
 
   private Report issue(VisitId visit, Wish wish, @Nullable Long revises, String reason) {
-    if (!user.isOwner() && !user.signInName().equals(CurrentUser.SERVICE)) {
+    if (!user.isOwner() && !user.isService()) {
       throw new AccessDeniedException("reports are issued by an owner");
     }
     Sheet sheet = sheets.of(visit).orElseThrow(() -> new NotFoundException("visit"));
@@ -118,15 +172,10 @@ public class ReportDesk {
             visit,
             number ->
                 new Report.Content(
-                    new Issue(
+                    wish.issue(
                         number,
                         clock.instant().truncatedTo(ChronoUnit.MICROS),
-                        wish.language(),
                         preferences.get().paper().css(),
-                        wish.measuredBy().strip(),
-                        wish.releasedBy().strip(),
-                        wish.conditions().strip(),
-                        wish.remarks().strip(),
                         revises,
                         reason),
                     sheet),

@@ -12,11 +12,11 @@ import jakarta.validation.constraints.Size;
  */
 record ReportForm(
     @NotNull @Pattern(regexp = "en|de") String language,
-    @NotBlank @Size(max = 120) String measuredBy,
-    @NotBlank @Size(max = 120) String releasedBy,
-    @NotNull @Size(max = 1000) String conditions,
-    @NotNull @Size(max = 2000) String remarks,
-    @Size(max = 1000) String reason) {
+    @NotBlank @Size(max = ReportDesk.NAME_LENGTH) String measuredBy,
+    @NotBlank @Size(max = ReportDesk.NAME_LENGTH) String releasedBy,
+    @NotNull @Size(max = ReportDesk.CONDITIONS_LENGTH) String conditions,
+    @NotNull @Size(max = ReportDesk.REMARKS_LENGTH) String remarks,
+    @Size(max = ReportDesk.REASON_LENGTH) String reason) {
 
   ReportForm {
     reason = reason == null ? "" : reason;

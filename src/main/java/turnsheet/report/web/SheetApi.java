@@ -9,6 +9,7 @@ import org.springframework.web.bind.annotation.GetMapping;
 import org.springframework.web.bind.annotation.PathVariable;
 import org.springframework.web.bind.annotation.PostMapping;
 import org.springframework.web.bind.annotation.RequestBody;
+import org.springframework.web.bind.annotation.RequestParam;
 import org.springframework.web.bind.annotation.ResponseStatus;
 import org.springframework.web.bind.annotation.RestController;
 import turnsheet.document.CoreJson;
@@ -25,11 +26,13 @@ class SheetApi {
   private final Sheets sheets;
   private final Reports reports;
   private final ReportDesk desk;
+  private final SheetPrinting printing;
 
-  SheetApi(Sheets sheets, Reports reports, ReportDesk desk) {
+  SheetApi(Sheets sheets, Reports reports, ReportDesk desk, SheetPrinting printing) {
     this.sheets = sheets;
     this.reports = reports;
     this.desk = desk;
+    this.printing = printing;
   }
 
   /** The sheet of a visit as things stand: what a report would say. */
@@ -59,6 +62,20 @@ class SheetApi {
     return ResponseEntity.ok()
         .header("ETag", "\"" + report.contentSha256() + "\"")
         .body(report.contentJson());
+  }
+
+  /** The same as it was printed. */
+  @GetMapping(value = "/api/v1/reports/{number}/pdf", produces = MediaType.APPLICATION_PDF_VALUE)
+  byte[] pdf(@PathVariable long number) {
+    return reports.pdf(number, printing::pdf).orElseThrow(() -> new NotFoundException("report"));
+  }
+
+  /** Issues the sheet of the same visit afresh in place of a report. */
+  @PostMapping("/api/v1/reports/{number}/revisions")
+  @ResponseStatus(HttpStatus.CREATED)
+  IssuedDocument revise(
+      @PathVariable long number, @RequestParam String reason, @RequestBody ReportDesk.Wish wish) {
+    return IssuedDocument.of(desk.revise(number, wish, reason));
   }
 
   /** What was issued. */

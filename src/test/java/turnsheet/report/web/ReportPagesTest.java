@@ -6,6 +6,7 @@ import static org.springframework.test.web.servlet.request.MockMvcRequestBuilder
 import static org.springframework.test.web.servlet.request.MockMvcRequestBuilders.multipart;
 import static org.springframework.test.web.servlet.request.MockMvcRequestBuilders.post;
 import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.header;
+import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.jsonPath;
 import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.status;
 
 import java.awt.image.BufferedImage;
@@ -313,6 +314,45 @@ class ReportPagesTest {
             number)
         .update();
     assertThat(text(page("/check?code=" + code))).contains("no longer matches");
+  }
+
+  /** What is issued cannot be mended, so a program's incomplete wish is refused before. */
+  @Test
+  void aProgramIssuesRevisesAndReadsAReportAndIsRefusedAnIncompleteOne() throws Exception {
+    String path = "/api/v1" + visit + "/reports";
+    for (String wrong :
+        List.of(
+            "{}",
+            "{'language':'xx','measuredBy':'A','releasedBy':'B'}",
+            "{'language':'en','measuredBy':' ','releasedBy':'B'}",
+            "{'language':'en','measuredBy':'A','releasedBy':'B','remarks':'%s'}"
+                .formatted("x".repeat(2001)))) {
+      mvc.perform(json(path, wrong))
+          .andExpect(status().is(422))
+          .andExpect(jsonPath("$.code").value("reportIncomplete"));
+    }
+    assertThat(reports.ofVisit(bench.visit.id())).isEmpty();
+
+    String good = "{'language':'en','measuredBy':'A','releasedBy':'B'}";
+    mvc.perform(json(path, good)).andExpect(status().isCreated());
+    long first = reports.ofVisit(bench.visit.id()).get(0).number();
+    mvc.perform(json("/api/v1/reports/" + first + "/revisions?reason=", good))
+        .andExpect(status().is(422));
+    mvc.perform(json("/api/v1/reports/" + first + "/revisions?reason=misprint", good))
+        .andExpect(status().isCreated());
+    assertThat(reports.find(first).orElseThrow().isCurrent()).isFalse();
+    byte[] printed =
+        mvc.perform(get("/api/v1/reports/" + first + "/pdf"))
+            .andExpect(status().isOk())
+            .andReturn()
+            .getResponse()
+            .getContentAsByteArray();
+    assertThat(printed).isEqualTo(pdf(first));
+  }
+
+  private static org.springframework.test.web.servlet.request.MockHttpServletRequestBuilder json(
+      String path, String body) {
+    return post(path).contentType("application/json").content(body.replace('\'', '"'));
   }
 
   @Test
