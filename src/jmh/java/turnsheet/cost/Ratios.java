@@ -53,7 +53,7 @@ public final class Ratios {
   private static void tone() throws Exception {
     Path file = Recordings.tone(10, 96_000, 1);
     double sox = soxSeconds(file);
-    double own = least(12, () -> Measuring.tone(file));
+    double own = least(24, () -> Measuring.tone(file));
     row("sox FILE -n stat", sox, 1);
     row("tone of 10 min in process, warm", own, own / sox);
     double python =
@@ -69,7 +69,7 @@ public final class Ratios {
   private static void hour() throws Exception {
     Path ten = Recordings.tone(10, 96_000, 1);
     Path sixty = Recordings.tone(60, 96_000, 1);
-    double short10 = least(12, () -> Measuring.tone(ten));
+    double short10 = least(24, () -> Measuring.tone(ten));
     double long60 = least(4, () -> Measuring.tone(sixty));
     row("tone of 60 min over 10 min", long60, long60 / short10);
   }

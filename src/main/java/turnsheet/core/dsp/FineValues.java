@@ -17,11 +17,26 @@ public final class FineValues {
   private final double[] ring = new double[2 * TAPS];
   private int oldest;
 
-  public FineValues(double rateHertz) {
-    weights = new double[(int) Math.max(1, Math.ceil(WANTED_HERTZ / rateHertz))][];
+  private FineValues(int perSample) {
+    weights = new double[perSample][];
     for (int p = 0; p < weights.length; p++) {
       weights[p] = row(p / (double) weights.length);
     }
+  }
+
+  /** As many values as crests ask for. */
+  public static FineValues at(double rateHertz) {
+    return new FineValues(perSample(rateHertz));
+  }
+
+  /** Samples alone, as late as with values between them. */
+  public static FineValues none() {
+    return new FineValues(1);
+  }
+
+  /** Values per sample that crests ask for. */
+  public static int perSample(double rateHertz) {
+    return (int) Math.max(1, Math.ceil(WANTED_HERTZ / rateHertz));
   }
 
   private static double[] row(double share) {
@@ -67,10 +82,12 @@ public final class FineValues {
       return ring[oldest + TAPS / 2 - 1];
     }
     double[] row = weights[part];
-    double sum = 0;
-    for (int i = 0; i < TAPS; i++) {
-      sum += row[i] * ring[oldest + i];
+    double even = 0;
+    double odd = 0; // two sums, as each addition waits for the one before
+    for (int i = 0; i < TAPS; i += 2) {
+      even += row[i] * ring[oldest + i];
+      odd += row[i + 1] * ring[oldest + i + 1];
     }
-    return sum;
+    return even + odd;
   }
 }

@@ -33,10 +33,11 @@ public final class FirDecimator {
 
   private final int outputs;
   private final double[][] rows;
-  private final double[] sums;
+  private final double[] ripe;
+  private final double[] other;
 
-  /** For every filter the outputs that still lack samples, the oldest first. */
-  private final double[][] open;
+  /** For every filter and set of rows but the last: sums whose turn has not come. */
+  private final double[][][] held;
 
   private final double[] buffer;
   private int filled;
@@ -68,8 +69,9 @@ public final class FirDecimator {
         taps[f][(lead + i) / used][(lead + i) % used] = filters[f][i];
       }
     }
-    sums = new double[outputs];
-    open = new double[filters.length][outputs + (sets - 1) * stride];
+    ripe = new double[outputs + stride];
+    other = new double[outputs + stride];
+    held = new double[filters.length][sets - 1][stride];
     buffer = new double[used + outputs * factor];
     filled = lead;
   }
@@ -133,52 +135,52 @@ public final class FirDecimator {
     }
   }
 
+  /**
+   * The sums of one set of rows are held back until those of the next set for the same output come,
+   * so that each set adds to an array that begins at index 0.
+   */
   private int advance(int count, double[][] out, int at) {
     int sets = taps[0].length;
-    int held = (sets - 1) * stride;
-    int ready = Math.max(0, begun + count - held);
+    int late = (sets - 1) * stride;
+    int unripe = Math.min(count, Math.max(0, late - begun));
     for (int f = 0; f < taps.length; f++) {
-      double[] sum = open[f];
-      java.util.Arrays.fill(sum, held, held + count, 0);
+      double[] sums = ripe;
+      java.util.Arrays.fill(sums, 0, count, 0);
       for (int s = 0; s < sets; s++) {
-        weigh(taps[f][s], count);
-        add(sums, count, sum, held - s * stride);
+        if (s > 0) {
+          sums = delayed(sums, count, held[f][s - 1]);
+        }
+        weigh(sums, taps[f][s], count);
       }
-      System.arraycopy(sum, count - ready, out[f], at, ready);
-      System.arraycopy(sum, count, sum, 0, held);
+      System.arraycopy(sums, unripe, out[f], at, count - unripe);
     }
-    begun = Math.min(held, begun + count);
-    return ready;
+    begun = Math.min(late, begun + count);
+    return count - unripe;
   }
 
-  /** Sums of one set of rows, each row times its tap. */
-  private void weigh(double[] weights, int count) {
+  /** The sums {@link #stride} outputs later, in the other array. */
+  private double[] delayed(double[] sums, int count, double[] before) {
+    double[] later = sums == ripe ? other : ripe;
+    System.arraycopy(before, 0, later, 0, stride);
+    System.arraycopy(sums, 0, later, stride, count);
+    System.arraycopy(later, count, before, 0, stride);
+    return later;
+  }
+
+  /** Adds one set of rows, each row times its tap. */
+  private void weigh(double[] sums, double[] weights, int count) {
     for (int r = 0; r < rows.length; r += 4) {
-      double a = weights[r];
-      double b = weights[r + 1];
-      double c = weights[r + 2];
-      double d = weights[r + 3];
-      if (r == 0) {
-        begin(sums, count, a, b, c, d, rows[r], rows[r + 1], rows[r + 2], rows[r + 3]);
-      } else {
-        go(sums, count, a, b, c, d, rows[r], rows[r + 1], rows[r + 2], rows[r + 3]);
-      }
-    }
-  }
-
-  private static void begin(
-      double[] sums,
-      int n,
-      double a,
-      double b,
-      double c,
-      double d,
-      double[] w,
-      double[] x,
-      double[] y,
-      double[] z) {
-    for (int m = 0; m < n; m++) {
-      sums[m] = (a * w[m] + b * x[m]) + (c * y[m] + d * z[m]);
+      go(
+          sums,
+          count,
+          weights[r],
+          weights[r + 1],
+          weights[r + 2],
+          weights[r + 3],
+          rows[r],
+          rows[r + 1],
+          rows[r + 2],
+          rows[r + 3]);
     }
   }
 
@@ -195,12 +197,6 @@ public final class FirDecimator {
       double[] z) {
     for (int m = 0; m < n; m++) {
       sums[m] += (a * w[m] + b * x[m]) + (c * y[m] + d * z[m]);
-    }
-  }
-
-  private static void add(double[] sums, int n, double[] to, int at) {
-    for (int m = 0; m < n; m++) {
-      to[at + m] += sums[m];
     }
   }
 }

@@ -22,6 +22,7 @@ public final class QuasiPeakDetector {
   private static final double CALIBRATION_SECONDS = 6;
 
   private final int substeps;
+  private final double substepShare;
   private final double charge;
   private final double discharge;
   private final double lag;
@@ -37,7 +38,8 @@ public final class QuasiPeakDetector {
 
   private QuasiPeakDetector(double rateHertz, double scale) {
     this.substeps = (int) Math.ceil(1 / (rateHertz * LONGEST_STEP_SECONDS));
-    double step = 1 / (rateHertz * substeps);
+    this.substepShare = 1.0 / substeps;
+    double step = substepShare / rateHertz;
     this.charge = 1 - StrictMath.exp(-step / CHARGE_SECONDS);
     this.discharge = StrictMath.exp(-step / DISCHARGE_SECONDS);
     this.lag = 1 - StrictMath.exp(-step / INDICATOR_SECONDS);
@@ -51,14 +53,25 @@ public final class QuasiPeakDetector {
 
   /** Takes the next sample and tells what the indicator shows. */
   public double next(double weighted) {
-    for (int s = 1; s <= substeps; s++) {
-      double x = last + (weighted - last) * s / substeps;
-      positive = x > positive ? positive + charge * (x - positive) : positive * discharge;
-      negative = -x > negative ? negative + charge * (-x - negative) : negative * discharge;
-      indicator += lag * ((positive + negative) / 2 - indicator);
+    double part = (weighted - last) * substepShare;
+    double x = last;
+    for (int s = 1; s < substeps; s++) {
+      x += part;
+      step(x);
     }
+    step(weighted);
     last = weighted;
     return indicator * scale;
+  }
+
+  private void step(double x) {
+    double p = positive;
+    double n = negative;
+    p = x > p ? p + charge * (x - p) : p * discharge;
+    n = -x > n ? n + charge * (-x - n) : n * discharge;
+    indicator += lag * ((p + n) / 2 - indicator);
+    positive = p;
+    negative = n;
   }
 
   private static double rawReadingOfReference(double rateHertz) {

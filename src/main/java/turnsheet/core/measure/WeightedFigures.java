@@ -5,10 +5,8 @@ import java.util.Arrays;
 import java.util.List;
 import turnsheet.core.dsp.FineValues;
 import turnsheet.core.dsp.OverlapSaveFir;
-import turnsheet.core.dsp.QuasiPeakDetector;
 import turnsheet.core.dsp.Weighting;
 import turnsheet.core.stats.MagnitudeBlocks;
-import turnsheet.core.stats.MagnitudeHistogram;
 
 /**
  * The readings of a flutter meter: the weighted fluctuation's two-sigma value, quasi-peak value and
@@ -17,7 +15,6 @@ import turnsheet.core.stats.MagnitudeHistogram;
 final class WeightedFigures {
 
   private static final int BLOCK = 8192;
-  private static final double SHARE = 0.95;
   private static final double SETTLING_SECONDS = 2;
   private static final double SETTLING_SHARE = 0.2;
 
@@ -28,41 +25,15 @@ final class WeightedFigures {
 
   private final double rateHertz;
   private final double[] response;
-  private final Tally whole = new Tally();
-  private final Tally block = new Tally();
+  private final Meter.Tally whole = new Meter.Tally();
+  private final Meter.Tally block = new Meter.Tally();
   private final List<double[]> blocks = new ArrayList<>();
-  private final Tally lineBlock = new Tally();
+  private final Meter.Tally lineBlock = new Meter.Tally();
   private final List<double[]> lineBlocks = new ArrayList<>();
   private final List<LineFinder.Found> found;
   private final long blockSamples;
   private final MagnitudeBlocks.Collector fluctuation;
   private final MagnitudeBlocks.Collector indication;
-
-  private static final class Tally {
-    final MagnitudeHistogram magnitude = new MagnitudeHistogram();
-    final MagnitudeHistogram indicated = new MagnitudeHistogram();
-    double squares;
-    long samples;
-
-    void add(double weighted, double indication) {
-      indicated.add(indication);
-      squares += weighted * weighted;
-      samples++;
-    }
-
-    double[] readings() {
-      return new double[] {
-        magnitude.quantile(SHARE), indicated.quantile(SHARE), Math.sqrt(squares / samples)
-      };
-    }
-
-    void clear() {
-      magnitude.clear();
-      indicated.clear();
-      squares = 0;
-      samples = 0;
-    }
-  }
 
   /**
    * @param found lines in the one spectrum of the capture; none where it took more
@@ -79,11 +50,12 @@ final class WeightedFigures {
     blockSamples = Math.max(1, settled / count);
     long resampled =
         Math.max((long) Math.ceil(RESAMPLED_SECONDS * rateHertz), settled / MOST_RESAMPLED);
-    fluctuation = new MagnitudeBlocks.Collector(resampled * new FineValues(rateHertz).perSample());
+    fluctuation = new MagnitudeBlocks.Collector(resampled * FineValues.perSample(rateHertz));
     indication = new MagnitudeBlocks.Collector(resampled);
     for (CleanTrace.Piece piece : residual.clean().pieces()) {
       run(residual, piece);
     }
+    whole.add(block);
   }
 
   private int settling(CleanTrace.Piece piece) {
@@ -93,12 +65,12 @@ final class WeightedFigures {
   /** The filter is run in on the piece mirrored at its own beginning. */
   private void run(Residual residual, CleanTrace.Piece piece) {
     OverlapSaveFir filter = new OverlapSaveFir(response);
-    Reader reader = new Reader();
+    Meter meter = Meter.between(rateHertz);
     double[] in = new double[BLOCK];
     double[] out = new double[filter.roomFor(BLOCK)];
     int mirrored = Math.min(response.length, piece.length() - 1);
     WeightedLines lines = WeightedLines.of(residual, found, response, mirrored);
-    Reader lineReader = new Reader();
+    Meter lineMeter = Meter.ofSamples(rateHertz);
     long at = (long) piece.from() - mirrored;
     for (int left = mirrored; left > 0; ) {
       int part = Math.min(BLOCK, left);
@@ -110,9 +82,9 @@ final class WeightedFigures {
               at,
               out,
               filter.process(in, part, out),
-              reader,
+              meter,
               lines,
-              lineReader);
+              lineMeter);
       left -= part;
     }
     for (int from = piece.from(); from < piece.to(); from += BLOCK) {
@@ -125,34 +97,11 @@ final class WeightedFigures {
               at,
               out,
               filter.process(in, part, out),
-              reader,
+              meter,
               lines,
-              lineReader);
+              lineMeter);
     }
-    take(residual.clean(), piece, at, out, filter.finish(out), reader, lines, lineReader);
-  }
-
-  /** Fills up between samples and follows the indicator. */
-  private final class Reader {
-    private final FineValues fine = new FineValues(rateHertz);
-    private final QuasiPeakDetector detector = new QuasiPeakDetector(rateHertz * fine.perSample());
-    private final double[] values = new double[fine.perSample()];
-    double indicated;
-
-    void next(double sample) {
-      fine.add(sample);
-      for (int p = 0; p < values.length; p++) {
-        values[p] = fine.value(p);
-        indicated = detector.next(values[p]);
-      }
-    }
-
-    void tell(Tally tally) {
-      for (double value : values) {
-        tally.magnitude.add(value);
-      }
-      tally.add(values[0], indicated);
-    }
+    take(residual.clean(), piece, at, out, filter.finish(out), meter, lines, lineMeter);
   }
 
   private long take(
@@ -161,28 +110,28 @@ final class WeightedFigures {
       long at,
       double[] out,
       int count,
-      Reader reader,
+      Meter meter,
       WeightedLines lines,
-      Reader lineReader) {
+      Meter lineMeter) {
     int settled = piece.from() + settling(piece);
     for (int i = 0; i < count; i++) {
-      reader.next(out[i]);
+      meter.next(out[i]);
       if (!lines.isEmpty()) {
-        lineReader.next(lines.next());
+        lineMeter.next(lines.next());
       }
-      long index = at + i - reader.fine.delaySamples();
+      long index = at + i - meter.delaySamples();
       if (index >= settled && clean.usable((int) index)) {
-        reader.tell(whole);
-        reader.tell(block);
-        for (double value : reader.values) {
+        meter.tell(block);
+        for (double value : meter.values()) {
           fluctuation.add(value);
         }
-        indication.add(reader.indicated);
+        indication.add(meter.indicated());
         if (!lines.isEmpty()) {
-          lineReader.tell(lineBlock);
+          lineMeter.tell(lineBlock);
         }
-        if (block.samples >= blockSamples) {
+        if (block.samples() >= blockSamples) {
           blocks.add(block.readings());
+          whole.add(block);
           block.clear();
           lineBlocks.add(lines.isEmpty() ? new double[3] : lineBlock.readings());
           lineBlock.clear();
@@ -196,7 +145,7 @@ final class WeightedFigures {
   record Value(double percent, double lengthUncertaintyPercent) {}
 
   double settledSeconds() {
-    return whole.samples / rateHertz;
+    return whole.samples() / rateHertz;
   }
 
   /** The weighted fluctuation in blocks. */

@@ -37,6 +37,22 @@ public final class MagnitudeHistogram {
     highest = Math.max(highest, index);
   }
 
+  /** Counts what another one counted. */
+  public void add(MagnitudeHistogram other) {
+    for (int o = 0; o < octaves.length; o++) {
+      int[] theirs = other.octaves[o];
+      if (theirs.length > 0 && octaves[o].length == 0) {
+        octaves[o] = new int[OCTAVE];
+      }
+      for (int c = 0; c < theirs.length; c++) {
+        octaves[o][c] += theirs[c];
+      }
+    }
+    total += other.total;
+    lowest = Math.min(lowest, other.lowest);
+    highest = Math.max(highest, other.highest);
+  }
+
   public long total() {
     return total;
   }

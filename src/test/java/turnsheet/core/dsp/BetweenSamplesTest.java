@@ -51,7 +51,7 @@ class BetweenSamplesTest {
   @ParameterizedTest
   @CsvSource({"600, 200", "800, 200", "1002.27, 200", "1200, 150", "2000, 200", "50, 10"})
   void fineValuesLieOnTheSine(double rate, double hertz) {
-    FineValues fine = new FineValues(rate);
+    FineValues fine = FineValues.at(rate);
     assertThat(rate * fine.perSample()).isBetween(2000.0, 4000.0);
     double worst = 0;
     for (int i = 0; i < 500; i++) {
@@ -67,7 +67,7 @@ class BetweenSamplesTest {
 
   @Test
   void fineValuesKeepTheSamplesThemselves() {
-    FineValues fine = new FineValues(1000);
+    FineValues fine = FineValues.at(1000);
     for (int i = 0; i < 40; i++) {
       fine.add(i * i);
     }
