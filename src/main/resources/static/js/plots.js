@@ -148,10 +148,14 @@ class Plot {
     const scale = this.scale("x", shown, look, false);
     scale.type = this.logarithmic ? "logarithmic" : "linear";
     if (this.logarithmic) {
-      scale.ticks.callback = (value) => {
-        const digit = value / Math.pow(10, Math.floor(Math.log10(value) + 1e-9));
-        return [1, 2, 5].includes(Math.round(digit * 1e6) / 1e6) ? value.toLocaleString(Chart.defaults.locale) : "";
+      // taken out before room is shared out, or numbers that are not shown would push shown ones aside
+      scale.afterBuildTicks = (drawn) => {
+        drawn.ticks = drawn.ticks.filter(({ value }) => {
+          const digit = value / Math.pow(10, Math.floor(Math.log10(value) + 1e-9));
+          return [1, 2, 5].includes(Math.round(digit * 1e6) / 1e6);
+        });
       };
+      scale.ticks.callback = (value) => value.toLocaleString(Chart.defaults.locale);
     }
     return scale;
   }

@@ -22,13 +22,17 @@ async function follow(item) {
   setTimeout(() => follow(item), PAUSE_MS);
 }
 
-/** Puts the result in place without touching what may be half entered beside it. */
+/** Puts the result, and what is to be done now, in place without touching what may be half entered beside them. */
 async function finish(item) {
   const answer = await fetch(location.href, { headers: { Accept: "text/html" } });
   const fresh = new DOMParser().parseFromString(await answer.text(), "text/html");
   const result = fresh.querySelector(`[data-capture="${item.dataset.capture}"]`);
   if (result && document.querySelector("form.upload")) {
     item.replaceWith(document.importNode(result, true));
+    const next = fresh.querySelector("[data-next]");
+    if (next) {
+      document.querySelector("[data-next]")?.replaceWith(document.importNode(next, true));
+    }
   } else {
     location.reload();
   }

@@ -52,8 +52,15 @@ public class HistorySheets {
    * One figure at one speed setting.
    *
    * @param svg finished drawing
+   * @param conditions in the order of the marks that stand for them
    */
-  public record Drawing(String setting, String figure, String svg, String trend, List<Row> rows) {}
+  public record Drawing(
+      String setting,
+      String figure,
+      String svg,
+      List<String> conditions,
+      String trend,
+      List<Row> rows) {}
 
   /** One reading. */
   public record Row(String day, String condition, String shown) {}
@@ -88,6 +95,7 @@ public class HistorySheets {
         setting.label(),
         words.nameOf(history.figure()),
         new History(words, stays).draw(history, setting.label()),
+        history.conditions(),
         new TrendText(words, times).sentence(history),
         history.shown().stream()
             .map(

@@ -18,6 +18,7 @@ import turnsheet.web.Shown;
 record ReadingPage(
     String id,
     String captureId,
+    String visitId,
     List<Crumb> trail,
     String title,
     String sentence,

@@ -1,17 +1,14 @@
 package turnsheet.reading.web;
 
-import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
-import org.jspecify.annotations.Nullable;
 import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
 import turnsheet.access.ShopPreferences;
 import turnsheet.capture.ToneMethod;
 import turnsheet.core.measure.FigureName;
-import turnsheet.core.measure.MeasureSettings;
 import turnsheet.core.measure.Reading;
 import turnsheet.core.signal.Warning;
 import turnsheet.reading.CapturePlace;
@@ -74,9 +71,11 @@ class ReadingView {
     List<Judged> judged = Judged.all(limits(place), name -> name.of(reading), rules.get().rule());
     FigureTables tables = new FigureTables(words, reading, judged);
     Drawings drawings = new Drawings(words, stored.id());
+    ReadingFacts facts = new ReadingFacts(words, times, preferences.get().mainsHz());
     return new ReadingPage(
         stored.id().toString(),
         place.captureId().toString(),
+        place.visitId().toString(),
         trail(place, words),
         words.text("reading.page.title", place.settingLabel(), words.said(place.condition())),
         new Sentence(words).of(name -> name.of(reading), judged),
@@ -103,11 +102,11 @@ class ReadingView {
         lines(reading, words),
         stability(reading, words),
         BudgetTable.of(words, reading),
-        edgeFacts(reading, words),
-        signalFacts(reading, words),
+        facts.edges(reading),
+        facts.signal(reading),
         reading.warnings().stream().map(Warning::message).toList(),
-        source(reading, place, words),
-        method(reading, stored, words),
+        facts.source(reading, place),
+        facts.method(reading, stored.madeAt()),
         channels.of(stored, words),
         others(stored));
   }
@@ -175,139 +174,9 @@ class ReadingView {
             .toList();
   }
 
-  private static List<ReadingPage.Fact> edgeFacts(Reading reading, Wording words) {
-    Reading.Edges edges = reading.edges();
-    if (edges == null) {
-      return List.of();
-    }
-    List<ReadingPage.Fact> facts = new ArrayList<>();
-    facts.add(fact(words, "reading.edges.count", Long.toString(edges.count())));
-    facts.add(fact(words, "reading.edges.missing", Long.toString(edges.missing())));
-    facts.add(fact(words, "reading.edges.extra", Long.toString(edges.extra())));
-    Reading.Wheel wheel = edges.wheel();
-    if (wheel != null) {
-      facts.add(fact(words, "reading.edges.teeth", Integer.toString(wheel.teeth())));
-    }
-    return facts;
-  }
-
-  private List<ReadingPage.Fact> signalFacts(Reading reading, Wording words) {
-    Reading.Signal signal = reading.signal();
-    List<ReadingPage.Fact> facts = new ArrayList<>();
-    facts.add(fact(words, "reading.signal.clipped", Long.toString(signal.clippedSamples())));
-    String dropouts =
-        signal.dropouts().isEmpty()
-            ? words.text("reading.signal.none")
-            : String.join(
-                "; ",
-                signal.dropouts().stream()
-                    .map(
-                        d ->
-                            words.text(
-                                "reading.signal.dropout",
-                                words.numbers().fixed(d.startSeconds(), 3),
-                                words.numbers().fixed(1000 * d.durationSeconds(), 1)))
-                    .toList());
-    facts.add(fact(words, "reading.signal.dropouts", dropouts));
-    String mains =
-        signal.mains().isEmpty()
-            ? words.text("reading.signal.none")
-            : String.join(
-                "; ",
-                signal.mains().stream()
-                    .map(
-                        m ->
-                            words.text(
-                                m.rateHz() % preferences.get().mainsHz() == 0
-                                    ? "reading.signal.mainsLine"
-                                    : "reading.signal.mainsOther",
-                                words.numbers().plain(m.rateHz()),
-                                words.numbers().fixed(m.relativeDb(), 1)))
-                    .toList());
-    facts.add(fact(words, "reading.signal.mains", mains));
-    return facts;
-  }
-
-  private List<ReadingPage.Fact> source(Reading reading, CapturePlace place, Wording words) {
-    Reading.Source source = reading.source();
-    Double rate = source.sampleRateHz();
-    List<ReadingPage.Fact> facts = new ArrayList<>();
-    facts.add(fact(words, "reading.source.file", place.fileName()));
-    facts.add(fact(words, "reading.source.received", times.minute(place.receivedAt())));
-    facts.add(fact(words, "reading.source.sha256", source.sha256()));
-    facts.add(fact(words, "reading.source.format", words.said(source.format())));
-    facts.add(fact(words, "reading.source.kind", kind(reading.source().kind().name(), words)));
-    facts.add(fact(words, "reading.source.channel", Integer.toString(source.channel())));
-    if (rate != null) {
-      facts.add(fact(words, "reading.source.rate", words.numbers().plain(rate) + "\u202fHz"));
-    }
-    facts.add(
-        fact(
-            words,
-            "reading.source.duration",
-            words.numbers().fixed(source.durationSeconds(), 2) + "\u202fs"));
-    addIfKnown(facts, words, "reading.source.instrument", place.instrumentName());
-    addIfKnown(facts, words, "reading.source.medium", place.mediumName());
-    addIfKnown(facts, words, "capture.tone.method", methodOf(place, words));
-    return facts;
-  }
-
   /** Practice names the method beside the figure. */
   private static String toneSentence(CapturePlace place, Wording words) {
     ToneMethod method = place.toneMethod();
     return method == null ? "" : words.text("reading.page.tone." + method.word());
-  }
-
-  private static @Nullable String methodOf(CapturePlace place, Wording words) {
-    ToneMethod method = place.toneMethod();
-    return method == null ? null : words.text("capture.tone." + method.word());
-  }
-
-  private List<ReadingPage.Fact> method(Reading reading, StoredReading stored, Wording words) {
-    MeasureSettings settings = reading.method().settings();
-    Numbers numbers = words.numbers();
-    Integer teeth = settings.teeth();
-    List<ReadingPage.Fact> facts = new ArrayList<>();
-    facts.add(fact(words, "reading.method.version", reading.method().version()));
-    facts.add(fact(words, "reading.method.madeAt", times.minute(stored.madeAt())));
-    facts.add(
-        fact(words, "reading.method.nominal", numbers.plain(settings.nominalHz()) + "\u202fHz"));
-    facts.add(
-        fact(
-            words,
-            "reading.method.search",
-            "±\u202f" + numbers.plain(settings.searchPercent()) + "\u202f%"));
-    addIfKnown(facts, words, "reading.method.teeth", teeth == null ? null : teeth.toString());
-    facts.add(
-        fact(
-            words,
-            "reading.method.clockError",
-            numbers.plain(settings.clockErrorPpm()) + "\u202fppm"));
-    facts.add(
-        fact(
-            words,
-            "reading.method.clockUncertainty",
-            numbers.fixed(settings.clockStandardUncertaintyPpm(), 1) + "\u202fppm"));
-    facts.add(
-        fact(
-            words,
-            "reading.method.mediumUncertainty",
-            numbers.fixed(settings.mediumStandardUncertaintyPercent(), 3) + "\u202f%"));
-    return facts;
-  }
-
-  private static void addIfKnown(
-      List<ReadingPage.Fact> facts, Wording words, String key, @Nullable String text) {
-    if (text != null) {
-      facts.add(fact(words, key, text));
-    }
-  }
-
-  private static String kind(String name, Wording words) {
-    return words.text("reading.kind." + name.toLowerCase(Locale.ROOT));
-  }
-
-  private static ReadingPage.Fact fact(Wording words, String key, String text) {
-    return new ReadingPage.Fact(words.text(key), text);
   }
 }
