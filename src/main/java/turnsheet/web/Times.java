@@ -5,6 +5,7 @@ import java.time.LocalDate;
 import java.time.ZoneId;
 import java.time.format.DateTimeFormatter;
 import java.util.Locale;
+import org.jspecify.annotations.Nullable;
 import org.springframework.context.i18n.LocaleContextHolder;
 import org.springframework.stereotype.Component;
 
@@ -39,6 +40,14 @@ public class Times {
   /** A day in a language that is not that of the page around it. */
   public String day(Instant at, Locale locale) {
     return PageLanguage.isGerman(locale) ? DAY_GERMAN.format(date(at)) : date(at).toString();
+  }
+
+  /** A day that was entered as one; empty for none. */
+  public String day(@Nullable LocalDate day) {
+    if (day == null) {
+      return "";
+    }
+    return isGerman() ? DAY_GERMAN.format(day) : day.toString();
   }
 
   /** {@code 2026-12}, or {@code Dezember 2026}. */

@@ -99,6 +99,29 @@ class CoreWordsTest {
             });
   }
 
+  /** A sentence in two languages would be worse than one in English. */
+  @Test
+  void whateverIsUploadedByMistakeIsNamedInGerman() throws IOException {
+    String source =
+        Files.readString(MAIN.resolve("java/turnsheet/core/format/ForeignContent.java"));
+    List<String> named = new ArrayList<>();
+    collect(named, source, "(?:archive|compressed)\\((?:\\d, )?\"[^\"]*\", \"([^\"]+)\"\\)");
+    collect(named, source, "new Mark\\(\\d, \"[^\"]*\", \"[^\"]*\", \"([^\"]+)\"");
+    collect(named, source, "String [A-Z_]+ =\\s*\"([^\"]+)\"");
+    named.remove("Monkey's Audio"); // a name in either language
+    assertThat(named).hasSizeGreaterThan(35).contains("a JPEG picture", "CAF audio");
+    assertThat(named).allSatisfy(text -> assertThat(CoreWords.german(text)).as(text).isPresent());
+  }
+
+  @Test
+  void aTextWithoutNumbersIsRefusedInGerman() {
+    String rest = " no line of numbers: export the capture as a table, one row per line.";
+    assertThat(CoreWords.in(Locale.GERMANY, "The text holds" + rest))
+        .startsWith("In dem Text ist keine Zeile mit Zahlen:");
+    assertThat(CoreWords.in(Locale.GERMANY, "The first 256 KiB of the text hold" + rest))
+        .startsWith("In den ersten 256 KiB des Textes ist keine Zeile mit Zahlen:");
+  }
+
   private static void collect(List<String> said, String source, String pattern) {
     Pattern.compile(pattern).matcher(source).results().map(m -> m.group(1)).forEach(said::add);
   }

@@ -23,6 +23,7 @@ import turnsheet.access.OneTimeAddresses;
 import turnsheet.access.OneTimeAddresses.Purpose;
 import turnsheet.access.Role;
 import turnsheet.web.NotFoundException;
+import turnsheet.web.PlainText;
 import turnsheet.web.RefusedRequestException;
 
 /** Adds people, bars them, lets them in again; for owners. */
@@ -38,7 +39,12 @@ class PeopleController {
       @NotNull @Pattern(regexp = FirstRunForm.SIGN_IN_NAME, message = "{access.name.pattern}")
           String name,
       @NotBlank @Size(max = 120) String displayName,
-      @NotNull Role role) {}
+      @NotNull Role role) {
+
+    PersonForm {
+      displayName = PlainText.typed(displayName);
+    }
+  }
 
   private final Accounts accounts;
   private final OneTimeAddresses addresses;

@@ -39,6 +39,16 @@ class PreferencesController {
           liked.speeds(), Integer.toString(liked.mainsHz()), liked.paper(), language.getLanguage());
     }
 
+    /** As the audit trail keeps it, whatever language it is read in later. */
+    String inWords() {
+      return String.join(
+          ", ",
+          speeds == SpeedLiking.CM_PER_S ? "cm/s" : "in/s",
+          mains + " Hz",
+          paper.css(),
+          language);
+    }
+
     Liked liked() {
       return new Liked(speeds, Integer.parseInt(mains), paper);
     }
@@ -67,7 +77,7 @@ class PreferencesController {
   String change(@Valid @ModelAttribute("form") PreferencesForm form, RedirectAttributes flash) {
     preferences.put(form.liked());
     language.put(PageLanguage.of(form.language()));
-    audit.record("access.audit.preferencesChanged", form.liked() + ", " + form.language());
+    audit.record("access.audit.preferencesChanged", form.inWords());
     flash.addFlashAttribute("done", "access.preferences.saved");
     return "redirect:" + ShopController.PATH;
   }

@@ -15,6 +15,7 @@ import org.springframework.web.servlet.mvc.support.RedirectAttributes;
 import turnsheet.access.AuditTrail;
 import turnsheet.access.ShopProfiles;
 import turnsheet.access.ShopProfiles.ShopProfile;
+import turnsheet.web.PlainText;
 
 /** The shop page and its letterhead. */
 @Controller
@@ -24,7 +25,13 @@ class ShopController {
 
   /** The letterhead as typed. */
   record ProfileForm(
-      @NotBlank @Size(max = 200) String shopName, @NotNull @Size(max = 1000) String shopAddress) {}
+      @NotBlank @Size(max = 200) String shopName, @NotNull @Size(max = 1000) String shopAddress) {
+
+    ProfileForm {
+      shopName = PlainText.typed(shopName);
+      shopAddress = PlainText.typed(shopAddress);
+    }
+  }
 
   private final ShopPages pages;
   private final ShopProfiles profiles;
@@ -57,7 +64,7 @@ class ShopController {
     if (errors.hasErrors()) {
       return "access/profile";
     }
-    profiles.put(new ShopProfile(form.shopName().strip(), form.shopAddress().strip()));
+    profiles.put(new ShopProfile(form.shopName(), form.shopAddress()));
     audit.record("access.audit.profileChanged", form.shopName());
     flash.addFlashAttribute("done", "access.shop.profileChanged");
     return "redirect:" + PATH;

@@ -2,7 +2,6 @@ package turnsheet.bench.web;
 
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Objects;
 import org.jspecify.annotations.Nullable;
 import turnsheet.bench.ClockCheck;
 import turnsheet.core.signal.Warning;
@@ -62,7 +61,7 @@ record ClockPage(
         check.id().toString(),
         times.minute(check.madeAt()),
         lead(instrument, check, words),
-        values(before, words),
+        values(before, words, times),
         new Values(error, error.uncertainty(), times.day(check.madeAt())),
         remarks(check, before, words),
         taken == null
@@ -105,12 +104,12 @@ record ClockPage(
         error(check, words).text());
   }
 
-  private static Values values(ClockCheck.Before before, Wording words) {
+  private static Values values(ClockCheck.Before before, Wording words, Times times) {
     Shown error =
         words
             .numbers()
             .show(before.errorPpm(), before.expandedUncertaintyPpm(), PPM, Numbers.Sign.SHOWN);
-    return new Values(error, error.uncertainty(), Objects.toString(before.checkedOn(), ""));
+    return new Values(error, error.uncertainty(), times.day(before.checkedOn()));
   }
 
   private static List<String> remarks(ClockCheck check, ClockCheck.Before before, Wording words) {

@@ -2,7 +2,6 @@ package turnsheet.bench.web;
 
 import java.util.Comparator;
 import java.util.List;
-import java.util.Objects;
 import org.jspecify.annotations.Nullable;
 import turnsheet.bench.ClockCheck;
 import turnsheet.shop.BenchInstrument;
@@ -81,7 +80,7 @@ record InstrumentPage(
                 "bench.instrument.reckoned",
                 ClockPage.reckoned(ClockCheck.Before.of(instrument), words))
             : null,
-        Objects.toString(instrument.checkedOn(), ""),
+        times.day(instrument.checkedOn()),
         instrument.note(),
         checks.stream().map(check -> row(check, instrument, words, times)).toList(),
         checks.isEmpty() ? null : charts.clock(checks),

@@ -11,6 +11,7 @@ import turnsheet.shop.InstrumentId;
 import turnsheet.shop.MediumId;
 import turnsheet.shop.SpeedSettingId;
 import turnsheet.shop.VisitId;
+import turnsheet.web.PlainText;
 
 /**
  * What is said about a file as it is uploaded, in a form or in the query of a raw upload.
@@ -27,6 +28,11 @@ record CaptureRequest(
     @Nullable UUID instrumentId,
     @Nullable UUID mediumId,
     @Nullable @Pattern(regexp = "|replay|recordAndReplay") String toneMethod) {
+
+  CaptureRequest {
+    condition = condition == null ? null : PlainText.typed(condition);
+    ownLabel = ownLabel == null ? null : PlainText.typed(ownLabel);
+  }
 
   Arrival arrival(UUID visit) {
     return new Arrival(

@@ -11,6 +11,7 @@ import turnsheet.access.CurrentUser;
 import turnsheet.capture.Capture;
 import turnsheet.capture.CaptureId;
 import turnsheet.capture.LeftOut;
+import turnsheet.web.PlainText;
 import turnsheet.web.RefusedRequestException;
 
 /** Leaving a capture out of sheets and reports; the capture's page asks {@code @leavingOut}. */
@@ -37,7 +38,7 @@ class LeftOutController {
   @PostMapping("/captures/{id}/leave-out")
   String leave(@PathVariable UUID id, @RequestParam String reason) {
     Capture capture = desk.capture(id);
-    String why = reason.strip();
+    String why = PlainText.typed(reason);
     if (why.isEmpty() || why.length() > LeftOut.REASON_LENGTH) {
       throw new RefusedRequestException(
           "leaveOutReason",

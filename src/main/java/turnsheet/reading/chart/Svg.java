@@ -43,11 +43,20 @@ final class Svg {
         + words(look, x, y, "end", words);
   }
 
-  /** Words from bottom to top, centred. */
-  static String upright(double x, double y, String words) {
+  /**
+   * Words from bottom to top, centred.
+   *
+   * @param y of their middle
+   * @param scale of the letters, 1 for those of all other words
+   */
+  static String upright(double x, double y, double scale, String words) {
     return ("<text class=\"drawn-name\" x=\"%1$s\" y=\"%2$s\" text-anchor=\"middle\""
-            + " fill=\"currentColor\" transform=\"rotate(-90 %1$s %2$s)\">%3$s</text>")
-        .formatted(number(x), number(y), escape(words));
+            + " fill=\"currentColor\"%4$s transform=\"rotate(-90 %1$s %2$s)\">%3$s</text>")
+        .formatted(
+            number(x),
+            number(y),
+            escape(words),
+            scale < 1 ? " font-size=\"" + number(12 * scale) + "\"" : "");
   }
 
   /** A surface through which what lies below is seen. */

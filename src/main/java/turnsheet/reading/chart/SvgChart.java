@@ -1,7 +1,6 @@
 package turnsheet.reading.chart;
 
 import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.List;
 import java.util.function.DoubleUnaryOperator;
 import java.util.function.Supplier;
@@ -28,11 +27,9 @@ public final class SvgChart {
   private static final int RIGHT = WIDTH - 14;
   private static final int BOTTOM = 46;
   private static final int TOP = 12;
-  private static final int FLAG_ROW = 15;
-  private static final int FLAG_ROWS = 3;
 
   /** Width of a letter at the size of the drawing's words, a little on the wide side. */
-  private static final double LETTER = 6.6;
+  static final double LETTER = 6.6;
 
   private static final List<String> DASHES = List.of("", "6 3", "1.5 2.5");
 
@@ -42,7 +39,7 @@ public final class SvgChart {
   private final String title;
   private final String description;
   private final List<Supplier<String>> marks = new ArrayList<>();
-  private final List<Flag> flags = new ArrayList<>();
+  private final Flags flags = new Flags();
   private List<Axis.Tick> xTicks;
   private boolean dated;
   private char decimalSign = '.';
@@ -130,7 +127,7 @@ public final class SvgChart {
   /** A word above one place of a curve, tied to it by a thin line. */
   public SvgChart flag(double atX, double atY, String word) {
     if (x.holds(atX)) {
-      flags.add(new Flag(atX, Math.min(atY, y.to()), word));
+      flags.add(atX, Math.min(atY, y.to()), word);
     }
     return this;
   }
@@ -144,7 +141,7 @@ public final class SvgChart {
                 .formatted(WIDTH, height, Svg.escape(title), Svg.escape(description)));
     frame(svg);
     marks.forEach(mark -> svg.append(mark.get()));
-    raiseFlags(svg);
+    svg.append(flags.drawn(LEFT, RIGHT, TOP, new Place(this::left, this::top)));
     return svg.append("</svg>").toString();
   }
 
@@ -165,7 +162,10 @@ public final class SvgChart {
     String axes = "M%d %sV%sH%d".formatted(LEFT, n(frameTop()), n(bottom), RIGHT);
     svg.append(Svg.path("drawn-axis", axes, 1, ""));
     svg.append(Svg.words("drawn-name", (LEFT + RIGHT) / 2.0, height - 8, "middle", x.title()));
-    svg.append(Svg.upright(14, (frameTop() + bottom) / 2, y.title()));
+    // a name longer than the drawing is high is set smaller, in its middle, rather than cut
+    double room = (height - 8) / (y.title().length() * LETTER);
+    double middle = room < 1.5 ? height / 2.0 : (frameTop() + bottom) / 2;
+    svg.append(Svg.upright(14, middle, Math.min(1, room), y.title()));
   }
 
   private String number(String text) {
@@ -203,27 +203,6 @@ public final class SvgChart {
     return path.isEmpty() ? "" : Svg.path("drawn-series series-" + number, path, 1.1, dashes);
   }
 
-  /** Puts each word into the first row where it does not run into one that stands there. */
-  private void raiseFlags(StringBuilder svg) {
-    double[] taken = new double[FLAG_ROWS];
-    List<Flag> inOrder = new ArrayList<>(flags);
-    inOrder.sort(Comparator.comparingDouble(Flag::x));
-    for (Flag flag : inOrder) {
-      double at = left(flag.x());
-      double wide = flag.word().length() * LETTER;
-      double begin = Math.max(LEFT, Math.min(at + 3, RIGHT - wide));
-      int row = 0;
-      while (row < FLAG_ROWS - 1 && taken[row] > begin) {
-        row++;
-      }
-      taken[row] = begin + wide + 8;
-      double level = TOP + row * FLAG_ROW;
-      String pole = "M%s %sV%s".formatted(n(at), n(level - 8), n(top(flag.y())));
-      svg.append(Svg.path("drawn-flag", pole, 0.6, ""));
-      svg.append(Svg.words("drawn-flag", begin, level, "start", flag.word()));
-    }
-  }
-
   private String place(double atX, double atY) {
     return n(left(atX)) + " " + n(top(atY));
   }
@@ -239,7 +218,7 @@ public final class SvgChart {
   }
 
   private double frameTop() {
-    return flags.isEmpty() ? TOP : TOP + FLAG_ROWS * FLAG_ROW;
+    return TOP + flags.height();
   }
 
   private static String n(double length) {
@@ -258,6 +237,4 @@ public final class SvgChart {
       return Svg.number(left.applyAsDouble(x)) + " " + Svg.number(top.applyAsDouble(y));
     }
   }
-
-  private record Flag(double x, double y, String word) {}
 }

@@ -18,6 +18,7 @@ import turnsheet.report.Sheet;
 import turnsheet.report.Sheets;
 import turnsheet.shop.VisitId;
 import turnsheet.web.NotFoundException;
+import turnsheet.web.PlainText;
 import turnsheet.web.RefusedRequestException;
 
 /** Issues and revises reports in the name of an owner, and keeps a record of it. */
@@ -96,7 +97,7 @@ public class ReportDesk {
     }
 
     private static String text(String name, @Nullable String given, int longest) {
-      String text = given == null ? "" : given.strip();
+      String text = PlainText.typed(given);
       if (text.length() > longest) {
         throw incomplete(name + " has more than " + longest + " characters");
       }

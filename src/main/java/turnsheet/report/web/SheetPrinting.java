@@ -25,6 +25,7 @@ import org.w3c.dom.Element;
 import org.w3c.dom.NodeList;
 import org.xml.sax.SAXException;
 import turnsheet.report.Report;
+import turnsheet.web.PlainText;
 
 /** Writes sheets out: as the article that pages show, and as a PDF. Both come from one template. */
 @Component
@@ -78,8 +79,11 @@ public class SheetPrinting {
     return templates.process(template, new Context(locale, Map.of("sheet", page)));
   }
 
-  /** The templates are well-formed XML but for the document type. */
+  /**
+   * The templates are well-formed XML; what an old entry or a file brought into them may not be.
+   */
   private static Document document(String html) {
+    String xml = PlainText.showable(html);
     try {
       DocumentBuilderFactory factory = DocumentBuilderFactory.newInstance();
       factory.setFeature(XMLConstants.FEATURE_SECURE_PROCESSING, true);
@@ -88,7 +92,7 @@ public class SheetPrinting {
       Document document =
           factory
               .newDocumentBuilder()
-              .parse(new ByteArrayInputStream(html.getBytes(StandardCharsets.UTF_8)));
+              .parse(new ByteArrayInputStream(xml.getBytes(StandardCharsets.UTF_8)));
       nameDrawings(document);
       return document;
     } catch (ParserConfigurationException | SAXException | IOException e) {

@@ -1,7 +1,6 @@
 package turnsheet.shop.web;
 
 import jakarta.validation.Valid;
-import java.util.Objects;
 import java.util.Optional;
 import java.util.UUID;
 import java.util.function.UnaryOperator;
@@ -20,6 +19,7 @@ import turnsheet.shop.Media;
 import turnsheet.shop.RefusedChangeException;
 import turnsheet.web.NotFoundException;
 import turnsheet.web.Shown;
+import turnsheet.web.Times;
 
 /** What records and what is played: the list of both, and entering instruments. */
 @Controller
@@ -31,16 +31,19 @@ class InstrumentPages {
   private final Instruments instruments;
   private final Media media;
   private final Refusals refusals;
+  private final Times times;
 
-  InstrumentPages(Instruments instruments, Media media, Refusals refusals) {
+  InstrumentPages(Instruments instruments, Media media, Refusals refusals, Times times) {
     this.instruments = instruments;
     this.media = media;
     this.refusals = refusals;
+    this.times = times;
   }
 
   @GetMapping("/instruments")
   String list(Model model) {
-    model.addAttribute("instruments", instruments.all().stream().map(InstrumentRow::of).toList());
+    model.addAttribute(
+        "instruments", instruments.all().stream().map(i -> InstrumentRow.of(i, times)).toList());
     model.addAttribute("media", media.all().stream().map(MediumRow::of).toList());
     return "shop/instruments";
   }
@@ -102,13 +105,13 @@ class InstrumentPages {
       @Nullable Shown uncertaintyPpm,
       String checkedOn) {
 
-    static InstrumentRow of(BenchInstrument instrument) {
+    static InstrumentRow of(BenchInstrument instrument, Times times) {
       return new InstrumentRow(
           instrument.id().toString(),
           instrument.name(),
           Typed.cell(instrument.clockErrorPpm()),
           Typed.cellOrNone(instrument.clockExpandedUncertaintyPpm()),
-          Objects.toString(instrument.checkedOn(), ""));
+          times.day(instrument.checkedOn()));
     }
   }
 }

@@ -2,6 +2,7 @@ package turnsheet.shop.web;
 
 import org.jspecify.annotations.Nullable;
 import turnsheet.shop.ReferenceMedium;
+import turnsheet.web.Numbers;
 import turnsheet.web.Shown;
 
 /** A line of the list of media; no tone and no flutter where they are unknown. */
@@ -12,7 +13,7 @@ record MediumRow(
     return new MediumRow(
         medium.id().toString(),
         medium.name(),
-        Typed.number(medium.toneHz()),
+        Numbers.onPage(Typed.number(medium.toneHz())),
         Typed.cell(medium.speedTolerancePercent()),
         Typed.cellOrNone(medium.ownFlutterPercent()));
   }

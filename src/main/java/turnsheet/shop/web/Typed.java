@@ -6,6 +6,8 @@ import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import org.jspecify.annotations.Nullable;
 import org.springframework.validation.Errors;
+import turnsheet.web.Numbers;
+import turnsheet.web.PlainText;
 import turnsheet.web.Shown;
 
 /**
@@ -20,9 +22,9 @@ public final class Typed {
 
   private Typed() {}
 
-  /** The text without spaces around it and with plain line ends; empty where nothing was sent. */
+  /** The text without spaces around it; see {@link PlainText#typed}. */
   public static String text(@Nullable String sent) {
-    return sent == null ? "" : sent.replace("\r\n", "\n").replace("\0", "").strip();
+    return PlainText.typed(sent);
   }
 
   /** As a number to edit again: every digit that matters, none besides. */
@@ -35,13 +37,16 @@ public final class Typed {
         .toPlainString();
   }
 
-  /** As a cell of a table, every digit that matters, cut at the point for the column. */
+  /**
+   * As a cell of a table, every digit that matters, with the decimal sign of the page at hand and
+   * cut there for the column.
+   */
   public static Shown cell(double value) {
     String digits = number(value).replace('-', '\u2212');
     int at = digits.indexOf('.');
     return new Shown(
         at < 0 ? digits : digits.substring(0, at),
-        at < 0 ? "" : digits.substring(at),
+        at < 0 ? "" : Numbers.onPage(digits.substring(at)),
         "",
         "",
         null);

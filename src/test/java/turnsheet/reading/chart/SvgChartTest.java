@@ -30,6 +30,18 @@ class SvgChartTest {
   }
 
   @Test
+  void aLongNameOfTheUprightAxisIsSetSmallerInTheMiddleRatherThanCut() {
+    Axis wordy = Axis.linear("A name of the upright axis of forty-seven letters", "%", -1, 1);
+    assertThat(wordy.title()).hasSize(52);
+    String svg = new SvgChart(SECONDS, wordy, 258, "Speed", "Nothing.").toSvg();
+
+    // 258 - 8 are there for 52 letters of 6.6 each: 12 * 250 / 343.2 = 8.7
+    assertThat(svg).contains("font-size=\"8.7\" transform=\"rotate(-90 14 129)\"");
+    assertThat(new SvgChart(SECONDS, PERCENT, 258, "Speed", "Nothing.").toSvg())
+        .contains("fill=\"currentColor\" transform=\"rotate(-90 14 112)\"");
+  }
+
+  @Test
   void bucketsAreDrawnFromLowestToHighest() {
     String svg =
         new SvgChart(SECONDS, PERCENT, 258, "Speed", "Two buckets.")

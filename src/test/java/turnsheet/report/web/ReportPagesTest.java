@@ -86,7 +86,7 @@ class ReportPagesTest {
         .contains("voices waver")
         .contains("230 V, warmed up")
         .contains("mains voltage")
-        .contains("conforms with more than 99 %")
+        .contains("conforms with more than 99\u00a0%")
         .contains("guard band")
         .contains("Inside the machine")
         .contains("End of report %05d".formatted(number))

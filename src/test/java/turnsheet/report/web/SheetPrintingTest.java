@@ -7,6 +7,7 @@ import org.apache.pdfbox.Loader;
 import org.apache.pdfbox.cos.COSName;
 import org.apache.pdfbox.pdmodel.PDDocument;
 import org.apache.pdfbox.rendering.PDFRenderer;
+import org.apache.pdfbox.text.PDFTextStripper;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -15,6 +16,8 @@ import org.springframework.beans.factory.annotation.Autowired;
 import org.springframework.context.MessageSource;
 import org.thymeleaf.ITemplateEngine;
 import org.verapdf.pdfa.flavours.PDFAFlavour;
+import turnsheet.report.Issue;
+import turnsheet.report.Report;
 import turnsheet.report.SampleReport;
 import turnsheet.testing.QrReader;
 import turnsheet.testing.ServiceTest;
@@ -73,6 +76,36 @@ class SheetPrintingTest {
           new PDFRenderer(document).renderImageWithDPI(document.getNumberOfPages() - 1, 150);
       assertThat(QrReader.read(lastPage))
           .isEqualTo("https://bench.example/check?code=0a1b2-c3d4e-5f607-18293");
+    }
+  }
+
+  @Test
+  void printsWhatWasEnteredWithAStrayControlCharacter() throws Exception {
+    Report sample = SampleReport.in("en");
+    Issue issue = sample.content().issue();
+    Issue odd =
+        new Issue(
+            issue.number(),
+            issue.issuedAt(),
+            issue.language(),
+            issue.paper(),
+            issue.measuredBy(),
+            issue.releasedBy(),
+            issue.conditions(),
+            "belt\u0001slack",
+            issue.revises(),
+            issue.reason());
+    byte[] pdf =
+        printing.pdf(
+            new Report(
+                sample.visitId(),
+                new Report.Content(odd, sample.content().sheet()),
+                sample.contentJson(),
+                sample.contentSha256(),
+                sample.checkCode(),
+                null));
+    try (PDDocument document = Loader.loadPDF(pdf)) {
+      assertThat(new PDFTextStripper().getText(document)).contains("beltslack");
     }
   }
 
