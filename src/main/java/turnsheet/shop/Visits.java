@@ -8,6 +8,7 @@ import java.time.Instant;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.function.Predicate;
 import java.util.function.UnaryOperator;
 import org.springframework.dao.DataIntegrityViolationException;
 import org.springframework.jdbc.core.simple.JdbcClient;
@@ -133,6 +134,24 @@ public final class Visits {
   /** Brings all notes of an open visit up to date. */
   public Optional<Visit> record(VisitId id, VisitNotes notes) {
     return change(id, visit -> visit.record(notes));
+  }
+
+  /**
+   * The same for notes that were written over those that somebody had before them.
+   *
+   * @param asSeen whether the notes that stand are still the ones that were seen
+   * @throws RefusedChangeException {@code notesChanged} where they are not: somebody else's work
+   *     would be lost
+   */
+  public Optional<Visit> record(VisitId id, VisitNotes notes, Predicate<Visit> asSeen) {
+    return change(
+        id,
+        visit -> {
+          if (visit.isOpen() && !asSeen.test(visit)) {
+            throw new RefusedChangeException("notesChanged");
+          }
+          return visit.record(notes);
+        });
   }
 
   /**

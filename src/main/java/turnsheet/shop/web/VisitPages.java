@@ -91,10 +91,18 @@ class VisitPages {
             : "redirect:/visits/" + id;
       } catch (RefusedChangeException e) {
         refusals.show(e, errors, null);
+        if (e.code().equals("notesChanged")) {
+          model.addAttribute("kept", VisitForm.of(visit(id).visit()));
+        }
       }
     }
     model.addAttribute("typed", true);
-    return editPage(visit(id), model);
+    String page = editPage(visit(id), model);
+    if (!model.containsAttribute("kept")) {
+      // what came meanwhile has not been shown yet
+      model.addAttribute("seen", form.seen());
+    }
+    return page;
   }
 
   /** Hands the unit back, or takes the visit up again, from the page of the visit itself. */
@@ -128,10 +136,10 @@ class VisitPages {
         visits.record(id, form.notes());
       }
       case "close" -> {
-        visits.record(id, form.notes());
+        visits.record(id, form.notes(), form::saw);
         visits.close(id);
       }
-      default -> visits.record(id, form.notes());
+      default -> visits.record(id, form.notes(), form::saw);
     }
   }
 
@@ -157,6 +165,7 @@ class VisitPages {
     model.addAttribute("opened", times.day(visit.visit().openedAt()));
     model.addAttribute("closed", closed(visit.visit()));
     model.addAttribute("open", visit.visit().isOpen());
+    model.addAttribute("seen", VisitForm.of(visit.visit()).seen());
     return EDIT_PAGE;
   }
 

@@ -3,6 +3,7 @@ package turnsheet.shop.web;
 import static org.assertj.core.api.Assertions.assertThat;
 
 import java.util.UUID;
+import java.util.regex.Pattern;
 import org.junit.jupiter.api.Test;
 import org.springframework.beans.factory.annotation.Autowired;
 import org.springframework.test.web.servlet.assertj.MockMvcTester;
@@ -305,6 +306,51 @@ class ShopPagesTest {
     browser.sendOn(
         visit + "/edit", "verb", "reopenAndSave", "complaint", "", "workDone", "belt and idler");
     assertThat(visits.find(id).orElseThrow().workDone()).isEqualTo("belt and idler");
+  }
+
+  @Test
+  void notesThatSomebodyElseChangedMeanwhileAreNotWrittenOver() throws Exception {
+    String unit =
+        browser.sendOn(
+            "/units/new",
+            "model",
+            idOf(model("Rowan transport", "")),
+            "serialNumber",
+            "R-9",
+            "customer",
+            "",
+            "customerName",
+            "Rowan Radio",
+            "newCustomer",
+            "yes",
+            "note",
+            "");
+    String visit = browser.sendOn(unit, "complaint", "");
+    VisitId id = new VisitId(UUID.fromString(visit.substring(visit.lastIndexOf('/') + 1)));
+    String mine = seen(visit);
+    browser.sendOn(visit + "/edit", "seen", seen(visit), "workDone", "capstan cleaned");
+
+    browser.sendBack(
+        visit + "/edit",
+        "capstan cleaned",
+        "belt renewed",
+        "seen",
+        mine,
+        "workDone",
+        "belt renewed");
+    assertThat(visits.find(id).orElseThrow().workDone()).isEqualTo("capstan cleaned");
+
+    browser.sendOn(
+        visit + "/edit", "seen", seen(visit), "workDone", "capstan cleaned, belt renewed");
+    assertThat(visits.find(id).orElseThrow().workDone()).isEqualTo("capstan cleaned, belt renewed");
+  }
+
+  /** What the form says of the notes that it was opened with. */
+  private String seen(String visit) throws Exception {
+    var field =
+        Pattern.compile("name=\"seen\" value=\"([^\"]+)\"").matcher(browser.read(visit + "/edit"));
+    assertThat(field.find()).isTrue();
+    return field.group(1);
   }
 
   @Test
