@@ -14,6 +14,7 @@ record KeptSeries(Map<String, byte[]> contents) {
 
   static final String FLUCTUATION_BLOCKS = "fluctuation-blocks";
   static final String INDICATION_BLOCKS = "indication-blocks";
+  static final String FLUCTUATION = "fluctuation";
 
   static KeptSeries of(Series series) {
     Map<String, byte[]> contents = new LinkedHashMap<>();
@@ -25,6 +26,7 @@ record KeptSeries(Map<String, byte[]> contents) {
     }
     contents.put(FLUCTUATION_BLOCKS, SeriesCodec.encode(series.blocks().fluctuation()));
     contents.put(INDICATION_BLOCKS, SeriesCodec.encode(series.blocks().indication()));
+    contents.put(FLUCTUATION, SeriesCodec.encode(series.fluctuation().get()));
     return new KeptSeries(contents);
   }
 }

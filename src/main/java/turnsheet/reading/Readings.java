@@ -19,6 +19,7 @@ import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.FigureName;
 import turnsheet.core.measure.Reading;
 import turnsheet.core.measure.Series;
+import turnsheet.core.signal.Fluctuation;
 import turnsheet.document.ReadingDocument;
 import turnsheet.reading.chart.Curve;
 import turnsheet.shop.VisitId;
@@ -157,6 +158,11 @@ public final class Readings {
                             new Series.Blocks(
                                 SeriesCodec.decodeBlocks(fluctuation),
                                 SeriesCodec.decodeBlocks(indication))));
+  }
+
+  /** The fluctuation itself; empty for readings of the time before it was kept. */
+  public Optional<Fluctuation> fluctuation(ReadingId id) {
+    return content(id, KeptSeries.FLUCTUATION).map(SeriesCodec::decodeFluctuation);
   }
 
   private ReadingId addOnce(CaptureId capture, Reading reading, KeptSeries series) {

@@ -2,6 +2,7 @@ package turnsheet.reading;
 
 import java.nio.ByteBuffer;
 import turnsheet.core.measure.Series;
+import turnsheet.core.signal.Fluctuation;
 import turnsheet.core.stats.MagnitudeBlocks;
 import turnsheet.reading.chart.Curve;
 
@@ -12,7 +13,8 @@ import turnsheet.reading.chart.Curve;
  * then single precision values, all low ones and, where points are buckets, all high ones. A
  * histogram: layout number (int), start and width (double), classes (int), then counts (long).
  * Blocks: layout number, first class, blocks, classes (int), then each block's mean square (double)
- * and counts (int). Big endian.
+ * and counts (int). A fluctuation: layout number, start, rate and step (double), samples (int),
+ * then steps (short). Big endian.
  */
 final class SeriesCodec {
 
@@ -22,6 +24,7 @@ final class SeriesCodec {
   private static final int CURVE = 1;
   private static final int HISTOGRAM = 2;
   private static final int BLOCKS = 3;
+  private static final int FLUCTUATION = 4;
   private static final int CURVE_HEADER_BYTES = 4 + 8 + 8 + 4 + 4;
   private static final int HISTOGRAM_HEADER_BYTES = 4 + 8 + 8 + 4;
 
@@ -108,6 +111,32 @@ final class SeriesCodec {
       }
     }
     return new MagnitudeBlocks(firstClass, counts, meanSquares);
+  }
+
+  static byte[] encode(Fluctuation fluctuation) {
+    ByteBuffer out =
+        ByteBuffer.allocate(
+                2 * Integer.BYTES + 3 * Double.BYTES + fluctuation.length() * Short.BYTES)
+            .putInt(FLUCTUATION)
+            .putDouble(fluctuation.startSeconds())
+            .putDouble(fluctuation.rateHertz())
+            .putDouble(fluctuation.stepPercent())
+            .putInt(fluctuation.length());
+    for (int i = 0; i < fluctuation.length(); i++) {
+      out.putShort(fluctuation.steps(i));
+    }
+    return out.array();
+  }
+
+  static Fluctuation decodeFluctuation(byte[] content) {
+    ByteBuffer in = ByteBuffer.wrap(content);
+    requireLayout(FLUCTUATION, in.getInt());
+    double start = in.getDouble();
+    double rate = in.getDouble();
+    double step = in.getDouble();
+    short[] steps = new short[in.getInt()];
+    in.asShortBuffer().get(steps);
+    return Fluctuation.ofSteps(start, rate, step, steps);
   }
 
   private static float[] floats(ByteBuffer in, int count) {

@@ -5,6 +5,7 @@ import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.MeasureSettings;
 import turnsheet.core.measure.Reading;
 import turnsheet.core.measure.Series;
+import turnsheet.core.signal.Fluctuation;
 import turnsheet.core.signal.SpeedTrace;
 import turnsheet.core.signal.Warning;
 import turnsheet.core.stats.Budget;
@@ -103,6 +104,16 @@ public final class SampleReadings {
         SpeedTrace.of(0, 500, speed),
         new Series.Spectrum(0.25, peaks),
         new Series.Histogram(300, 0.5, new long[] {1, 5, 2}),
-        blocks());
+        blocks(),
+        SampleReadings::fluctuation);
+  }
+
+  /** A minute of 9.98 Hz at 0.05 %. */
+  public static Fluctuation fluctuation() {
+    double[] percent = new double[60 * 500];
+    for (int i = 0; i < percent.length; i++) {
+      percent[i] = 0.05 * Math.sin(2 * Math.PI * 9.98 * i / 500);
+    }
+    return Fluctuation.of(0, 500, percent);
   }
 }

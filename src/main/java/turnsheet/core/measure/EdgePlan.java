@@ -101,7 +101,12 @@ final class EdgePlan {
             warnings);
     return new Outcome.Measured(
         reading,
-        new Series(trace, figures.spectrum(), histogram(scan.histogram), figures.blocks()));
+        new Series(
+            trace,
+            figures.spectrum(),
+            histogram(scan.histogram),
+            figures.blocks(),
+            figures::fluctuation));
   }
 
   private void requireSteady(EdgeScan scan, EdgeProbe probe) throws RejectedException {

@@ -1,6 +1,8 @@
 package turnsheet.core.measure;
 
+import java.util.function.Supplier;
 import org.jspecify.annotations.Nullable;
+import turnsheet.core.signal.Fluctuation;
 import turnsheet.core.signal.SpeedTrace;
 import turnsheet.core.stats.MagnitudeBlocks;
 
@@ -11,9 +13,15 @@ import turnsheet.core.stats.MagnitudeBlocks;
  * @param spectrum of the speed, relative to the mean
  * @param histogram of the periods; null for a tone
  * @param blocks of the weighted fluctuation
+ * @param fluctuation up to 200 Hz, of the first hour at most; made when asked for, as only some ask
+ *     and it takes memory of its own
  */
 public record Series(
-    SpeedTrace trace, Spectrum spectrum, @Nullable Histogram histogram, Blocks blocks) {
+    SpeedTrace trace,
+    Spectrum spectrum,
+    @Nullable Histogram histogram,
+    Blocks blocks,
+    Supplier<Fluctuation> fluctuation) {
 
   /**
    * The weighted fluctuation of a capture in blocks of 2.5 s or more.

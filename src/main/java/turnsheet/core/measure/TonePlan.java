@@ -70,7 +70,8 @@ final class TonePlan {
             result.signal,
             result.warnings);
     return new Outcome.Measured(
-        reading, new Series(result.trace, figures.spectrum(), null, figures.blocks()));
+        reading,
+        new Series(result.trace, figures.spectrum(), null, figures.blocks(), figures::fluctuation));
   }
 
   Result measure(Recording recording) throws IOException, RejectedException {

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import turnsheet.core.dsp.Window;
+import turnsheet.core.signal.Fluctuation;
 import turnsheet.core.signal.SpeedTrace;
 import turnsheet.core.signal.Warning;
 import turnsheet.core.stats.Budget;
@@ -268,6 +269,11 @@ final class TraceFigures {
   /** The weighted fluctuation and the indicator's readings in blocks. */
   Series.Blocks blocks() {
     return new Series.Blocks(weighted.fluctuation(), weighted.indication());
+  }
+
+  /** The fluctuation itself, as far as it is shown. */
+  Fluctuation fluctuation() {
+    return FluctuationSeries.of(residual);
   }
 
   /** What the noise of the recording alone would show as unweighted figure. */
