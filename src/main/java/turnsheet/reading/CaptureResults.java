@@ -2,7 +2,9 @@ package turnsheet.reading;
 
 import java.sql.ResultSet;
 import java.sql.SQLException;
+import java.time.Instant;
 import java.time.OffsetDateTime;
+import java.time.ZoneOffset;
 import java.util.EnumMap;
 import java.util.HashMap;
 import java.util.List;
@@ -30,7 +32,7 @@ public final class CaptureResults {
 
   private static final String OF_VISIT = "c.visit_id = ?";
   private static final String OF_UNIT = "v.unit_id = ?";
-  private static final String ON_THE_BENCH = "v.closed_at is null";
+  private static final String ON_THE_BENCH = "(v.closed_at is null or v.closed_at >= ?)";
 
   private static final String READING_OF_CAPTURE =
       "left join reading r on r.capture_id = c.id and c.state = 'measured' and "
@@ -52,21 +54,26 @@ public final class CaptureResults {
     return where(OF_UNIT, List.of(unit.value()));
   }
 
-  /** The captures of all open visits in the order of their arrival. */
-  public List<CaptureResult> onTheBench() {
-    return where(ON_THE_BENCH, List.of());
+  /**
+   * The captures of all visits that are open, or were until this instant or later, in the order of
+   * their arrival.
+   */
+  public List<CaptureResult> onTheBench(Instant since) {
+    return where(ON_THE_BENCH, List.of(since.atOffset(ZoneOffset.UTC)));
   }
 
-  /** The limits of the speed settings that open visits have captures at, in one statement. */
-  public Map<SpeedSettingId, List<ServiceLimit>> limitsOnTheBench() {
+  /** The limits of the speed settings that those visits have captures at, in one statement. */
+  public Map<SpeedSettingId, List<ServiceLimit>> limitsOnTheBench(Instant since) {
     return jdbc
         .sql(
             """
             select l.speed_setting_id, l.figure, l.upper_bound, l.origin from service_limit l
             where l.speed_setting_id in (select c.speed_setting_id
-              from capture c join visit v on v.id = c.visit_id where v.closed_at is null)
+              from capture c join visit v on v.id = c.visit_id where %s)
             order by l.figure
-            """)
+            """
+                .formatted(ON_THE_BENCH))
+        .param(since.atOffset(ZoneOffset.UTC))
         .query(CaptureResults::limit)
         .list()
         .stream()
@@ -74,7 +81,7 @@ public final class CaptureResults {
         .collect(Collectors.groupingBy(ServiceLimit::settingId));
   }
 
-  private List<CaptureResult> where(String condition, List<UUID> params) {
+  private List<CaptureResult> where(String condition, List<?> params) {
     List<CaptureResult> plain =
         jdbc.sql(
                 """
@@ -95,7 +102,7 @@ public final class CaptureResults {
         .toList();
   }
 
-  private Map<UUID, Map<FigureName, Figure>> figures(String condition, List<UUID> params) {
+  private Map<UUID, Map<FigureName, Figure>> figures(String condition, List<?> params) {
     Map<UUID, Map<FigureName, Figure>> found = new HashMap<>();
     jdbc.sql(
             """

@@ -37,6 +37,11 @@ final class Columns {
     return row.wasNull() ? null : value;
   }
 
+  static @Nullable Long longOrNull(ResultSet row, String column) throws SQLException {
+    long value = row.getLong(column);
+    return row.wasNull() ? null : value;
+  }
+
   static OffsetDateTime time(Instant instant) {
     return instant.atOffset(ZoneOffset.UTC);
   }

@@ -23,7 +23,9 @@ public final class Visits {
       new PageQuery.Listing(
           """
           select v.*, u.serial_number, u.model_id, m.name as model_name, u.customer_id,
-            c.name as customer_name
+            c.name as customer_name,
+            (select max(r.number) from report r where r.visit_id = v.id) as report,
+            (select max(r.issued_at) from report r where r.visit_id = v.id) as reported_at
           """,
           """
           from visit v join unit u on u.id = v.unit_id join machine_model m on m.id = u.model_id
@@ -92,6 +94,16 @@ public final class Visits {
   /** A page of the visits that are still open, newest first. */
   public PageOf<VisitSummary> open(PageQuery query) {
     return whole(query.run(jdbc, LISTING.where("v.closed_at is null"), Visits::summary));
+  }
+
+  /** A page of the visits that are open, or were until this instant or later; newest first. */
+  public PageOf<VisitSummary> openSince(Instant instant, PageQuery query) {
+    return whole(
+        query.run(
+            jdbc,
+            LISTING.where(
+                "(v.closed_at is null or v.closed_at >= ?)", Columns.time(Columns.kept(instant))),
+            Visits::summary));
   }
 
   /**
@@ -266,7 +278,9 @@ public final class Visits {
         new ModelId(Columns.uuid(row, "model_id")),
         row.getString("model_name"),
         new CustomerId(Columns.uuid(row, "customer_id")),
-        row.getString("customer_name"));
+        row.getString("customer_name"),
+        Columns.longOrNull(row, "report"),
+        Columns.instantOrNull(row, "reported_at"));
   }
 
   private static Visit visit(ResultSet row, int number) throws SQLException {

@@ -4,6 +4,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.tuple;
 
 import java.time.Clock;
+import java.time.Instant;
 import java.util.List;
 import java.util.Map;
 import org.junit.jupiter.api.Test;
@@ -27,6 +28,8 @@ class ReadingsTest {
   private final CaptureResults results;
   private final CapturePlaces places;
   private final CaptureChannels channels;
+  private static final Instant LATER = Instant.parse("2100-01-01T00:00:00Z");
+
   private final JdbcClient jdbc;
   private final SampleBench bench;
 
@@ -117,7 +120,21 @@ class ReadingsTest {
         .extracting(CaptureResult::refusal)
         .containsExactly("The file is silent: record it again.");
     assertThat(results.ofUnit(bench.unit.id())).isEqualTo(found);
-    assertThat(results.onTheBench()).isEqualTo(found);
+    assertThat(results.onTheBench(LATER)).isEqualTo(found);
+  }
+
+  @Test
+  void whatWasHandedBackSinceIsStillOnTheBench() {
+    CaptureId capture = bench.capture("as received", "measured");
+    readings.add(capture, SampleReadings.tone(0.37), SampleReadings.series());
+    Instant gone = Instant.parse("2026-03-02T12:00:00Z");
+    jdbc.sql("update visit set closed_at = ? where id = ?")
+        .params(gone.atOffset(java.time.ZoneOffset.UTC), bench.visit.id().value())
+        .update();
+    assertThat(results.onTheBench(gone))
+        .extracting(r -> r.figure(FigureName.DEVIATION).value())
+        .containsExactly(0.37);
+    assertThat(results.onTheBench(gone.plusSeconds(1))).isEmpty();
   }
 
   @Test
@@ -127,8 +144,8 @@ class ReadingsTest {
 
     List<Judged> judged =
         Judged.all(
-            results.limitsOnTheBench().getOrDefault(bench.setting, List.of()),
-            results.onTheBench().get(0)::figure,
+            results.limitsOnTheBench(LATER).getOrDefault(bench.setting, List.of()),
+            results.onTheBench(LATER).get(0)::figure,
             DecisionRule.GUARDED);
 
     // 0.37 keeps 0.5; 0.067 with U = 0.002 breaks 0.06
@@ -158,7 +175,7 @@ class ReadingsTest {
 
     assertThat(readings.newestOf(capture)).map(StoredReading::id).hasValue(left);
     assertThat(readings.ofVisit(bench.visit.id())).hasSize(1);
-    assertThat(results.onTheBench())
+    assertThat(results.onTheBench(LATER))
         .singleElement()
         .satisfies(r -> assertThat(r.readingId()).isEqualTo(left))
         .satisfies(r -> assertThat(r.figure(FigureName.DEVIATION).value()).isEqualTo(0.37));
@@ -172,7 +189,7 @@ class ReadingsTest {
     jdbc.sql("update capture set main_channel = 2").update();
 
     assertThat(readings.newestOf(capture)).map(StoredReading::id).hasValue(right);
-    assertThat(results.onTheBench().get(0).readingId()).isEqualTo(right);
+    assertThat(results.onTheBench(LATER).get(0).readingId()).isEqualTo(right);
     assertThat(readings.versionsOf(capture).get(0).id()).isEqualTo(right);
   }
 

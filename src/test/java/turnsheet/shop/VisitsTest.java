@@ -5,6 +5,7 @@ import static org.assertj.core.api.Assertions.assertThatThrownBy;
 
 import java.time.Clock;
 import java.time.Duration;
+import java.time.Instant;
 import java.util.List;
 import java.util.concurrent.Callable;
 import java.util.concurrent.ExecutorService;
@@ -177,7 +178,13 @@ class VisitsTest {
                 here.modelId(),
                 "Transport for 1001",
                 here.customerId(),
-                "Owner of 1001"));
+                "Owner of 1001",
+                null,
+                null));
+    assertThat(visits.openSince(open.openedAt(), PageQuery.first(9)).total()).isEqualTo(2);
+    assertThat(visits.openSince(Instant.parse("2100-01-01T00:00:00Z"), PageQuery.first(9)).items())
+        .extracting(VisitSummary::serialNumber)
+        .containsExactly("1001");
     assertThat(visits.page(PageQuery.first(10)).total()).isEqualTo(2);
     assertThat(visits.summary(gone.id())).map(VisitSummary::serialNumber).contains("1002");
   }

@@ -14,23 +14,33 @@ import turnsheet.web.Wording;
 
 /** Sorts what is on the bench by what it needs. */
 final class Bench {
+  private final List<VisitSummary> all;
   private final List<VisitSummary> stays;
   private final Map<VisitId, List<CaptureResult>> byVisit;
   private final Standing standing;
   private final Wording words;
   private final Times times;
 
+  /**
+   * @param all the open visits, and those that were closed since what {@link #measuredSince} asks
+   */
   Bench(
-      List<VisitSummary> stays,
+      List<VisitSummary> all,
       Map<VisitId, List<CaptureResult>> byVisit,
       Standing standing,
       Wording words,
       Times times) {
-    this.stays = stays;
+    this.all = all;
+    this.stays = all.stream().filter(stay -> stay.visit().isOpen()).toList();
     this.byVisit = byVisit;
     this.standing = standing;
     this.words = words;
     this.times = times;
+  }
+
+  /** How many visits are open. */
+  int open() {
+    return stays.size();
   }
 
   List<BenchPage.Recording> recordings(CaptureState... states) {
@@ -53,9 +63,9 @@ final class Bench {
     return stays.stream().filter(s -> isOutside(captures(s))).map(this::stay).toList();
   }
 
-  /** What was measured since an instant, the last first. */
+  /** What was measured since an instant, the last first; also where the unit has left since. */
   List<BenchPage.Recording> measuredSince(Instant start) {
-    return stays.stream()
+    return all.stream()
         .flatMap(stay -> captures(stay).stream().map(c -> new Measured(stay, c)))
         .filter(m -> !m.at().isBefore(start))
         .sorted(Comparator.comparing(Measured::at).reversed())
@@ -71,7 +81,7 @@ final class Bench {
   }
 
   private NextStep next(VisitSummary stay) {
-    return NextStep.of(stay.visit(), captures(stay), standing);
+    return NextStep.of(stay, captures(stay), standing);
   }
 
   private boolean isOutside(List<CaptureResult> captures) {
@@ -102,7 +112,7 @@ final class Bench {
         stay.visit().complaint(),
         captures.size(),
         words.text("reading.next." + next(stay).word()),
-        next(stay).hrefOn(stay.visit().id().toString()),
+        next(stay).hrefOn(stay),
         Standing.latest(captures).stream()
             .map(
                 c ->

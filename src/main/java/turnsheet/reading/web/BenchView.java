@@ -1,6 +1,7 @@
 package turnsheet.reading.web;
 
 import java.time.Clock;
+import java.time.Instant;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
@@ -53,16 +54,17 @@ class BenchView {
 
   BenchPage page(Locale locale) {
     Wording words = new Wording(messages, locale);
-    List<VisitSummary> stays = visits.open(PageQuery.first(PageOf.LARGEST)).items();
+    Instant today = times.startOfDay(clock.instant());
+    List<VisitSummary> stays = visits.openSince(today, PageQuery.first(PageOf.LARGEST)).items();
     Map<VisitId, List<CaptureResult>> byVisit =
-        results.onTheBench().stream().collect(Collectors.groupingBy(CaptureResult::visitId));
-    Standing standing = new Standing(results.limitsOnTheBench(), rules.get().rule());
+        results.onTheBench(today).stream().collect(Collectors.groupingBy(CaptureResult::visitId));
+    Standing standing = new Standing(results.limitsOnTheBench(today), rules.get().rule());
     Bench bench = new Bench(stays, byVisit, standing, words, times);
     List<BenchPage.Recording> waiting = bench.recordings(CaptureState.RECOGNISED);
     List<BenchPage.Recording> measuring = bench.recordings(CaptureState.QUEUED);
     List<BenchPage.Recording> refused = bench.recordings(CaptureState.REFUSED, CaptureState.FAILED);
     List<BenchPage.Stay> outside = bench.outside();
-    List<BenchPage.Stay> ready = bench.stays(NextStep.READY);
+    List<BenchPage.Stay> ready = bench.stays(NextStep.REPORT, NextStep.REVISE, NextStep.READY);
     Set<String> elsewhere =
         Stream.concat(outside.stream(), ready.stream())
             .map(BenchPage.Stay::visitId)
@@ -77,7 +79,7 @@ class BenchView {
     return new BenchPage(
         words.text(
             "reading.bench.summary",
-            Integer.toString(stays.size()),
+            Integer.toString(bench.open()),
             Integer.toString(waiting.size()),
             Integer.toString(measuring.size()),
             Integer.toString(refused.size()),
@@ -91,8 +93,8 @@ class BenchView {
         ready,
         arrived,
         working,
-        bench.measuredSince(times.startOfDay(clock.instant())),
-        stays.isEmpty());
+        bench.measuredSince(today),
+        bench.open() == 0);
   }
 
   private BenchPage.Start start() {

@@ -1,13 +1,16 @@
 package turnsheet.reading.web;
 
+import java.time.Instant;
 import java.util.Collection;
 import java.util.List;
 import java.util.Locale;
+import org.jspecify.annotations.Nullable;
 import turnsheet.capture.CaptureKey;
 import turnsheet.capture.CaptureState;
 import turnsheet.core.diagnose.Verdict;
 import turnsheet.reading.CaptureResult;
 import turnsheet.shop.Visit;
+import turnsheet.shop.VisitSummary;
 
 /** What a visit waits for; its texts stand under {@code reading.next.<word>}. */
 enum NextStep {
@@ -23,8 +26,12 @@ enum NextStep {
   AGAIN("#bring"),
   /** after the work something is still outside a limit */
   OUTSIDE("/edit"),
-  /** measured after the work, and nothing is outside */
-  READY("#standing"),
+  /** measured after the work, nothing is outside, and no report tells of it */
+  REPORT("/report"),
+  /** something was measured after the report was issued */
+  REVISE("/revise"),
+  /** reported: the customer's link, then the unit itself */
+  READY("/links"),
   /** it was handed back */
   CLOSED("");
 
@@ -39,7 +46,8 @@ enum NextStep {
    *
    * @param captures of the visit, in the order of their arrival
    */
-  static NextStep of(Visit visit, List<CaptureResult> captures, Standing standing) {
+  static NextStep of(VisitSummary summary, List<CaptureResult> captures, Standing standing) {
+    Visit visit = summary.visit();
     if (!visit.isOpen()) {
       return CLOSED;
     }
@@ -57,15 +65,33 @@ enum NextStep {
     if (before) {
       return visit.notes().isWorkNoted() ? AGAIN : WORK;
     }
-    return latest.stream().anyMatch(c -> standing.worst(c) == Verdict.OUTSIDE) ? OUTSIDE : READY;
+    if (latest.stream().anyMatch(c -> standing.worst(c) == Verdict.OUTSIDE)) {
+      return OUTSIDE;
+    }
+    return told(summary.reportedAt(), latest);
+  }
+
+  private static NextStep told(@Nullable Instant reportedAt, Collection<CaptureResult> latest) {
+    if (reportedAt == null) {
+      return REPORT;
+    }
+    boolean since =
+        latest.stream()
+            .map(CaptureResult::measuredAt)
+            .anyMatch(at -> at != null && at.isAfter(reportedAt));
+    return since ? REVISE : READY;
   }
 
   String word() {
     return name().toLowerCase(Locale.ROOT);
   }
 
-  /** Where it is done, as an address that begins with the visit's own; empty where nothing is. */
-  String hrefOn(String visitId) {
-    return place.isEmpty() ? "" : "/visits/" + visitId + place;
+  /** Where it is done: an address of the visit or of its report; empty where nothing is. */
+  String hrefOn(VisitSummary visit) {
+    return switch (this) {
+      case CLOSED -> "";
+      case REVISE, READY -> "/reports/" + visit.report() + place;
+      default -> "/visits/" + visit.visit().id() + place;
+    };
   }
 }

@@ -74,7 +74,7 @@ class VisitView {
     Standing standing = new Standing(limits(List.of(model)), rules.get().rule());
     List<VisitPage.Row> rows =
         model.settings().stream().map(s -> row(s, conditions, all, standing, words)).toList();
-    NextStep next = NextStep.of(visit, all, standing);
+    NextStep next = NextStep.of(summary, all, standing);
     String unitName = summary.modelName() + " " + summary.serialNumber();
     return new VisitPage(
         visit.id().toString(),
@@ -94,7 +94,7 @@ class VisitView {
         rows,
         isMeasured(all),
         words.text("reading.next." + next.word()),
-        next.hrefOn(visit.id().toString()),
+        next.hrefOn(summary),
         photos.of(visit.id()).isPresent(),
         Intake.usualCondition(visit),
         incoming.of(visit.id(), words));

@@ -14,13 +14,16 @@ import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.FigureName;
 import turnsheet.reading.CaptureResult;
 import turnsheet.reading.ReadingId;
+import turnsheet.shop.CustomerId;
 import turnsheet.shop.FittedPart;
+import turnsheet.shop.ModelId;
 import turnsheet.shop.ServiceLimit;
 import turnsheet.shop.SpeedSettingId;
 import turnsheet.shop.UnitId;
 import turnsheet.shop.Visit;
 import turnsheet.shop.VisitId;
 import turnsheet.shop.VisitNotes;
+import turnsheet.shop.VisitSummary;
 
 class NextStepTest {
 
@@ -28,8 +31,8 @@ class NextStepTest {
   private static final SpeedSettingId SLOW = SpeedSettingId.next();
   private static final SpeedSettingId FAST = SpeedSettingId.next();
 
-  private final Visit untouched = visit(VisitNotes.complaint("hums"), null);
-  private final Visit worked =
+  private final VisitSummary untouched = visit(VisitNotes.complaint("hums"), null);
+  private final VisitSummary worked =
       visit(new VisitNotes("", "", List.of(new FittedPart("belt", 1)), false, ""), null);
 
   @Test
@@ -42,8 +45,10 @@ class NextStepTest {
     assertThat(step(untouched, in(CaptureState.REFUSED))).isEqualTo(NextStep.RECORD);
     assertThat(step(untouched, before)).isEqualTo(NextStep.WORK);
     assertThat(step(worked, before)).isEqualTo(NextStep.AGAIN);
-    assertThat(step(worked, before, after)).isEqualTo(NextStep.READY);
-    assertThat(step(visit(worked.notes(), DAY), before, after)).isEqualTo(NextStep.CLOSED);
+    assertThat(step(worked, before, after)).isEqualTo(NextStep.REPORT);
+    assertThat(step(reported(DAY.minusSeconds(1)), before, after)).isEqualTo(NextStep.REVISE);
+    assertThat(step(reported(DAY.plusSeconds(1)), before, after)).isEqualTo(NextStep.READY);
+    assertThat(step(visit(worked.visit().notes(), DAY), before, after)).isEqualTo(NextStep.CLOSED);
   }
 
   @Test
@@ -52,32 +57,49 @@ class NextStepTest {
     CaptureResult fast = measured(FAST, "as received", 0.03);
     assertThat(step(worked, slow, fast)).isEqualTo(NextStep.AGAIN);
     assertThat(step(worked, fast, slow, measured(FAST, "after repair", 0.03)))
-        .isEqualTo(NextStep.READY);
+        .isEqualTo(NextStep.REPORT);
   }
 
   @Test
   void whatIsStillOutsideIsNotReady() {
     CaptureResult bad = measured(SLOW, "after repair", 0.09);
     assertThat(step(worked, bad)).isEqualTo(NextStep.OUTSIDE);
-    assertThat(step(worked, bad, measured(SLOW, "after repair", 0.03))).isEqualTo(NextStep.READY);
+    assertThat(step(worked, bad, measured(SLOW, "after repair", 0.03))).isEqualTo(NextStep.REPORT);
   }
 
   @Test
   void eachStepButTheLastIsDoneSomewhere() {
     for (NextStep step : NextStep.values()) {
-      assertThat(step.hrefOn("id").isEmpty()).isEqualTo(step == NextStep.CLOSED);
+      assertThat(step.hrefOn(worked).isEmpty()).isEqualTo(step == NextStep.CLOSED);
     }
+    assertThat(NextStep.READY.hrefOn(reported(DAY))).isEqualTo("/reports/7/links");
   }
 
-  private static NextStep step(Visit visit, CaptureResult... captures) {
+  private static NextStep step(VisitSummary visit, CaptureResult... captures) {
     ServiceLimit limit =
         new ServiceLimit(SLOW, FigureName.WEIGHTED_TWO_SIGMA, 0.06, "invented manual");
     Standing standing = new Standing(Map.of(SLOW, List.of(limit)), DecisionRule.SIMPLE);
     return NextStep.of(visit, List.of(captures), standing);
   }
 
-  private static Visit visit(VisitNotes notes, @Nullable Instant closedAt) {
-    return new Visit(VisitId.next(), UnitId.next(), DAY, closedAt, notes);
+  private static VisitSummary visit(VisitNotes notes, @Nullable Instant closedAt) {
+    return summary(new Visit(VisitId.next(), UnitId.next(), DAY, closedAt, notes), null);
+  }
+
+  private VisitSummary reported(Instant at) {
+    return summary(worked.visit(), at);
+  }
+
+  private static VisitSummary summary(Visit visit, @Nullable Instant reportedAt) {
+    return new VisitSummary(
+        visit,
+        "0042",
+        ModelId.next(),
+        "Invented transport",
+        CustomerId.next(),
+        "A. Customer",
+        reportedAt == null ? null : 7L,
+        reportedAt);
   }
 
   private static CaptureResult measured(SpeedSettingId setting, String condition, double flutter) {
