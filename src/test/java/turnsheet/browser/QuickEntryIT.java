@@ -3,6 +3,7 @@ package turnsheet.browser;
 import static org.assertj.core.api.Assertions.assertThat;
 
 import java.io.ByteArrayInputStream;
+import java.nio.file.Files;
 import java.nio.file.Path;
 import java.time.Duration;
 import java.util.ArrayList;
@@ -22,7 +23,10 @@ import org.openqa.selenium.WebElement;
 import turnsheet.jar.RunningService;
 import turnsheet.testing.QrReader;
 
-/** A unit comes in: its label is scanned, three recordings are dropped, one key measures them. */
+/**
+ * A unit comes in: its label is scanned, three recordings are dropped, one key measures them. Then
+ * its books move to another service.
+ */
 @TestInstance(TestInstance.Lifecycle.PER_CLASS)
 class QuickEntryIT {
 
@@ -33,6 +37,8 @@ class QuickEntryIT {
   private static final String PASSWORD = "a long road home 47";
 
   private RunningService service;
+  private RunningService other;
+  private Path folder;
   private Visitor visitor;
   private Hand hand;
   private Audit audit;
@@ -42,7 +48,9 @@ class QuickEntryIT {
 
   @BeforeAll
   void start(@TempDir Path folder) throws Exception {
-    service = RunningService.start("serve", folder);
+    this.folder = folder;
+    service = RunningService.start("serve", folder.resolve("one"));
+    other = RunningService.start("serve", folder.resolve("other"));
     visitor = new Visitor(1280, 900);
     hand = new Hand(visitor);
     audit = new Audit(visitor);
@@ -52,6 +60,7 @@ class QuickEntryIT {
   void stop() {
     visitor.close();
     service.close();
+    other.close();
   }
 
   @Test
@@ -62,21 +71,15 @@ class QuickEntryIT {
     threeFilesFindTheirSpeeds();
     oneKeyMeasuresThemAll();
     theBenchShowsWhatWasMeasuredToday();
-    wrong.addAll(visitor.complaints());
+    labelsPrintInTheirSize();
+    theBooksOfTheUnitMoveToAnotherService();
+    // the browser reports the status of the files that are meant to be refused
+    visitor.complaints().stream().filter(c -> !c.contains("status of 422")).forEach(wrong::add);
     assertThat(wrong).as(String.join("\n", wrong)).isEmpty();
   }
 
   private void aUnitWithThreeSpeedsIsKnown() throws Exception {
-    visitor.open(
-        service.printed(
-            Pattern.compile("Set up the owner's account: (\\S+)"), Duration.ofMinutes(3)));
-    visitor.fill("name", "bench");
-    visitor.fill("displayName", "Bench Owner");
-    visitor.fill("password", PASSWORD);
-    visitor.fill("again", PASSWORD);
-    visitor.fill("shopName", "Level Turn Bench");
-    visitor.pressButton("Set up and sign in");
-
+    setUp(service, "Level Turn Bench");
     visitor.open(service.address("/models/new"));
     visitor.fill("name", "Invented three-speed transport");
     visitor.press(visitor.find("form.sheet button"));
@@ -151,6 +154,86 @@ class QuickEntryIT {
     assertThat(visitor.find("[aria-labelledby=working]").getText())
         .contains("Do the work and note it");
     wrong.addAll(audit.of("/, measured today", 200));
+  }
+
+  private void labelsPrintInTheirSize() throws Exception {
+    PrintedLabels printed = new PrintedLabels(visitor, code);
+    visitor.open(unit + "/label");
+    printed.alone("T-2");
+    // ISO 216 A4 and ANSI A "Letter" in millimetres
+    visitor.open(service.address("/units/labels"));
+    printed.sheet(210, 297);
+    visitor.open(service.address("/shop/preferences"));
+    visitor.choose("paper", "LETTER");
+    visitor.press(visitor.find("form.sheet button"));
+    visitor.open(service.address("/units/labels"));
+    printed.sheet(215.9, 279.4);
+  }
+
+  private void theBooksOfTheUnitMoveToAnotherService() throws Exception {
+    visitor.open(unit);
+    visitor.press(visitor.find("main .actions a[href*='/export']"));
+    visitor.protocol(
+        "Browser.setDownloadBehavior",
+        Map.of("behavior", "allow", "downloadPath", folder.toString()));
+    visitor.find("dl.facts a[href*='/export.json']").click();
+    String id = unit.substring(unit.lastIndexOf('/') + 1);
+    Path books = folder.resolve("turnsheet-" + id + ".json");
+    // the browser gives the file its name once it is whole
+    visitor.awaitTrue(() -> Files.exists(books));
+    Path torn = folder.resolve("torn.json");
+    String whole = Files.readString(books);
+    Files.writeString(torn, whole.substring(0, whole.indexOf("\"readings\"") + 500));
+
+    visitor.forgetSession(); // a browser keeps one session for all ports of a host
+    setUp(other, "Second Bench");
+    visitor.open(other.address("/shop"));
+    visitor.press(visitor.find("main a[href='/export']"));
+    bring(SAMPLES.resolve("renamed-zip.wav"));
+    assertThat(visitor.find("[role=alert]").getText())
+        .contains("This is no export of this service")
+        .contains("Nothing of the file was taken in");
+    wrong.addAll(audit.of("/import, refused", 422));
+    bring(torn);
+    assertThat(visitor.find("[role=alert]").getText())
+        .contains("breaks off")
+        .contains("Nothing of the file was taken in");
+    visitor.open(other.address("/units"));
+    assertThat(visitor.all("main .empty")).hasSize(1);
+    visitor.open(other.address("/models"));
+    assertThat(visitor.all("main .empty")).hasSize(1);
+
+    visitor.open(other.address("/import"));
+    bring(books);
+    assertThat(visitor.find("[role=status]").getText()).contains("Everything in");
+    visitor.open(other.address("/units/" + id));
+    assertThat(visitor.find(".unit-code").getText()).isEqualTo(code);
+    visitor.press(visitor.find("main a[href*='/visits/']"));
+    assertThat(visitor.find("table.even").getText()).contains("+0.37", "\u22120.21", "+0.51");
+    bring(other.address("/import"), torn);
+    visitor.open(other.address("/units/" + id));
+    assertThat(visitor.find(".unit-code").getText()).isEqualTo(code);
+  }
+
+  private void bring(String page, Path file) {
+    visitor.open(page);
+    bring(file);
+  }
+
+  private void bring(Path file) {
+    visitor.find("input[name=file]").sendKeys(file.toString());
+    visitor.pressButton("Import");
+  }
+
+  private void setUp(RunningService one, String shop) throws InterruptedException {
+    visitor.open(
+        one.printed(Pattern.compile("Set up the owner's account: (\\S+)"), Duration.ofMinutes(3)));
+    visitor.fill("name", "bench");
+    visitor.fill("displayName", "Bench Owner");
+    visitor.fill("password", PASSWORD);
+    visitor.fill("again", PASSWORD);
+    visitor.fill("shopName", shop);
+    visitor.pressButton("Set up and sign in");
   }
 
   private void setting(String label, String speed, String pulses) {

@@ -4,8 +4,11 @@ import com.google.zxing.BinaryBitmap;
 import com.google.zxing.DecodeHintType;
 import com.google.zxing.NotFoundException;
 import com.google.zxing.RGBLuminanceSource;
+import com.google.zxing.Result;
+import com.google.zxing.ResultPoint;
 import com.google.zxing.common.HybridBinarizer;
 import com.google.zxing.qrcode.QRCodeReader;
+import com.google.zxing.qrcode.detector.FinderPattern;
 import java.awt.image.BufferedImage;
 import java.util.Map;
 import java.util.regex.Matcher;
@@ -34,18 +37,51 @@ public final class QrReader {
 
   /** What the one code in a picture says. */
   public static String read(BufferedImage image) throws Exception {
-    int[] pixels =
-        image.getRGB(0, 0, image.getWidth(), image.getHeight(), null, 0, image.getWidth());
-    var source = new RGBLuminanceSource(image.getWidth(), image.getHeight(), pixels);
+    return found(image).getText();
+  }
+
+  /**
+   * A code in an upright picture.
+   *
+   * @param edgePixels from the first to the last dark column, the empty border left out
+   * @param modulePixels width of a module, as near as the reader tells
+   */
+  public record Found(String text, double edgePixels, double modulePixels) {}
+
+  /** The one code in an upright picture, with its size. */
+  public static Found find(BufferedImage image) throws Exception {
+    Result result = found(image);
+    // centres of the three finder patterns: below left, above left, above right
+    ResultPoint[] centres = result.getResultPoints();
+    double module = ((FinderPattern) centres[1]).getEstimatedModuleSize();
+    int reach = (int) Math.round(5.5 * module); // half a pattern, then half of the border
+    int row = Math.round(centres[1].getY() - Math.round(3 * module));
+    int first = Integer.MAX_VALUE;
+    int last = Integer.MIN_VALUE;
+    int from = Math.round(centres[1].getX()) - reach;
+    int to = Math.round(centres[2].getX()) + reach;
+    for (int x = Math.max(0, from); x <= Math.min(image.getWidth() - 1, to); x++) {
+      if ((image.getRGB(x, row) & 0xff) < 128) {
+        first = Math.min(first, x);
+        last = x;
+      }
+    }
+    return new Found(result.getText(), last - first + 1.0, module);
+  }
+
+  private static Result found(BufferedImage image) throws Exception {
     try {
-      return new QRCodeReader()
-          .decode(
-              new BinaryBitmap(new HybridBinarizer(source)),
-              Map.of(DecodeHintType.TRY_HARDER, true))
-          .getText();
+      return new QRCodeReader().decode(bitmap(image), Map.of(DecodeHintType.TRY_HARDER, true));
     } catch (NotFoundException e) {
       throw new AssertionError("no QR code in the picture", e);
     }
+  }
+
+  private static BinaryBitmap bitmap(BufferedImage image) {
+    int[] pixels =
+        image.getRGB(0, 0, image.getWidth(), image.getHeight(), null, 0, image.getWidth());
+    var source = new RGBLuminanceSource(image.getWidth(), image.getHeight(), pixels);
+    return new BinaryBitmap(new HybridBinarizer(source));
   }
 
   /** The modules that a path of boxes makes dark, by row and column. */
