@@ -1,14 +1,10 @@
 package turnsheet.capture;
 
-import java.sql.ResultSet;
-import java.sql.SQLException;
 import java.sql.Types;
-import java.time.OffsetDateTime;
 import java.time.ZoneOffset;
 import java.util.Collection;
 import java.util.List;
 import java.util.Optional;
-import java.util.UUID;
 import java.util.function.Function;
 import org.jspecify.annotations.Nullable;
 import org.springframework.jdbc.core.simple.JdbcClient;
@@ -49,7 +45,7 @@ public class Captures {
   public Optional<Capture> find(CaptureId id) {
     return jdbc.sql("select * from capture where id = :id")
         .param("id", id.value())
-        .query(Captures::capture)
+        .query(CaptureRows::capture)
         .optional();
   }
 
@@ -57,7 +53,7 @@ public class Captures {
   public List<Capture> ofVisit(VisitId visit) {
     return jdbc.sql("select * from capture where visit_id = :visit order by received_at, id")
         .param("visit", visit.value())
-        .query(Captures::capture)
+        .query(CaptureRows::capture)
         .list();
   }
 
@@ -68,7 +64,7 @@ public class Captures {
                 + " fetch first :atMost rows only")
         .param("states", states.stream().map(CaptureState::word).toList())
         .param("atMost", atMost)
-        .query(Captures::capture)
+        .query(CaptureRows::capture)
         .list();
   }
 
@@ -234,51 +230,6 @@ public class Captures {
   private static String sentence(Rejection why) {
     String message = why.message();
     return message.length() <= LONGEST_REFUSAL ? message : message.substring(0, LONGEST_REFUSAL);
-  }
-
-  private static Capture capture(ResultSet row, int number) throws SQLException {
-    String code = row.getString("refusal_code");
-    String fit = row.getString("setting_proposal");
-    return new Capture(
-        new CaptureId(row.getObject("id", UUID.class)),
-        key(row),
-        fit == null ? null : SettingFit.ofWord(fit),
-        row.getString("file_name"),
-        new StoredBytes(row.getString("sha256"), row.getLong("byte_length")),
-        row.getObject("received_at", OffsetDateTime.class).toInstant(),
-        row.getString("received_by"),
-        CaptureState.ofWord(row.getString("state")),
-        json(row, "recognition", Looked.class),
-        json(row, "choices", CaptureChoices.class),
-        code == null ? null : new Rejection(code, row.getString("refusal_message")),
-        id(row, "job_id", JobId::new));
-  }
-
-  private static CaptureKey key(ResultSet row) throws SQLException {
-    return new CaptureKey(
-        new VisitId(row.getObject("visit_id", UUID.class)),
-        new SpeedSettingId(row.getObject("speed_setting_id", UUID.class)),
-        row.getString("bench_condition"),
-        id(row, "instrument_id", InstrumentId::new),
-        id(row, "medium_id", MediumId::new),
-        toneMethod(row));
-  }
-
-  private static @Nullable ToneMethod toneMethod(ResultSet row) throws SQLException {
-    String word = row.getString("tone_method");
-    return word == null ? null : ToneMethod.ofWord(word).orElse(null);
-  }
-
-  private static <T> @Nullable T id(ResultSet row, String column, Function<UUID, T> id)
-      throws SQLException {
-    UUID value = row.getObject(column, UUID.class);
-    return value == null ? null : id.apply(value);
-  }
-
-  private static <T> @Nullable T json(ResultSet row, String column, Class<T> type)
-      throws SQLException {
-    String json = row.getString(column);
-    return json == null ? null : CoreJson.fromJson(json, type);
   }
 
   private static <T, V> @Nullable V valueOf(@Nullable T from, Function<T, V> value) {

@@ -43,11 +43,13 @@ public final class Readings {
   private final JdbcClient jdbc;
   private final TransactionOperations transactions;
   private final Clock clock;
+  private final SeriesRows rows;
 
   public Readings(JdbcClient jdbc, TransactionOperations transactions, Clock clock) {
     this.jdbc = jdbc;
     this.transactions = transactions;
     this.clock = clock;
+    this.rows = new SeriesRows(jdbc);
   }
 
   /**
@@ -137,27 +139,16 @@ public final class Readings {
 
   /** A curve of a reading; empty where the reading has none of that name. */
   public Optional<Curve> curve(ReadingId id, SeriesName name) {
-    if (name == SeriesName.HISTOGRAM) {
-      throw new IllegalArgumentException("a histogram is no curve");
-    }
-    return content(id, name.word()).map(SeriesCodec::decodeCurve);
+    return rows.curve(id, name);
   }
 
   public Optional<Series.Histogram> histogram(ReadingId id) {
-    return content(id, SeriesName.HISTOGRAM.word()).map(SeriesCodec::decodeHistogram);
+    return rows.histogram(id);
   }
 
   /** The fluctuation in blocks; empty for readings of the time before it was kept. */
   public Optional<Series.Blocks> blocks(ReadingId id) {
-    return content(id, KeptSeries.FLUCTUATION_BLOCKS)
-        .flatMap(
-            fluctuation ->
-                content(id, KeptSeries.INDICATION_BLOCKS)
-                    .map(
-                        indication ->
-                            new Series.Blocks(
-                                SeriesCodec.decodeBlocks(fluctuation),
-                                SeriesCodec.decodeBlocks(indication))));
+    return rows.blocks(id);
   }
 
   /** The fluctuation itself; empty for readings of the time before it was kept. */
@@ -176,7 +167,7 @@ public final class Readings {
             .optional();
     if (same.isPresent()) {
       ReadingId kept = new ReadingId(same.get());
-      addCurves(kept, series);
+      rows.addWhereNone(kept, series);
       return kept;
     }
     ReadingId id = ReadingId.next();
@@ -194,20 +185,8 @@ public final class Readings {
             reading.source().channel())
         .update();
     addFigures(id, reading);
-    addCurves(id, series);
+    rows.addWhereNone(id, series);
     return id;
-  }
-
-  /** A reading that came with an import has none before its capture is measured again. */
-  private void addCurves(ReadingId id, KeptSeries series) {
-    long kept =
-        jdbc.sql("select count(*) from reading_series where reading_id = ?")
-            .param(id.value())
-            .query(Long.class)
-            .single();
-    if (kept == 0) {
-      series.contents().forEach((name, content) -> addSeries(id, name, content));
-    }
   }
 
   /** Enters the figures of a reading whose document is there, for whoever looks for figures. */
@@ -227,21 +206,6 @@ public final class Readings {
         .param("amount", amount)
         .param("uncertainty", uncertainty)
         .update();
-  }
-
-  private void addSeries(ReadingId id, String name, byte[] content) {
-    jdbc.sql("insert into reading_series values (:reading, :name, :content)")
-        .param("reading", id.value())
-        .param("name", name)
-        .param("content", content)
-        .update();
-  }
-
-  private Optional<byte[]> content(ReadingId id, String name) {
-    return jdbc.sql("select content from reading_series where reading_id = ? and name = ?")
-        .params(id.value(), name)
-        .query((row, number) -> row.getBytes(1))
-        .optional();
   }
 
   /** To the microsecond, which both databases keep. */

@@ -23,8 +23,10 @@ import org.springframework.web.multipart.MultipartFile;
 import turnsheet.capture.Capture;
 import turnsheet.capture.Looked;
 import turnsheet.core.signal.Rejection;
+import turnsheet.shop.RefusedChangeException;
 import turnsheet.shop.UnitId;
 import turnsheet.shop.Units;
+import turnsheet.shop.Visit;
 import turnsheet.shop.Visits;
 import turnsheet.web.CoreWords;
 import turnsheet.web.NotFoundException;
@@ -134,7 +136,16 @@ class UploadController {
     if (units.find(id).isEmpty()) {
       throw new NotFoundException("unit");
     }
-    return visits.openOf(id).orElseGet(() -> visits.open(id, "")).id().value();
+    return visits.openOf(id).orElseGet(() -> opened(id)).id().value();
+  }
+
+  private Visit opened(UnitId unit) {
+    try {
+      return visits.open(unit, "");
+    } catch (RefusedChangeException e) {
+      // somebody else was faster: the recording belongs to that visit
+      return visits.openOf(unit).orElseThrow(() -> e);
+    }
   }
 
   private static RefusedRequestException noFile() {

@@ -105,13 +105,17 @@ class SharedReportController {
   }
 
   @GetMapping(ShareDesk.PATH + "{token}/pdf")
-  ResponseEntity<byte[]> pdf(@PathVariable String token) {
-    return pdf(links.peek(token).map(ShareLink::reportNumber));
+  Object pdf(@PathVariable String token, HttpServletRequest request, HttpServletResponse response) {
+    return pdf(links.peek(token).map(ShareLink::reportNumber), request, response);
   }
 
   @GetMapping(ShareDesk.PATH + "{token}/current/pdf")
-  ResponseEntity<byte[]> currentPdf(@PathVariable String token) {
-    return pdf(report(links.peek(token).orElse(null)).map(this::newest).map(Report::number));
+  Object currentPdf(
+      @PathVariable String token, HttpServletRequest request, HttpServletResponse response) {
+    return pdf(
+        report(links.peek(token).orElse(null)).map(this::newest).map(Report::number),
+        request,
+        response);
   }
 
   private String page(
@@ -161,17 +165,19 @@ class SharedReportController {
     response.setHeader("Cache-Control", "no-store");
   }
 
-  private ResponseEntity<byte[]> pdf(Optional<Long> number) {
+  /** The file, or the page that says that the link opens nothing. */
+  private Object pdf(
+      Optional<Long> number, HttpServletRequest request, HttpServletResponse response) {
     return number
         .flatMap(n -> reports.pdf(n, printing::pdf))
-        .map(
+        .<Object>map(
             pdf ->
                 ResponseEntity.ok()
                     .contentType(MediaType.APPLICATION_PDF)
                     .header("X-Robots-Tag", "noindex, nofollow")
                     .header("Cache-Control", "no-store")
                     .body(pdf))
-        .orElse(ResponseEntity.notFound().build());
+        .orElseGet(() -> gone(request, response));
   }
 
   private Optional<Report> report(@Nullable ShareLink link) {
