@@ -153,7 +153,7 @@ public final class Readings {
 
   /** The fluctuation itself; empty for readings of the time before it was kept. */
   public Optional<Fluctuation> fluctuation(ReadingId id) {
-    return content(id, KeptSeries.FLUCTUATION).map(SeriesCodec::decodeFluctuation);
+    return rows.fluctuation(id);
   }
 
   private ReadingId addOnce(CaptureId capture, Reading reading, KeptSeries series) {

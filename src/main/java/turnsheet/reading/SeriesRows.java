@@ -3,6 +3,7 @@ package turnsheet.reading;
 import java.util.Optional;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import turnsheet.core.measure.Series;
+import turnsheet.core.signal.Fluctuation;
 import turnsheet.reading.chart.Curve;
 
 /** What readings keep beside their figures: curves, histograms and blocks, one row each. */
@@ -23,6 +24,10 @@ final class SeriesRows {
 
   Optional<Series.Histogram> histogram(ReadingId id) {
     return content(id, SeriesName.HISTOGRAM.word()).map(SeriesCodec::decodeHistogram);
+  }
+
+  Optional<Fluctuation> fluctuation(ReadingId id) {
+    return content(id, KeptSeries.FLUCTUATION).map(SeriesCodec::decodeFluctuation);
   }
 
   Optional<Series.Blocks> blocks(ReadingId id) {
