@@ -1,6 +1,7 @@
 package turnsheet.shop.web;
 
 import jakarta.validation.Valid;
+import java.util.Optional;
 import java.util.UUID;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
@@ -9,6 +10,7 @@ import org.springframework.web.bind.annotation.GetMapping;
 import org.springframework.web.bind.annotation.ModelAttribute;
 import org.springframework.web.bind.annotation.PathVariable;
 import org.springframework.web.bind.annotation.PostMapping;
+import turnsheet.access.ShopPreferences;
 import turnsheet.shop.MachineModel;
 import turnsheet.shop.SpeedSetting;
 import turnsheet.shop.SpeedSettingId;
@@ -22,8 +24,10 @@ class SettingPages {
 
   private final ModelScreen screen;
   private final ModelChange change;
+  private final ShopPreferences preferences;
 
-  SettingPages(ModelScreen screen, ModelChange change) {
+  SettingPages(ModelScreen screen, ModelChange change, ShopPreferences preferences) {
+    this.preferences = preferences;
     this.screen = screen;
     this.change = change;
   }
@@ -34,7 +38,7 @@ class SettingPages {
       @Valid @ModelAttribute("settingForm") SettingForm form,
       BindingResult errors,
       Model model) {
-    return written(id, SpeedSettingId.next(), form, errors)
+    return written(id, form.setting(SpeedSettingId.next(), errors), errors)
         ? back(id)
         : screen.show(id, model, "settings");
   }
@@ -42,7 +46,8 @@ class SettingPages {
   @GetMapping("/models/{id}/settings/{settingId}")
   String edit(@PathVariable UUID id, @PathVariable UUID settingId, Model model) {
     MachineModel of = screen.model(id);
-    model.addAttribute("settingForm", SettingForm.of(setting(of, settingId)));
+    model.addAttribute(
+        "settingForm", SettingForm.of(setting(of, settingId), preferences.get().speeds()));
     return form(of, settingId, model);
   }
 
@@ -55,7 +60,7 @@ class SettingPages {
       Model model) {
     MachineModel of = screen.model(id);
     SpeedSetting old = setting(of, settingId);
-    return written(id, old.id(), form, errors) ? back(id) : form(of, settingId, model);
+    return written(id, form.setting(old, errors), errors) ? back(id) : form(of, settingId, model);
   }
 
   @GetMapping("/models/{id}/settings/{settingId}/remove")
@@ -77,11 +82,8 @@ class SettingPages {
     return back(id);
   }
 
-  private boolean written(
-      UUID id, SpeedSettingId settingId, SettingForm form, BindingResult errors) {
-    return form.setting(settingId, errors)
-        .map(s -> change.done(id, m -> m.withSetting(s), errors, "label"))
-        .orElse(false);
+  private boolean written(UUID id, Optional<SpeedSetting> typed, BindingResult errors) {
+    return typed.map(s -> change.done(id, m -> m.withSetting(s), errors, "label")).orElse(false);
   }
 
   private String form(MachineModel of, UUID settingId, Model model) {
