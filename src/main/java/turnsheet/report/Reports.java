@@ -12,6 +12,7 @@ import java.util.Optional;
 import java.util.UUID;
 import java.util.function.Function;
 import org.jspecify.annotations.Nullable;
+import org.springframework.dao.QueryTimeoutException;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.stereotype.Component;
 import org.springframework.transaction.support.TransactionOperations;
@@ -29,6 +30,9 @@ public final class Reports {
         (select later.number from report later where later.revises = r.number) as replaced_by
       from report r
       """;
+
+  /** A minute on H2; PostgreSQL waits as long as it takes. */
+  private static final int MOST_TURNS = 30;
 
   private final JdbcClient jdbc;
   private final TransactionOperations transactions;
@@ -61,7 +65,7 @@ public final class Reports {
     return transactions.execute(
         status -> {
           // one at a time, so that numbers run without a gap
-          jdbc.sql("select id from shop_rules where id = 1 for update").query().listOfRows();
+          awaitTurn();
           long number =
               jdbc.sql("select coalesce(max(number), 0) + 1 from report")
                   .query(Long.class)
@@ -74,6 +78,24 @@ public final class Reports {
           store(report, print.apply(report));
           return report;
         });
+  }
+
+  /**
+   * Waits, until the end of the transaction around it, for whoever is issuing a report: what is
+   * read afterwards is still so when a report is added.
+   */
+  public void awaitTurn() {
+    for (int turn = 1; true; turn++) {
+      try {
+        jdbc.sql("select id from shop_rules where id = 1 for update").query().listOfRows();
+        return;
+      } catch (QueryTimeoutException e) {
+        // H2 gives up waiting after two seconds, and printing a report may take longer
+        if (turn == MOST_TURNS) {
+          throw e;
+        }
+      }
+    }
   }
 
   public Optional<Report> find(long number) {

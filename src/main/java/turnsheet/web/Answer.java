@@ -31,6 +31,9 @@ record Answer(
     if (problem instanceof RefusedRequestException e) {
       return of(HttpStatus.UNPROCESSABLE_CONTENT, e.code(), e.getMessage());
     }
+    if (problem instanceof OvertakenException e) {
+      return of(HttpStatus.CONFLICT, e.code(), e.getMessage());
+    }
     if (problem instanceof MethodArgumentNotValidException e) {
       return invalid(e);
     }

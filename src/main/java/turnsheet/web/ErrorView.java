@@ -12,7 +12,7 @@ public final class ErrorView {
   /** Request attribute: a form came too late, or not from our page. */
   public static final String STALE_FORM = "turnsheet.staleForm";
 
-  private static final Set<Integer> OWN_TEXT = Set.of(403, 404, 413, 422, 500);
+  private static final Set<Integer> OWN_TEXT = Set.of(403, 404, 409, 413, 422, 500);
 
   private ErrorView() {}
 

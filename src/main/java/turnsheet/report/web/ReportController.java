@@ -1,10 +1,12 @@
 package turnsheet.report.web;
 
+import jakarta.servlet.http.HttpServletResponse;
 import jakarta.validation.Valid;
 import java.util.Locale;
 import java.util.UUID;
 import org.springframework.http.ContentDisposition;
 import org.springframework.http.HttpHeaders;
+import org.springframework.http.HttpStatus;
 import org.springframework.http.MediaType;
 import org.springframework.http.ResponseEntity;
 import org.springframework.stereotype.Controller;
@@ -20,6 +22,7 @@ import turnsheet.report.Report;
 import turnsheet.report.Reports;
 import turnsheet.shop.VisitId;
 import turnsheet.web.NotFoundException;
+import turnsheet.web.OvertakenException;
 import turnsheet.web.Times;
 
 /** Issued reports: the list, one of them, its PDF, issuing and revising. */
@@ -93,10 +96,16 @@ class ReportController {
       @PathVariable UUID id,
       @Valid @ModelAttribute("form") ReportForm form,
       BindingResult errors,
-      Model model) {
-    return errors.hasErrors()
-        ? form(id, null, model)
-        : "redirect:/reports/" + desk.issue(new VisitId(id), wish(form)).number();
+      Model model,
+      HttpServletResponse response) {
+    if (errors.hasErrors()) {
+      return form(id, null, model);
+    }
+    try {
+      return "redirect:/reports/" + desk.issue(new VisitId(id), wish(form)).number();
+    } catch (OvertakenException e) {
+      return overtaken(new VisitId(id), model, response);
+    }
   }
 
   @GetMapping("/reports/{number}/revise")
@@ -120,14 +129,33 @@ class ReportController {
       @PathVariable long number,
       @Valid @ModelAttribute("form") ReportForm form,
       BindingResult errors,
-      Model model) {
+      Model model,
+      HttpServletResponse response) {
     Report report = found(number);
     if (form.reason().isBlank()) {
       errors.rejectValue("reason", "report.form.reason.missing");
     }
-    return errors.hasErrors()
-        ? form(report.visitId().value(), number, model)
-        : "redirect:/reports/" + desk.revise(number, wish(form), form.reason()).number();
+    if (errors.hasErrors()) {
+      return form(report.visitId().value(), number, model);
+    }
+    try {
+      return "redirect:/reports/" + desk.revise(number, wish(form), form.reason()).number();
+    } catch (OvertakenException e) {
+      return overtaken(report.visitId(), model, response);
+    }
+  }
+
+  /** The form as it was typed, now for the report that somebody else has issued meanwhile. */
+  private String overtaken(VisitId visit, Model model, HttpServletResponse response) {
+    long current =
+        reports.ofVisit(visit).stream()
+            .filter(e -> e.replacedBy() == null)
+            .findFirst()
+            .orElseThrow()
+            .number();
+    response.setStatus(HttpStatus.CONFLICT.value());
+    model.addAttribute("overtaken", true);
+    return form(visit.value(), current, model);
   }
 
   private Report found(long number) {

@@ -18,6 +18,7 @@ import turnsheet.report.Sheet;
 import turnsheet.report.Sheets;
 import turnsheet.shop.VisitId;
 import turnsheet.web.NotFoundException;
+import turnsheet.web.OvertakenException;
 import turnsheet.web.PlainText;
 import turnsheet.web.RefusedRequestException;
 
@@ -113,19 +114,21 @@ public class ReportDesk {
   /**
    * Issues the sheet of a visit as it stands now.
    *
-   * @throws RefusedRequestException {@code nothingMeasured} where the sheet is empty, {@code
-   *     reportStands} where the visit has a report already, which is to be revised instead
+   * @throws RefusedRequestException {@code nothingMeasured} where the sheet is empty
+   * @throws OvertakenException {@code reportStands} where the visit has a report already, which is
+   *     to be revised instead
    * @throws AccessDeniedException if whoever asks is not an owner
    */
   @Transactional
   public Report issue(VisitId visit, Wish wish) {
+    reports.awaitTurn();
     Reports.Entry standing =
         reports.ofVisit(visit).stream()
             .filter(e -> e.replacedBy() == null)
             .findFirst()
             .orElse(null);
     if (standing != null) {
-      throw new RefusedRequestException(
+      throw new OvertakenException(
           "reportStands",
           "Report "
               + Issue.printed(standing.number())
@@ -138,14 +141,15 @@ public class ReportDesk {
    * Issues the sheet of the same visit afresh in place of a report.
    *
    * @param reason not blank
-   * @throws RefusedRequestException {@code reportReplaced} where a revision of it was issued
-   *     before, {@code reasonMissing} without a reason
+   * @throws OvertakenException {@code reportReplaced} where a revision of it was issued before
+   * @throws RefusedRequestException {@code reasonMissing} without a reason
    */
   @Transactional
   public Report revise(long number, Wish wish, String reason) {
+    reports.awaitTurn();
     Report old = reports.find(number).orElseThrow(() -> new NotFoundException("report"));
     if (old.replacedBy() != null) {
-      throw new RefusedRequestException(
+      throw new OvertakenException(
           "reportReplaced",
           "Report "
               + Issue.printed(old.replacedBy())

@@ -285,8 +285,8 @@ class ReportPagesTest {
                 .param("conditions", "")
                 .param("remarks", "")
                 .param("reason", "again"))
-        .andExpect(status().is(422));
-    mvc.perform(wish(post(visit + "/report"), "en")).andExpect(status().is(422));
+        .andExpect(status().isConflict());
+    mvc.perform(wish(post(visit + "/report"), "en")).andExpect(status().isConflict());
   }
 
   @Test
