@@ -11,10 +11,12 @@ import turnsheet.reading.chart.Curve;
  * The spectrum of a reading as a sheet keeps it: a decade at a time, so that the low rates keep
  * their points on a logarithmic axis.
  */
-final class FrozenSpectrum {
+public final class FrozenSpectrum {
 
-  static final double LOWEST_HZ = 0.2;
-  static final double HIGHEST_HZ = 100;
+  /** The rates that a sheet shows. */
+  public static final double LOWEST_HZ = 0.2;
+
+  public static final double HIGHEST_HZ = 100;
 
   private static final int POINTS = 300;
 

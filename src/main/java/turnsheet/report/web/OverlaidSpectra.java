@@ -4,6 +4,7 @@ import java.util.List;
 import turnsheet.reading.chart.Axis;
 import turnsheet.reading.chart.Curve;
 import turnsheet.reading.chart.SvgChart;
+import turnsheet.report.FrozenSpectrum;
 import turnsheet.report.SheetSide.CurvePart;
 import turnsheet.web.Wording;
 
@@ -11,8 +12,6 @@ import turnsheet.web.Wording;
 final class OverlaidSpectra {
 
   private static final int HEIGHT = 230;
-  private static final double LOWEST_HZ = 0.2;
-  private static final double HIGHEST_HZ = 100;
 
   private final Wording words;
 
@@ -29,10 +28,12 @@ final class OverlaidSpectra {
     Curve[] full = curves(after);
     double to =
         Math.min(
-            HIGHEST_HZ, Math.min(dashed[dashed.length - 1].end(), full[full.length - 1].end()));
+            FrozenSpectrum.HIGHEST_HZ,
+            Math.min(dashed[dashed.length - 1].end(), full[full.length - 1].end()));
     double highest = Math.max(highest(dashed), highest(full));
     return new SvgChart(
-            Axis.logarithmic(words.text("report.spectrum.rate"), "Hz", LOWEST_HZ, to),
+            Axis.logarithmic(
+                words.text("report.spectrum.rate"), "Hz", FrozenSpectrum.LOWEST_HZ, to),
             Axis.linear(
                 words.text("report.spectrum.peak"), "%", 0, highest > 0 ? 1.08 * highest : 1),
             HEIGHT,
@@ -60,7 +61,7 @@ final class OverlaidSpectra {
     double highest = 0;
     for (Curve part : parts) {
       for (int i = 0; i < part.size(); i++) {
-        if (part.x(i) >= LOWEST_HZ && part.high(i) > highest) {
+        if (part.x(i) >= FrozenSpectrum.LOWEST_HZ && part.high(i) > highest) {
           highest = part.high(i);
         }
       }

@@ -46,6 +46,15 @@ class RulesPagesTest {
   }
 
   @Test
+  void eachRuleIsToldWithoutSayingAgainThatItIsOne() throws Exception {
+    assertThat(browser.read("/shop/rules"))
+        .containsOnlyOnce("Decision rule")
+        .contains("The value alone decides", "on both sides of the limit");
+    assertThat(browser.read("/help/words"))
+        .contains("<b>Simple acceptance</b>", "<b>Guard band</b>");
+  }
+
+  @Test
   void whatIsNoThresholdComesBack() throws Exception {
     browser.sendBack(
         "/shop/rules",
