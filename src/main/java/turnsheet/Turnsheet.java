@@ -18,6 +18,7 @@ import turnsheet.demo.SampleFolder;
       "turnsheet.access",
       "turnsheet.bench",
       "turnsheet.capture",
+      "turnsheet.evidence",
       "turnsheet.exchange",
       "turnsheet.job",
       "turnsheet.reading",

@@ -36,6 +36,7 @@ class ArchitectureTest {
           "turnsheet.shop",
           "turnsheet.capture",
           "turnsheet.reading",
+          "turnsheet.evidence",
           "turnsheet.bench",
           "turnsheet.report",
           "turnsheet.share",
