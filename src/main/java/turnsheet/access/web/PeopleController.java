@@ -22,6 +22,7 @@ import turnsheet.access.AuditTrail;
 import turnsheet.access.OneTimeAddresses;
 import turnsheet.access.OneTimeAddresses.Purpose;
 import turnsheet.access.Role;
+import turnsheet.web.Bound;
 import turnsheet.web.NotFoundException;
 import turnsheet.web.PlainText;
 import turnsheet.web.RefusedRequestException;
@@ -67,12 +68,13 @@ class PeopleController {
       @Valid @ModelAttribute("form") PersonForm form,
       BindingResult errors,
       RedirectAttributes flash) {
+    Bound.require(errors);
     if (errors.hasErrors()) {
       return PAGE;
     }
     Account made;
     try {
-      made = accounts.create(form.name(), form.displayName().strip(), form.role(), null);
+      made = accounts.create(form.name(), form.displayName(), form.role(), null);
     } catch (RefusedRequestException e) {
       errors.rejectValue("name", "access.name.taken");
       return PAGE;

@@ -4,6 +4,7 @@ import jakarta.servlet.http.HttpServletResponse;
 import jakarta.validation.Valid;
 import java.util.Locale;
 import java.util.UUID;
+import org.jspecify.annotations.Nullable;
 import org.springframework.http.ContentDisposition;
 import org.springframework.http.HttpHeaders;
 import org.springframework.http.HttpStatus;
@@ -21,6 +22,7 @@ import turnsheet.report.Issue;
 import turnsheet.report.Report;
 import turnsheet.report.Reports;
 import turnsheet.shop.VisitId;
+import turnsheet.shop.Visits;
 import turnsheet.web.NotFoundException;
 import turnsheet.web.OvertakenException;
 import turnsheet.web.Times;
@@ -32,14 +34,21 @@ class ReportController {
   private static final int LATEST = 200;
 
   private final Reports reports;
+  private final Visits visits;
   private final ReportDesk desk;
   private final SheetPrinting printing;
   private final CurrentUser user;
   private final Times times;
 
   ReportController(
-      Reports reports, ReportDesk desk, SheetPrinting printing, CurrentUser user, Times times) {
+      Reports reports,
+      Visits visits,
+      ReportDesk desk,
+      SheetPrinting printing,
+      CurrentUser user,
+      Times times) {
     this.reports = reports;
+    this.visits = visits;
     this.desk = desk;
     this.printing = printing;
     this.user = user;
@@ -86,6 +95,9 @@ class ReportController {
 
   @GetMapping("/visits/{id}/report")
   String ask(@PathVariable UUID id, Model model, Locale locale) {
+    if (visits.find(new VisitId(id)).isEmpty()) {
+      throw new NotFoundException("visit");
+    }
     String name = user.account().displayName();
     model.addAttribute("form", new ReportForm(locale.getLanguage(), name, name, "", "", ""));
     return form(id, null, model);
@@ -162,8 +174,7 @@ class ReportController {
     return reports.find(number).orElseThrow(() -> new NotFoundException("report"));
   }
 
-  private static String form(
-      UUID visit, @org.jspecify.annotations.Nullable Long revises, Model model) {
+  private static String form(UUID visit, @Nullable Long revises, Model model) {
     model.addAttribute("visitId", visit);
     model.addAttribute("revises", revises);
     model.addAttribute("revisesPrinted", revises == null ? "" : Issue.printed(revises));

@@ -11,6 +11,7 @@ import org.springframework.web.servlet.mvc.support.RedirectAttributes;
 import turnsheet.access.AuditTrail;
 import turnsheet.core.diagnose.DecisionRule;
 import turnsheet.shop.ShopRules;
+import turnsheet.web.Bound;
 
 /** By what rule figures are judged, and how small a change is too small to matter. */
 @Controller
@@ -38,6 +39,7 @@ class RulesPages {
       BindingResult errors,
       Model model,
       RedirectAttributes flash) {
+    Bound.require(errors);
     ShopRules.Rules meant = form.rules(errors).orElse(null);
     if (meant == null || errors.hasErrors()) {
       return form(model);

@@ -72,6 +72,12 @@ class ReportPagesTest {
   }
 
   @Test
+  void aVisitThatIsNotThereHasNoReportToIssue() throws Exception {
+    mvc.perform(get("/visits/00000000-0000-4000-8000-000000000000/report"))
+        .andExpect(status().isNotFound());
+  }
+
+  @Test
   void anIssuedReportSaysWhatTheSheetSaidWithNumberAndCode() throws Exception {
     long number = issue("en");
     String page = text(page("/reports/" + number));

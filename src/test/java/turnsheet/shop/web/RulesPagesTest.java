@@ -80,6 +80,15 @@ class RulesPagesTest {
   }
 
   @Test
+  void aRuleThatNoPageOffersIsRefusedWithASentence() {
+    assertThat(browser.send("/shop/rules", "rule", "NONE", "leastFlutter", "1", "leastSpeed", "1"))
+        .hasStatus(422)
+        .bodyText()
+        .contains("Some fields are missing or wrong.");
+    assertThat(rules.get()).isEqualTo(before);
+  }
+
+  @Test
   @AsTechnician
   void aTechnicianDoesNotChangeThem() {
     assertThat(
