@@ -89,6 +89,13 @@ final class Svg {
         .formatted(number(x), number(y), number(width), number(height));
   }
 
+  /** Cells of one darkness. */
+  static String cells(String path, double darkness) {
+    return ("<path class=\"drawn-cells\" d=\"%s\" fill=\"currentColor\" fill-opacity=\"%s\""
+            + " stroke=\"none\"/>")
+        .formatted(path, String.format(Locale.ROOT, "%.2f", darkness));
+  }
+
   /** A length to one tenth, which is finer than any screen or printer shows. */
   static String number(double value) {
     String digits = String.format(Locale.ROOT, "%.1f", value);

@@ -2,10 +2,12 @@ package turnsheet.reading.web;
 
 import java.util.Locale;
 import java.util.UUID;
+import org.jspecify.annotations.Nullable;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
 import org.springframework.web.bind.annotation.GetMapping;
 import org.springframework.web.bind.annotation.PathVariable;
+import org.springframework.web.bind.annotation.RequestParam;
 import turnsheet.capture.CaptureId;
 import turnsheet.reading.ReadingId;
 import turnsheet.reading.Readings;
@@ -16,18 +18,32 @@ import turnsheet.web.NotFoundException;
 class ReadingController {
 
   private final ReadingView pages;
+  private final MotionView motion;
   private final Readings readings;
 
-  ReadingController(ReadingView pages, Readings readings) {
+  ReadingController(ReadingView pages, MotionView motion, Readings readings) {
     this.pages = pages;
+    this.motion = motion;
     this.readings = readings;
   }
 
+  /**
+   * The page.
+   *
+   * @param line rate of the one line to listen to
+   * @param faster how many times faster
+   */
   @GetMapping("/readings/{id}")
-  String reading(@PathVariable UUID id, Locale locale, Model model) {
+  String reading(
+      @PathVariable UUID id,
+      @RequestParam(required = false) @Nullable Double line,
+      @RequestParam(required = false) @Nullable Integer faster,
+      Locale locale,
+      Model model) {
+    ReadingId reading = new ReadingId(id);
     model.addAttribute(
-        "page",
-        pages.find(new ReadingId(id), locale).orElseThrow(() -> new NotFoundException("reading")));
+        "page", pages.find(reading, locale).orElseThrow(() -> new NotFoundException("reading")));
+    model.addAttribute("motion", motion.page(reading, line, faster, locale));
     return "reading/reading";
   }
 

@@ -8,6 +8,8 @@ import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.
 import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.redirectedUrl;
 import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.status;
 
+import java.nio.ByteBuffer;
+import java.nio.ByteOrder;
 import java.time.Clock;
 import java.util.UUID;
 import org.junit.jupiter.api.BeforeEach;
@@ -245,5 +247,52 @@ class ReadingPagesTest {
 
   private static String plain(String page) {
     return page.replace('\u202f', ' ').replace("\u2009", " ");
+  }
+
+  @Test
+  void showsRateOverTimeAndPlaysTheSpeed() throws Exception {
+    String page = page("/readings/" + reading);
+
+    assertThat(page)
+        .contains("No line below 20 Hz changes its rate during the recording.")
+        .contains("Rate of the fluctuation over time")
+        .contains("drawn-cells")
+        .contains("/readings/" + reading + "/sound.wav?faster=20");
+    assertThat(plain(page("/readings/" + reading + "?faster=50&line=9.98")))
+        .contains("Played 50 times faster and over and over: 9.98 Hz is heard at 499 Hz");
+  }
+
+  /** The samples' minute holds one line of 0.05 %: 20 times faster a tone of 199.6 Hz. */
+  @Test
+  void theSoundIsAWaveFileOfTheRateThatWasAskedFor() throws Exception {
+    byte[] wave =
+        mvc.perform(get("/readings/" + reading + "/sound.wav?faster=20"))
+            .andExpect(status().isOk())
+            .andExpect(content().contentType("audio/wav"))
+            .andReturn()
+            .getResponse()
+            .getContentAsByteArray();
+
+    ByteBuffer bytes = ByteBuffer.wrap(wave).order(ByteOrder.LITTLE_ENDIAN);
+    assertThat(bytes.getInt(24)).isEqualTo(20 * 500);
+    int crossings = 0;
+    for (int at = 46; at + 1 < wave.length; at += 2) {
+      crossings += bytes.getShort(at - 2) < 0 && bytes.getShort(at) >= 0 ? 1 : 0;
+    }
+    // 60 s of 9.98 Hz, less the fade at both ends
+    assertThat(crossings).isBetween(595, 600);
+    mvc.perform(get("/readings/" + reading + "/sound.wav?faster=7"))
+        .andExpect(status().isUnprocessableContent());
+    mvc.perform(get("/readings/" + reading + "/sound.wav?faster=20&line=-3"))
+        .andExpect(status().isUnprocessableContent());
+  }
+
+  @Test
+  void movingLinesComeAsADocument() throws Exception {
+    mvc.perform(get("/api/v1/readings/" + reading + "/motion"))
+        .andExpect(status().isOk())
+        .andExpect(content().json("[]"));
+    mvc.perform(get("/api/v1/readings/" + UUID.randomUUID() + "/motion"))
+        .andExpect(status().isNotFound());
   }
 }

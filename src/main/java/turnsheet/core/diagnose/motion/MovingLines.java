@@ -17,8 +17,8 @@ import turnsheet.core.stats.Quantiles;
  */
 public final class MovingLines {
 
-  private static final double HIGHEST_HERTZ = 20;
-  private static final double SHORTEST_SECONDS = 20;
+  public static final double HIGHEST_HERTZ = 20;
+  public static final double SHORTEST_SECONDS = 20;
   private static final double RATE_HERTZ = 60;
 
   /** A standard deviate that chance passes once in 16 000 lines. */

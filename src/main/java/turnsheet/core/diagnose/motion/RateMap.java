@@ -26,6 +26,7 @@ public final class RateMap {
   private static final double SHORTEST_SECONDS = 2;
   private static final double LONGEST_SECONDS = 20;
   private static final int COLUMNS = 96;
+  private static final int NEIGHBOURS = 8;
 
   private final double startSeconds;
   private final double columnSeconds;
@@ -132,10 +133,19 @@ public final class RateMap {
     return peaks[column][row];
   }
 
-  /** What half of all cells do not exceed: noise and what is weaker. */
-  public double middlePercent() {
-    double[] all = Arrays.stream(peaks).flatMapToDouble(Arrays::stream).sorted().toArray();
-    return all[all.length / 2];
+  /**
+   * What half of the cells in a row and in the eight rows to either side do not exceed: noise, and
+   * not the line or two that may run through them.
+   */
+  public double middlePercent(int row) {
+    int from = Math.max(0, row - NEIGHBOURS);
+    int to = Math.min(rows(), row + NEIGHBOURS + 1);
+    double[] near =
+        Arrays.stream(peaks)
+            .flatMapToDouble(column -> Arrays.stream(column, from, to))
+            .sorted()
+            .toArray();
+    return near[near.length / 2];
   }
 
   public double largestPercent() {

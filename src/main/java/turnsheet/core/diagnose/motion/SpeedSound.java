@@ -18,7 +18,7 @@ public final class SpeedSound {
   /**
    * Beyond that much sound nobody listens, and the transform would take the memory of a capture.
    */
-  private static final int MOST_SAMPLES = 1 << 21;
+  private static final int MOST_SAMPLES = 1 << 20;
 
   private static final double LOUDEST = 0.5;
   private static final double FADE_SECONDS = 0.01;
