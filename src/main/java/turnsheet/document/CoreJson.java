@@ -16,6 +16,7 @@ import tools.jackson.databind.ValueSerializer;
 import tools.jackson.databind.annotation.JsonSerialize;
 import tools.jackson.databind.json.JsonMapper;
 import turnsheet.core.measure.Figure;
+import turnsheet.core.measure.Reading;
 import turnsheet.core.stats.Budget;
 
 /**
@@ -30,6 +31,7 @@ public final class CoreJson {
           .disable(MapperFeature.SORT_PROPERTIES_ALPHABETICALLY)
           .enumNamingStrategy(EnumNamingStrategies.LOWER_CAMEL_CASE)
           .addMixIn(Figure.class, FigureMembers.class)
+          .addMixIn(Reading.Suspect.class, SuspectMembers.class)
           .build();
 
   private static final ObjectWriter PRETTY =
@@ -85,6 +87,10 @@ public final class CoreJson {
     @JsonInclude(JsonInclude.Include.NON_EMPTY)
     List<Budget.Contribution> budget();
   }
+
+  /** How the contract writes a suspect: what was not kept is left out. */
+  @JsonInclude(JsonInclude.Include.NON_NULL)
+  interface SuspectMembers {}
 
   /** Writes 2 for 2.0. */
   static final class WholeWherePossible extends ValueSerializer<Double> {

@@ -1,26 +1,26 @@
 package turnsheet.core.diagnose;
 
 import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.List;
+import turnsheet.core.diagnose.parts.Drive;
+import turnsheet.core.diagnose.parts.ExpectedRate;
+import turnsheet.core.diagnose.parts.LineFinding;
+import turnsheet.core.diagnose.parts.LineSuspects;
+import turnsheet.core.diagnose.parts.MachinePart;
+import turnsheet.core.diagnose.parts.PartKind;
+import turnsheet.core.diagnose.parts.RankedSuspect;
+import turnsheet.core.diagnose.parts.RateTable;
+import turnsheet.core.diagnose.parts.Running;
+import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.Reading;
 
-/**
- * Names the rotating parts that can cause a line.
- *
- * <p>A part is a suspect where the line lies within the resolution of the capture plus the
- * tolerance of diameters of one of its first four harmonics. The order is by probability: mismatch
- * as a Gaussian of half that tolerance, a harmonic h times rarer than the part's own rate (both
- * common practice, no source).
- */
+/** Names the parts that can cause a line, in the words of the result contract. */
 public final class Suspects {
 
-  private static final int HARMONICS = 4;
-  // main lobe of a Hann window between its half-amplitude points is two bins wide, one to each
-  // side; half a bin more for the interpolation on noise
-  private static final double RESOLUTION_BINS = 1.5;
-  // a diameter read off a worn part is good to about one percent (common practice, no source)
-  private static final double DIAMETER_TOLERANCE = 0.01;
+  /** More would say nothing. */
+  private static final int MOST = 8;
+
+  private static final double ANY_MAINS_HERTZ = 50;
 
   private Suspects() {}
 
@@ -30,41 +30,60 @@ public final class Suspects {
    * @param durationSeconds of the capture, positive
    */
   public static List<Reading.Line> name(
+      List<Reading.Line> lines, List<MachinePart> parts, Running running, double durationSeconds) {
+    return named(lines, new LineSuspects(RateTable.of(parts, running), running, durationSeconds));
+  }
+
+  /** The same where no more than the rates of the parts is known, each to one percent. */
+  public static List<Reading.Line> name(
       List<Reading.Line> lines, List<RotatingPart> parts, double durationSeconds) {
-    return lines.stream()
-        .map(
-            line -> {
-              Double rate = line.rateHz().value();
-              List<Reading.Suspect> found =
-                  rate == null ? List.of() : of(rate, parts, durationSeconds);
-              return new Reading.Line(line.rateHz(), line.peakPercent(), found);
-            })
-        .toList();
+    return named(lines, ofRates(parts, durationSeconds));
   }
 
   /** The suspects of one line, the most probable first; empty where no part comes near. */
   public static List<Reading.Suspect> of(
       double lineHertz, List<RotatingPart> parts, double durationSeconds) {
-    if (!(durationSeconds > 0)) {
-      throw new IllegalArgumentException("duration " + durationSeconds + " s");
-    }
-    record Scored(Reading.Suspect suspect, double score) {}
-    List<Scored> found = new ArrayList<>();
+    Figure rate = Figure.withoutUncertainty(lineHertz, "only its rate is asked about");
+    Reading.Line line = new Reading.Line(rate, rate, List.of());
+    return named(List.of(line), ofRates(parts, durationSeconds)).get(0).suspects();
+  }
+
+  private static LineSuspects ofRates(List<RotatingPart> parts, double durationSeconds) {
+    List<MachinePart> own = new ArrayList<>();
     for (RotatingPart part : parts) {
-      for (int h = 1; h <= HARMONICS; h++) {
-        double rate = h * part.rateHertz();
-        double tolerance = RESOLUTION_BINS / durationSeconds + DIAMETER_TOLERANCE * rate;
-        double mismatch = Math.abs(lineHertz - rate);
-        if (mismatch <= tolerance) {
-          double z = mismatch / (tolerance / 2);
-          double score = z * z / 2 + Math.log(tolerance) + Math.log(h);
-          found.add(new Scored(new Reading.Suspect(part.name(), h, rate), score));
-        }
-      }
+      own.add(MachinePart.of(part.name(), PartKind.OTHER, new Drive.Own(60 * part.rateHertz())));
     }
-    return found.stream()
-        .sorted(Comparator.comparingDouble(Scored::score))
-        .map(Scored::suspect)
+    Running running = Running.nominal(null, null, ANY_MAINS_HERTZ);
+    List<ExpectedRate> rates =
+        RateTable.of(own, running).stream().filter(r -> own.contains(r.part())).toList();
+    return new LineSuspects(rates, running, durationSeconds);
+  }
+
+  private static List<Reading.Line> named(List<Reading.Line> lines, LineSuspects suspects) {
+    return lines.stream()
+        .map(
+            line -> {
+              List<Reading.Suspect> found =
+                  suspects.of(line, lines).map(Suspects::contract).orElse(List.of());
+              return new Reading.Line(line.rateHz(), line.peakPercent(), found);
+            })
         .toList();
+  }
+
+  private static List<Reading.Suspect> contract(LineFinding finding) {
+    return finding.suspects().stream().limit(MOST).map(Suspects::contract).toList();
+  }
+
+  private static Reading.Suspect contract(RankedSuspect ranked) {
+    ExpectedRate expected = ranked.expected();
+    return new Reading.Suspect(
+        ranked.part(),
+        expected.harmonic(),
+        expected.rate().hertz(),
+        expected.cause().word(),
+        expected.sideband(),
+        ranked.mismatchHz(),
+        ranked.toleranceHz(),
+        ranked.probability());
   }
 }

@@ -105,12 +105,32 @@ public record Reading(
   }
 
   /**
-   * A part that can cause a line.
+   * A part that can cause a line, as the parts were known when the capture was measured.
    *
-   * @param harmonic 1 for the part's own rate
-   * @param rateHz the rate at which that harmonic is expected
+   * @param harmonic 1 for the rate of the cause itself
+   * @param rateHz the rate at which that harmonic is expected; the middle where it has a range
+   * @param cause turn, teeth, poles, supply, cage, outerRace, innerRace, ball or hum; this and what
+   *     follows is null in documents of the time before it was kept
+   * @param sideband turns between that harmonic and the rate expected, negative below it
+   * @param mismatchHz line minus expected rate, zero within a range
+   * @param toleranceHz how large the mismatch may be
+   * @param probability that this is the cause, as far as the list of parts is complete
    */
-  public record Suspect(String part, int harmonic, double rateHz) {}
+  public record Suspect(
+      String part,
+      int harmonic,
+      double rateHz,
+      @Nullable String cause,
+      @Nullable Integer sideband,
+      @Nullable Double mismatchHz,
+      @Nullable Double toleranceHz,
+      @Nullable Double probability) {
+
+    /** A suspect of whom no more is known. */
+    public Suspect(String part, int harmonic, double rateHz) {
+      this(part, harmonic, rateHz, null, null, null, null, null);
+    }
+  }
 
   /**
    * Statistics of the periods between rising edges.
