@@ -2,6 +2,15 @@ package turnsheet.cost;
 
 import java.io.IOException;
 import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.concurrent.ExecutorService;
+import java.util.concurrent.Executors;
+import turnsheet.core.diagnose.filter.FilterDesign;
+import turnsheet.core.diagnose.filter.FilterFamily;
+import turnsheet.core.diagnose.filter.Trial;
+import turnsheet.core.diagnose.filter.TrialPlan;
+import turnsheet.core.diagnose.filter.TrialResult;
 import turnsheet.core.format.CaptureFormats;
 import turnsheet.core.format.api.ReadOptions;
 import turnsheet.core.measure.MeasureSettings;
@@ -23,6 +32,41 @@ final class Measuring {
 
   static Reading edges(Path file) throws IOException {
     return measured(file, MeasureSettings.edges(Recordings.PULSES_PER_SECOND, null));
+  }
+
+  static Reading tachometer(Path file) throws IOException {
+    return measured(file, MeasureSettings.tachometer(Recordings.PULSES_PER_SECOND, null));
+  }
+
+  /** Forty candidates at once, as many at a time as there are processors. */
+  static TrialResult trial(Path file) throws Exception {
+    List<FilterDesign> designs = new ArrayList<>();
+    for (FilterFamily family : FilterFamily.values()) {
+      for (int poles = 2; poles <= 8; poles += 2) {
+        for (int step = 0; step < 5; step++) {
+          designs.add(FilterDesign.highPass(family, poles, 100 + 100 * step));
+        }
+      }
+    }
+    int processors = Runtime.getRuntime().availableProcessors();
+    ExecutorService threads = Executors.newFixedThreadPool(processors);
+    try {
+      return new Trial(threads, processors)
+          .run(
+              () -> CaptureFormats.standard().openSamples(FileSource.of(file), OPTIONS),
+              new TrialPlan(
+                  Recordings.PULSES_PER_SECOND,
+                  Recordings.PULSES_PER_SECOND / 4,
+                  Recordings.PULSES_PER_SECOND,
+                  true,
+                  10,
+                  0,
+                  0.05,
+                  designs),
+              Progress.NONE);
+    } finally {
+      threads.shutdown();
+    }
   }
 
   private static Reading measured(Path file, MeasureSettings settings) throws IOException {

@@ -32,7 +32,7 @@ public final class Ratios {
   public static void main(String[] args) throws Exception {
     List<String> chosen =
         args.length == 0
-            ? List.of("tone", "hour", "stereo", "shell", "edges", "heap")
+            ? List.of("tone", "hour", "stereo", "shell", "edges", "trial", "heap")
             : List.of(args);
     for (String row : chosen) {
       switch (row) {
@@ -41,6 +41,7 @@ public final class Ratios {
         case "shell" -> shell();
         case "edges" -> edges();
         case "stereo" -> Channels.rows();
+        case "trial" -> trial();
         case "heap" -> heap();
         case "one" -> twoHours(1, 1);
         case "both in turn" -> twoHours(2, 1);
@@ -93,6 +94,21 @@ public final class Ratios {
     double own = least(5, () -> Measuring.edges(file));
     row("FastCSV over the edge list of 1 h", plain, 1);
     row("edge list of 1 h in process, warm", own, own / plain);
+  }
+
+  /** Asked for: within 5 times one measurement per candidate, divided by the processors. */
+  private static void trial() throws Exception {
+    Path file = Recordings.tachometer(96_000);
+    double one = least(6, () -> Measuring.tachometer(file));
+    double wallBefore = System.nanoTime() * 1e-9;
+    double all = least(2, () -> Measuring.trial(file));
+    double wall = (System.nanoTime() * 1e-9 - wallBefore) / 2;
+    row("tachometer of 60 s, 96 kHz, in process, warm", one, 1);
+    row("trial of 40 filters on it, per filter", all / 40, all / 40 / one);
+    row(
+        "the same, on the clock",
+        wall,
+        wall / (40 * one / Runtime.getRuntime().availableProcessors()));
   }
 
   private static long fields(Path file) throws IOException {

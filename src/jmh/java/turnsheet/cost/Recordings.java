@@ -53,6 +53,21 @@ final class Recordings {
         });
   }
 
+  /** A minute of a tachometer's rounded pulses with hum and noise, 24 bits. */
+  static Path tachometer(int rateHertz) {
+    return made(
+        "tachometer-" + rateHertz + "Hz.wav",
+        out -> {
+          double[] samples =
+              SignalSynth.pulses(
+                  SPEED, PULSES_PER_SECOND, rateHertz, LOOP_SECONDS, 0.4, 2, 1e-3, 1);
+          for (int i = 0; i < samples.length; i++) {
+            samples[i] += 0.05 * Math.sin(2 * Math.PI * 50 * i / rateHertz);
+          }
+          WavWriter.write(out, rateHertz, 24, samples);
+        });
+  }
+
   /** A list of edge times, one in a line, in seconds with ten decimals. */
   static Path edges(int minutes) {
     return made(

@@ -30,6 +30,10 @@ public final class CrossingReader implements EdgeReader {
   private final double rateHertz;
   private final double level;
   private final double band;
+
+  /** How far above the level a rise is timed, and how far below it a fall. */
+  private final double half;
+
   private final double[] block = new double[BLOCK];
   private int filled;
   private int taken;
@@ -56,10 +60,25 @@ public final class CrossingReader implements EdgeReader {
    * @param band how far beyond the level the waveform must go before an edge counts, not negative
    */
   public CrossingReader(SampleReader samples, double level, double band) {
+    this(samples, level, band, 0);
+  }
+
+  private CrossingReader(SampleReader samples, double level, double band, double half) {
     this.samples = samples;
     this.rateHertz = samples.sampleRateHertz();
     this.level = level;
     this.band = band;
+    this.half = half;
+  }
+
+  /**
+   * Edges as a comparator gives them: it rises where the waveform passes the level and half the
+   * hysteresis, and falls as much below the level.
+   *
+   * @param hysteresis distance of its two thresholds, in the unit of the samples, not negative
+   */
+  public static CrossingReader comparator(SampleReader samples, double level, double hysteresis) {
+    return new CrossingReader(samples, level, hysteresis / 2, hysteresis / 2);
   }
 
   @Override
@@ -71,10 +90,10 @@ public final class CrossingReader implements EdgeReader {
       if (before < 0) {
         continue;
       }
-      if (b < 0 && c >= 0) {
-        crossingUp = (before + crossing(before)) / rateHertz;
-      } else if (b >= 0 && c < 0) {
-        crossingDown = (before + crossing(before)) / rateHertz;
+      if (b < half && c >= half) {
+        crossingUp = (before + crossing(before, half)) / rateHertz;
+      } else if (b >= -half && c < -half) {
+        crossingDown = (before + crossing(before, -half)) / rateHertz;
       }
       if (side <= 0 && c > band) {
         if (side < 0 && !Double.isNaN(crossingUp)) {
@@ -125,27 +144,32 @@ public final class CrossingReader implements EdgeReader {
     return true;
   }
 
-  /** Where the waveform passes the level, as a share of the step from b to c. */
-  private double crossing(long before) {
-    double coarse = root(a, b, c, d);
+  /**
+   * Where the waveform passes a threshold, as a share of the step from b to c.
+   *
+   * @param off of the threshold from the level
+   */
+  private double crossing(long before, double off) {
+    double coarse = root(a - off, b - off, c - off, d - off);
     if (before < AHEAD || ended || isHard()) {
       return coarse;
     }
     int steps = SampleInterpolator.STEPS;
     int k = Math.min(steps - 1, (int) (coarse * steps));
-    double here = SampleInterpolator.at(ring, oldest, k);
-    double next = SampleInterpolator.at(ring, oldest, k + 1);
-    // the waveform has the sign of b to the left of the crossing and of c to its right
-    while (k > 0 && here < 0 != b < 0) {
+    double here = SampleInterpolator.at(ring, oldest, k) - off;
+    double next = SampleInterpolator.at(ring, oldest, k + 1) - off;
+    // the waveform is where b is to the left of the crossing and where c is to its right
+    boolean below = b < off;
+    while (k > 0 && here < 0 != below) {
       next = here;
-      here = SampleInterpolator.at(ring, oldest, --k);
+      here = SampleInterpolator.at(ring, oldest, --k) - off;
     }
-    while (k < steps - 1 && next < 0 == b < 0) {
+    while (k < steps - 1 && next < 0 == below) {
       here = next;
-      next = SampleInterpolator.at(ring, oldest, ++k + 1);
+      next = SampleInterpolator.at(ring, oldest, ++k + 1) - off;
     }
-    double left = SampleInterpolator.at(ring, oldest, k - 1);
-    double right = SampleInterpolator.at(ring, oldest, k + 2);
+    double left = SampleInterpolator.at(ring, oldest, k - 1) - off;
+    double right = SampleInterpolator.at(ring, oldest, k + 2) - off;
     return here < 0 == next < 0 ? coarse : (k + root(left, here, next, right)) / steps;
   }
 

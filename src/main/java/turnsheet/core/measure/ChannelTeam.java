@@ -13,10 +13,10 @@ import java.util.concurrent.atomic.AtomicIntegerArray;
 import org.jspecify.annotations.Nullable;
 
 /**
- * Threads that work on one channel each, and the caller's thread that starts them, tells the
- * progress and waits. One use.
+ * Threads that work on one channel of a capture each, or on one of any numbered pieces of work, and
+ * the caller's thread that starts them, tells the progress and waits. One use.
  */
-final class ChannelTeam<T> {
+public final class ChannelTeam<T> {
 
   private static final long LOOK_MILLISECONDS = 100;
 
@@ -35,14 +35,19 @@ final class ChannelTeam<T> {
 
   /** One channel from beginning to end. */
   @FunctionalInterface
-  interface Work<T> {
+  public interface Work<T> {
     T on(int channel, Progress progress) throws IOException;
   }
 
   /** One of the two is there, unless the channel was told to stop. */
   private record Ended<T>(int index, @Nullable T result, @Nullable Throwable failure) {}
 
-  ChannelTeam(List<Integer> channels, Work<T> work, int atOnce, Executor threads) {
+  /**
+   * @param work called for each number; may throw
+   * @param atOnce most that are worked on at the same time
+   * @param threads never waited for by the work itself
+   */
+  public ChannelTeam(List<Integer> channels, Work<T> work, int atOnce, Executor threads) {
     this.channels = channels;
     this.work = work;
     this.atOnce = atOnce;
@@ -50,8 +55,11 @@ final class ChannelTeam<T> {
     this.done = new AtomicIntegerArray(channels.size());
   }
 
-  /** The results in the order of the channels. */
-  List<T> run(ChannelMeasurement.ChannelProgress progress) throws IOException {
+  /**
+   * The results in the order of the channels. Where one fails, or progress throws, the others are
+   * stopped and have ended when the exception arrives.
+   */
+  public List<T> run(ChannelMeasurement.ChannelProgress progress) throws IOException {
     List<@Nullable T> results = new ArrayList<>(Collections.nCopies(channels.size(), null));
     try {
       for (int left = channels.size(); left > 0; ) {

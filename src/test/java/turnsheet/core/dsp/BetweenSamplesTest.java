@@ -48,6 +48,31 @@ class BetweenSamplesTest {
         .isBetween(wave.length / samplesPerTurn - 2, wave.length / samplesPerTurn + 1);
   }
 
+  /** A sine passes a threshold h above its middle asin(h) after it, and falls as much late. */
+  @Test
+  void aComparatorSwitchesAtItsThresholds() throws Exception {
+    double period = 61.3;
+    double[] wave = new double[4000];
+    for (int i = 0; i < wave.length; i++) {
+      wave[i] = 0.2 + Math.sin(2 * Math.PI * (i / period));
+    }
+    double[] times = new double[400];
+    boolean[] rising = new boolean[400];
+    int count;
+    try (EdgeReader edges = CrossingReader.comparator(samples(wave), 0.2, 0.8)) {
+      count = edges.read(times, rising);
+    }
+    assertThat(count).isGreaterThan(120);
+    double late = Math.asin(0.4) / (2 * Math.PI);
+    for (int i = 0; i < count; i++) {
+      if (times[i] > 24 && times[i] < wave.length - 24) {
+        double turns = times[i] / period - late - (rising[i] ? 0 : 0.5);
+        // away from the middle 48 taps leave 1e-4 of the peak, over a slope of 0.094 a sample
+        assertThat(Math.abs(turns - Math.rint(turns)) * period).isLessThan(1e-3);
+      }
+    }
+  }
+
   @ParameterizedTest
   @CsvSource({"600, 200", "800, 200", "1002.27, 200", "1200, 150", "2000, 200", "50, 10"})
   void fineValuesLieOnTheSine(double rate, double hertz) {
