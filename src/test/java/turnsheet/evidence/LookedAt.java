@@ -26,7 +26,7 @@ public final class LookedAt {
   public static final double HUM_HERTZ = 50.02;
 
   private static final int RATE_HERTZ = 16_000;
-  private static final double SECONDS = 12;
+  private static final double SECONDS = 20;
 
   private final SampleBench bench;
   private final Intake intake;

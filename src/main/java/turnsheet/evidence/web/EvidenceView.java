@@ -91,7 +91,8 @@ class EvidenceView {
             .findFirst()
             .orElse(null);
     Job job = evidence.job(capture.id()).orElse(null);
-    SectionView.Shown beside = new SectionView.Shown(capture.id().toString(), reading, synchronous);
+    SectionView.Beside beside =
+        new SectionView.Beside(capture.id().toString(), reading, synchronous);
     CaptureKind kind = reading.source().kind();
     return new EvidencePage(
         capture.id().toString(),
@@ -142,7 +143,7 @@ class EvidenceView {
   }
 
   private static EvidencePage.Part part(
-      SectionView view, @Nullable StoredEvidence stored, SectionView.Shown beside, Wording words) {
+      SectionView view, @Nullable StoredEvidence stored, SectionView.Beside beside, Wording words) {
     Optional<Section> section =
         Optional.ofNullable(stored).flatMap(s -> s.document().section(view.name()));
     Rejection refusal = section.map(Section::refusal).orElse(null);

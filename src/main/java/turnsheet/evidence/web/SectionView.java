@@ -31,7 +31,7 @@ public interface SectionView {
    *
    * @param section one that found something
    */
-  Object page(Section section, Shown shown, Wording words);
+  Object page(Section section, Beside beside, Wording words);
 
   /**
    * What the section is shown beside.
@@ -40,5 +40,5 @@ public interface SectionView {
    * @param reading the newest of the channel
    * @param synchronous whether the visitor says that the motor is a synchronous one
    */
-  record Shown(String captureId, Reading reading, boolean synchronous) {}
+  record Beside(String captureId, Reading reading, boolean synchronous) {}
 }

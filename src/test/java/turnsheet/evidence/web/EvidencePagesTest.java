@@ -61,11 +61,26 @@ class EvidencePagesTest {
     mvc.perform(post(address).with(csrf())).andExpect(redirectedUrl(address));
     bench.awaitLook(id);
 
-    assertThat(page(address)).contains("Look closer again").doesNotContain("??");
+    String page = page(address);
+    assertThat(page)
+        .contains("Look closer again")
+        .contains("The mains ran at (50.02")
+        .contains("<svg")
+        .doesNotContain("style=")
+        .doesNotContain("The machine's own part")
+        .doesNotContain("??");
+    // closed form: the hum says +0.04 % (50.02 Hz), the speed is +0.12 %, and
+    // 1.0012 / 1.0004 - 1 = 0.080 %
+    assertThat(page(address + "?synchronous=true").replace("&#39;", "'"))
+        .contains("The machine's own part")
+        .containsPattern(
+            "from the supply and \\(\\+0\\.0(79|80)\\d* ± [\\d.]+\\) %".replace(" ", "[ \u202f]"));
     assertThat(page(address + "?channel=7&lang=de")).doesNotContain("??");
     mvc.perform(get("/api/v1" + address))
         .andExpect(jsonPath("$[0].channel").value(1))
-        .andExpect(jsonPath("$[0].settings.kind").value("tone"));
+        .andExpect(jsonPath("$[0].settings.kind").value("tone"))
+        .andExpect(jsonPath("$[0].sections[0].name").value("mains"))
+        .andExpect(jsonPath("$[0].sections[0].found.nominalHz").value(50.0));
     mvc.perform(get("/api/v1" + address + "/job"))
         .andExpect(jsonPath("$.jobState").value("done"))
         .andExpect(jsonPath("$.over").value(true));
