@@ -2,10 +2,13 @@ package turnsheet.demo;
 
 import java.util.List;
 import org.jspecify.annotations.Nullable;
+import turnsheet.core.diagnose.parts.Drive;
+import turnsheet.core.diagnose.parts.PartKind;
 import turnsheet.core.measure.FigureName;
 import turnsheet.shop.MachineModel;
 import turnsheet.shop.ModelId;
 import turnsheet.shop.PartBasis;
+import turnsheet.shop.PartDetails;
 import turnsheet.shop.RotatingPart;
 import turnsheet.shop.ServiceLimit;
 import turnsheet.shop.SpeedSetting;
@@ -36,10 +39,43 @@ final class DemoModels {
         "Capstan with a 120-tooth ring; test point beside the servo board.",
         List.of(slow, middle, fast),
         List.of(
-            new RotatingPart("capstan", PartBasis.DIAMETER_MM, 9.096, null),
-            new RotatingPart("pinch roller", PartBasis.DIAMETER_MM, 38, null),
-            new RotatingPart("guide roller", PartBasis.DIAMETER_MM, 22, null),
-            new RotatingPart("full reel", PartBasis.DIAMETER_MM, 250, null)),
+            new RotatingPart(
+                "capstan",
+                PartKind.CAPSTAN,
+                PartBasis.DIAMETER_MM,
+                9.096,
+                null,
+                new PartDetails(0.1, null, null, null, null, null, null, null, null, null)),
+            new RotatingPart(
+                "tachometer ring",
+                PartKind.SENSOR,
+                PartBasis.TURNS_PER_TURN,
+                1,
+                "capstan",
+                PartDetails.ofCount(120)),
+            new RotatingPart(
+                "capstan bearing",
+                PartKind.BEARING,
+                PartBasis.TURNS_PER_TURN,
+                1,
+                "capstan",
+                PartDetails.ofBalls(8, 4.76, 22)),
+            new RotatingPart("pinch roller", PartKind.ROLLER, PartBasis.DIAMETER_MM, 38, null),
+            new RotatingPart("guide roller", PartKind.ROLLER, PartBasis.DIAMETER_MM, 22, null),
+            new RotatingPart(
+                "supply reel",
+                PartKind.REEL,
+                PartBasis.DIAMETER_MM,
+                250,
+                null,
+                PartDetails.ofPack(115, Drive.Winding.GIVES)),
+            new RotatingPart(
+                "take-up reel",
+                PartKind.REEL,
+                PartBasis.DIAMETER_MM,
+                250,
+                null,
+                PartDetails.ofPack(115, Drive.Winding.TAKES_UP))),
         List.of(
             limit(slow, FigureName.DEVIATION, 0.3),
             limit(slow, FigureName.WEIGHTED_TWO_SIGMA, 0.12),
@@ -59,9 +95,12 @@ final class DemoModels {
         "Belt drive from a synchronous motor.",
         List.of(long33, single),
         List.of(
-            new RotatingPart("platter", PartBasis.TURNS_PER_TURN, 1, null),
-            new RotatingPart("belt", PartBasis.TURNS_PER_TURN, 1.55, "platter"),
-            new RotatingPart("motor pulley", PartBasis.TURNS_PER_TURN, 10, "platter")),
+            new RotatingPart("platter", PartKind.PLATTER, PartBasis.TURNS_PER_TURN, 1, null),
+            new RotatingPart(
+                "belt", PartKind.BELT, PartBasis.LENGTH_MM, 568, "platter", PartDetails.ofRim(280)),
+            new RotatingPart("motor", PartKind.MOTOR, PartBasis.MAINS_POLE_PAIRS, 9, null),
+            new RotatingPart(
+                "motor pulley", PartKind.PULLEY, PartBasis.TURNS_PER_TURN, 1, "motor")),
         List.of(
             limit(long33, FigureName.DEVIATION, 0.5),
             limit(long33, FigureName.WEIGHTED_TWO_SIGMA, 0.1),
@@ -79,8 +118,16 @@ final class DemoModels {
         "The tachometer sits on the motor; the belt turns the capstan.",
         List.of(only),
         List.of(
-            new RotatingPart("capstan", PartBasis.DIAMETER_MM, 2.5, null),
-            new RotatingPart("belt", PartBasis.FIXED_PER_MINUTE, 114, null)),
+            new RotatingPart("capstan", PartKind.CAPSTAN, PartBasis.DIAMETER_MM, 2.5, null),
+            new RotatingPart(
+                "belt", PartKind.BELT, PartBasis.LENGTH_MM, 231, "capstan", PartDetails.ofRim(23)),
+            new RotatingPart(
+                "motor",
+                PartKind.MOTOR,
+                PartBasis.TURNS_PER_TURN,
+                3.4,
+                "capstan",
+                PartDetails.ofCount(3))),
         List.of(
             limit(only, FigureName.DEVIATION, 1.5),
             limit(only, FigureName.WEIGHTED_TWO_SIGMA, 0.25)));

@@ -21,7 +21,7 @@ import org.springframework.transaction.support.TransactionTemplate;
 public final class Export {
 
   static final String FORMAT = "turnsheet-export";
-  static final int VERSION = 1;
+  static final int VERSION = 2;
 
   /** A reading has some twenty kilobytes. */
   static final int AT_ONCE = 50;

@@ -32,6 +32,7 @@ final class ExportReader {
           + "\".";
 
   private final JsonParser json;
+  private int documentVersion = Export.VERSION;
 
   private ExportReader(JsonParser json) {
     this.json = json;
@@ -83,7 +84,8 @@ final class ExportReader {
         || !version.digits().matches("[1-9][0-9]{0,8}")) {
       throw refused("the version of the format should be a whole number.");
     }
-    if (Integer.parseInt(version.digits()) > Export.VERSION) {
+    documentVersion = Integer.parseInt(version.digits());
+    if (documentVersion > Export.VERSION) {
       throw new RefusedFileException(
           "newerExport",
           "The file is of version %s of the export, and this service reads versions up to %d: bring"
@@ -118,7 +120,7 @@ final class ExportReader {
     }
   }
 
-  private static Entry entry(Kind kind, @Nullable Object value) {
+  private Entry entry(Kind kind, @Nullable Object value) {
     Map<?, ?> object = object(value);
     Set<String> known = new HashSet<>();
     Map<String, @Nullable Object> values = values(kind.members(), object, known);
@@ -140,10 +142,14 @@ final class ExportReader {
     return new Entry(kind, values, parts);
   }
 
-  private static Map<String, @Nullable Object> values(
+  private Map<String, @Nullable Object> values(
       List<Member> members, Map<?, ?> object, Set<String> known) {
     Map<String, @Nullable Object> values = new LinkedHashMap<>();
     for (Member member : members) {
+      if (member.since() > documentVersion) {
+        values.put(member.name(), null);
+        continue;
+      }
       known.add(member.name());
       if (!object.containsKey(member.name())) {
         throw new IllegalArgumentException("'" + member.name() + "' is missing");

@@ -1,6 +1,7 @@
 package turnsheet.exchange;
 
 import static turnsheet.exchange.Member.decimal;
+import static turnsheet.exchange.Member.document;
 import static turnsheet.exchange.Member.id;
 import static turnsheet.exchange.Member.text;
 import static turnsheet.exchange.Member.time;
@@ -78,7 +79,9 @@ final class Kinds {
                       text("name"),
                       text("basis"),
                       decimal("amount"),
-                      text("referencePart").orNull())),
+                      text("referencePart").orNull(),
+                      text("kind").orNull().since(2),
+                      document("details").orNull().since(2))),
               new Part(
                   "limits",
                   "service_limit",

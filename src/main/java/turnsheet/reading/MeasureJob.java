@@ -11,6 +11,7 @@ import org.slf4j.Logger;
 import org.slf4j.LoggerFactory;
 import org.springframework.stereotype.Component;
 import org.springframework.transaction.support.TransactionOperations;
+import turnsheet.access.ShopPreferences;
 import turnsheet.capture.Capture;
 import turnsheet.capture.CaptureChoices;
 import turnsheet.capture.CaptureId;
@@ -18,15 +19,12 @@ import turnsheet.capture.CaptureState;
 import turnsheet.capture.CaptureStore;
 import turnsheet.capture.Captures;
 import turnsheet.capture.Looked;
-import turnsheet.core.diagnose.RotatingPart;
-import turnsheet.core.diagnose.Suspects;
 import turnsheet.core.measure.ChannelMeasurement;
 import turnsheet.core.measure.HeapNeed;
 import turnsheet.core.measure.Reading;
 import turnsheet.core.signal.Rejection;
 import turnsheet.job.JobHandler;
 import turnsheet.job.JobRun;
-import turnsheet.shop.MachineModel;
 import turnsheet.shop.MachineModels;
 import turnsheet.shop.SpeedSettingId;
 
@@ -46,6 +44,7 @@ class MeasureJob implements JobHandler {
   private final MachineModels models;
   private final Readings readings;
   private final CaptureChannels channels;
+  private final ShopPreferences preferences;
   private final TransactionOperations transactions;
 
   MeasureJob(
@@ -55,6 +54,7 @@ class MeasureJob implements JobHandler {
       MachineModels models,
       Readings readings,
       CaptureChannels channels,
+      ShopPreferences preferences,
       TransactionOperations transactions) {
     this.captures = captures;
     this.store = store;
@@ -62,6 +62,7 @@ class MeasureJob implements JobHandler {
     this.models = models;
     this.readings = readings;
     this.channels = channels;
+    this.preferences = preferences;
     this.transactions = transactions;
   }
 
@@ -158,22 +159,11 @@ class MeasureJob implements JobHandler {
     captures.failed(new CaptureId(subject), sentence);
   }
 
-  /** Parts turn as much too fast or too slow as the unit does. */
   private Reading withSuspects(Reading reading, SpeedSettingId settingId) {
-    Double deviation = reading.speed().deviationPercent().value();
-    List<RotatingPart> parts =
-        models.ofSetting(settingId).stream()
-            .flatMap(model -> partsAt(model, settingId).stream())
-            .map(part -> part.atDeviation(deviation == null ? 0 : deviation))
-            .toList();
-    return reading.withLines(
-        Suspects.name(reading.lines(), parts, reading.source().durationSeconds()));
-  }
-
-  private static List<RotatingPart> partsAt(MachineModel model, SpeedSettingId settingId) {
-    return model.setting(settingId).stream()
-        .flatMap(setting -> model.partRatesAt(setting).stream())
-        .map(rate -> new RotatingPart(rate.part(), rate.rateHertz()))
-        .toList();
+    return models
+        .ofSetting(settingId)
+        .flatMap(m -> MachineInCapture.of(m, settingId, reading, preferences.get().mainsHz()))
+        .map(machine -> machine.suspectsIn(reading))
+        .orElse(reading);
   }
 }

@@ -5,6 +5,8 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.stream.Stream;
 import org.jspecify.annotations.Nullable;
+import turnsheet.core.diagnose.parts.Kinematics;
+import turnsheet.core.diagnose.parts.Turning;
 
 /**
  * A kind of machine with all that belongs to it. Whatever is returned obeys the rules: labels and
@@ -75,33 +77,12 @@ public record MachineModel(
   }
 
   /**
-   * Turns per second of a part at a speed setting; empty where it follows from something that the
-   * setting does not have, such as a roller's from a turning rate.
+   * How often a part turns at a speed setting that is kept exactly; empty where it follows from
+   * something that the setting does not have, such as a roller's from a turning rate.
    */
-  public OptionalDouble rateHertzAt(RotatingPart part, SpeedSetting setting) {
-    return switch (part.basis()) {
-      // 10 mm to the centimetre
-      case DIAMETER_MM -> scaled(setting.tapeSpeedCmPerS(), 10 / (Math.PI * part.amount()));
-      case FIXED_PER_MINUTE -> OptionalDouble.of(part.amount() / 60);
-      case TURNS_PER_TURN -> {
-        String reference = part.referencePart();
-        yield scaled(
-            reference == null
-                ? setting.turnsPerSecond()
-                : rateHertzAt(part(reference).orElseThrow(), setting),
-            part.amount());
-      }
-    };
-  }
-
-  /** The parts whose rate is known at a speed setting. */
-  public List<PartRate> partRatesAt(SpeedSetting setting) {
-    return parts.stream()
-        .flatMap(
-            part ->
-                rateHertzAt(part, setting).stream()
-                    .mapToObj(rate -> new PartRate(part.name(), rate)))
-        .toList();
+  public Optional<Turning> turningAt(RotatingPart part, SpeedSetting setting, double mainsHertz) {
+    return new Kinematics(PartMotion.parts(this), PartMotion.nominal(setting, mainsHertz))
+        .of(PartMotion.part(part));
   }
 
   public MachineModel describe(String newName, @Nullable Integer pulses, String newNote) {
@@ -180,14 +161,6 @@ public record MachineModel(
   }
 
   private static RotatingPart follow(RotatingPart part, String oldName, String newName) {
-    return oldName.equals(part.referencePart())
-        ? new RotatingPart(part.name(), part.basis(), part.amount(), newName)
-        : part;
-  }
-
-  private static OptionalDouble scaled(OptionalDouble value, double factor) {
-    return value.isPresent()
-        ? OptionalDouble.of(value.getAsDouble() * factor)
-        : OptionalDouble.empty();
+    return oldName.equals(part.referencePart()) ? part.following(newName) : part;
   }
 }

@@ -9,9 +9,12 @@ import java.util.List;
 import java.util.Map;
 import java.util.Objects;
 import java.util.UUID;
+import org.jspecify.annotations.Nullable;
 import org.springframework.jdbc.core.RowMapper;
 import org.springframework.jdbc.core.simple.JdbcClient;
+import turnsheet.core.diagnose.parts.PartKind;
 import turnsheet.core.measure.FigureName;
+import turnsheet.document.CoreJson;
 
 /** The four tables of a machine model. */
 final class ModelRows {
@@ -144,8 +147,9 @@ final class ModelRows {
     for (RotatingPart part : model.parts()) {
       jdbc.sql(
               """
-              insert into rotating_part (model_id, position, name, basis, amount, reference_part)
-              values (?, ?, ?, ?, ?, ?)
+              insert into rotating_part
+                (model_id, position, name, basis, amount, reference_part, kind, details)
+              values (?, ?, ?, ?, ?, ?, ?, ?)
               """)
           .param(1, model.id().value())
           .param(2, position++)
@@ -153,6 +157,8 @@ final class ModelRows {
           .param(4, part.basis().name())
           .param(5, part.amount())
           .param(6, part.referencePart(), Types.VARCHAR)
+          .param(7, part.kind() == PartKind.OTHER ? null : part.kind().name(), Types.VARCHAR)
+          .param(8, json(part.details()), Types.VARCHAR)
           .update();
     }
     position = 0;
@@ -198,11 +204,19 @@ final class ModelRows {
   }
 
   private static RotatingPart part(ResultSet row, int number) throws SQLException {
+    String kind = row.getString("kind");
+    String details = row.getString("details");
     return new RotatingPart(
         row.getString("name"),
+        kind == null ? PartKind.OTHER : PartKind.valueOf(kind),
         PartBasis.valueOf(row.getString("basis")),
         row.getDouble("amount"),
-        row.getString("reference_part"));
+        row.getString("reference_part"),
+        details == null ? PartDetails.NONE : CoreJson.fromJson(details, PartDetails.class));
+  }
+
+  private static @Nullable String json(PartDetails details) {
+    return details.equals(PartDetails.NONE) ? null : CoreJson.toJson(details);
   }
 
   private static ServiceLimit limit(ResultSet row, int number) throws SQLException {

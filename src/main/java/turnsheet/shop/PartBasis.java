@@ -7,5 +7,9 @@ public enum PartBasis {
   /** it turns so many times per turn of another part, or of the machine's nominal rotation */
   TURNS_PER_TURN,
   /** it turns at a rate of its own, whatever the speed setting */
-  FIXED_PER_MINUTE
+  FIXED_PER_MINUTE,
+  /** a belt that comes round in its length, on the rim of another part or at tape speed */
+  LENGTH_MM,
+  /** a motor with so many pole pairs on the mains */
+  MAINS_POLE_PAIRS
 }

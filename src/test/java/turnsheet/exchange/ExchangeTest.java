@@ -79,6 +79,39 @@ class ExchangeTest {
     assertThat(reports.pdf(2, report -> new byte[] {1})).hasValue(new byte[] {1});
   }
 
+  /** As services wrote it before parts had kinds. */
+  @Test
+  void aDocumentOfVersion1IsReadWithPartsOfNoKind() throws IOException {
+    String old =
+        everything
+            .replace("\"version\": 2", "\"version\": 1")
+            .replaceAll(
+                "(\"name\": ?\"capstan shaft\"[^}]*?), ?\"kind\": ?null, ?\"details\": ?null",
+                "$1");
+    assertThat(old).doesNotContain("details");
+    database.empty();
+
+    assertThat(take(old).complete()).isTrue();
+    assertThat(json(Scope.everything())).isEqualTo(everything);
+  }
+
+  @Test
+  void kindsOfPartsTravel() throws IOException {
+    jdbc.sql("update rotating_part set kind = 'GEAR', basis = 'TURNS_PER_TURN', details = ?")
+        .param("{\"count\":24}")
+        .update();
+    String with = json(Scope.everything());
+    assertThat(with).contains("GEAR", "\"count\"");
+    database.empty();
+    assertThat(take(with).complete()).isTrue();
+    assertThat(json(Scope.everything())).isEqualTo(with);
+    database.empty();
+    // a gear with no teeth breaks a rule of the shop
+    org.assertj.core.api.Assertions.assertThatThrownBy(
+            () -> take(with.replaceAll("\"count\": ?24", "\"count\":-1")))
+        .isInstanceOf(RefusedFileException.class);
+  }
+
   @Test
   void takenInTwiceNothingIsAdded() throws IOException {
     ImportResult result = take(everything);

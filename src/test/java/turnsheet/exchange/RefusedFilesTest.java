@@ -104,7 +104,7 @@ class RefusedFilesTest {
     refused("[1, 2]", "foreignFile", "\"format\"");
     refused("RIFF....WAVE", "foreignFile", "no export");
     refused("{\"format\": \"other\"}", "foreignFile", "no export");
-    refused(everything.replace("\"version\": 1", "\"version\": 2"), "newerExport", "version 2");
+    refused(everything.replace("\"version\": 2", "\"version\": 3"), "newerExport", "version 3");
     refused(everything + "x", "brokenExport", "Line ");
     refused(
         everything.replaceFirst("\"note\":", "\"notes\":"), "brokenExport", "'note' is missing");

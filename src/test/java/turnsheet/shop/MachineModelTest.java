@@ -4,10 +4,12 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.within;
 
-import java.util.stream.DoubleStream;
+import org.jspecify.annotations.Nullable;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import turnsheet.core.diagnose.parts.Drive;
+import turnsheet.core.diagnose.parts.PartKind;
 import turnsheet.core.measure.FigureName;
 
 class MachineModelTest {
@@ -32,8 +34,7 @@ class MachineModelTest {
     RotatingPart part = new RotatingPart("capstan", PartBasis.DIAMETER_MM, diameterMm, null);
     SpeedSetting setting = ShopFixture.tape("play", cmPerS, null);
     MachineModel model = MachineModel.named("Transport", null, "").withPart(part);
-    assertThat(model.rateHertzAt(part, setting).getAsDouble())
-        .isCloseTo(rateHertz, within(HALF_A_DIGIT));
+    assertThat(rate(model, part, setting)).isCloseTo(rateHertz, within(HALF_A_DIGIT));
   }
 
   /** Common practice, no source: a ring of 120 teeth on a capstan shaft of 9.096 mm. */
@@ -42,7 +43,7 @@ class MachineModelTest {
   void ringOf120TeethGivesItsCommonPulseRates(double cmPerS, double pulsesPerSecond) {
     RotatingPart capstan = new RotatingPart("capstan", PartBasis.DIAMETER_MM, 9.096, null);
     MachineModel model = MachineModel.named("Transport", 120, "").withPart(capstan);
-    double rate = model.rateHertzAt(capstan, ShopFixture.tape("play", cmPerS, null)).getAsDouble();
+    double rate = rate(model, capstan, ShopFixture.tape("play", cmPerS, null));
     // the diameter is given to 0.001 mm, so to 5.5e-5 of itself
     assertThat(120 * rate).isCloseTo(pulsesPerSecond, within(pulsesPerSecond * 5.5e-5));
   }
@@ -53,7 +54,7 @@ class MachineModelTest {
   void platterTurnsAtItsNominalRotation(double revPerMin, double rateHertz) {
     RotatingPart platter = new RotatingPart("platter", PartBasis.TURNS_PER_TURN, 1, null);
     MachineModel model = MachineModel.named("Player", null, "").withPart(platter);
-    assertThat(model.rateHertzAt(platter, ShopFixture.platter("play", revPerMin)).getAsDouble())
+    assertThat(rate(model, platter, ShopFixture.platter("play", revPerMin)))
         .isCloseTo(rateHertz, within(0.00005));
   }
 
@@ -81,19 +82,11 @@ class MachineModelTest {
             .withPart(new RotatingPart("motor", PartBasis.TURNS_PER_TURN, 4, "flywheel"))
             .withPart(new RotatingPart("fan", PartBasis.FIXED_PER_MINUTE, 1500, null));
     double capstan = 47.625 / (Math.PI * 2);
-    assertThat(model.partRatesAt(setting))
-        .extracting(PartRate::part)
-        .containsExactly("capstan", "flywheel", "motor", "fan");
-    assertThat(model.partRatesAt(setting))
-        .extracting(PartRate::rateHertz)
-        .satisfies(
-            rates -> {
-              double[] expected = DoubleStream.of(capstan, capstan, 4 * capstan, 25).toArray();
-              for (int i = 0; i < expected.length; i++) {
-                // a few roundings of double
-                assertThat(rates.get(i)).isCloseTo(expected[i], within(1e-12));
-              }
-            });
+    double[] expected = {capstan, capstan, 4 * capstan, 25};
+    for (int i = 0; i < expected.length; i++) {
+      // a few roundings of double
+      assertThat(rate(model, model.parts().get(i), setting)).isCloseTo(expected[i], within(1e-12));
+    }
   }
 
   @Test
@@ -101,12 +94,66 @@ class MachineModelTest {
     RotatingPart roller = new RotatingPart("roller", PartBasis.DIAMETER_MM, 8, null);
     RotatingPart platter = new RotatingPart("platter", PartBasis.TURNS_PER_TURN, 1, null);
     MachineModel model = MachineModel.named("Odd", null, "").withPart(roller).withPart(platter);
-    assertThat(model.partRatesAt(ShopFixture.platter("33", 33)))
-        .extracting(PartRate::part)
-        .containsExactly("platter");
-    assertThat(model.partRatesAt(ShopFixture.tape("19", 19.05, null)))
-        .extracting(PartRate::part)
-        .containsExactly("roller");
+    SpeedSetting turning = ShopFixture.platter("33", 33);
+    SpeedSetting tape = ShopFixture.tape("19", 19.05, null);
+    assertThat(model.turningAt(roller, turning, 50)).isEmpty();
+    assertThat(model.turningAt(platter, turning, 50)).isPresent();
+    assertThat(model.turningAt(roller, tape, 50)).isPresent();
+    assertThat(model.turningAt(platter, tape, 50)).isEmpty();
+  }
+
+  /**
+   * 50 Hz on two pole pairs are 25 turns; 20 mm on a belt of 500 mm go round 0.1257 times a turn.
+   */
+  @Test
+  void aMotorOnTheMainsTurnsABelt() {
+    SpeedSetting setting = ShopFixture.tape("19", 19.05, null);
+    MachineModel model =
+        MachineModel.named("Belted", null, "")
+            .withPart(
+                new RotatingPart("motor", PartKind.MOTOR, PartBasis.MAINS_POLE_PAIRS, 2, null))
+            .withPart(
+                new RotatingPart(
+                    "belt",
+                    PartKind.BELT,
+                    PartBasis.LENGTH_MM,
+                    500,
+                    "motor",
+                    PartDetails.ofRim(20)));
+    assertThat(rate(model, model.parts().get(0), setting)).isCloseTo(25, within(1e-12));
+    assertThat(rate(model, model.parts().get(1), setting)).isCloseTo(3.1416, within(5e-5));
+    assertThat(model.turningAt(model.parts().get(0), setting, 60).orElseThrow().hertz())
+        .isCloseTo(30, within(1e-12));
+  }
+
+  @Test
+  void refusesNumbersThatDoNotFitTogether() {
+    assertRefused("partBasis", () -> part(PartKind.REEL, PartBasis.TURNS_PER_TURN, null));
+    assertRefused("partBasis", () -> part(PartKind.ROLLER, PartBasis.LENGTH_MM, null));
+    assertRefused(
+        "partPack",
+        () ->
+            part(
+                PartKind.REEL,
+                PartBasis.DIAMETER_MM,
+                PartDetails.ofPack(300, Drive.Winding.GIVES)));
+    assertRefused("partBelt", () -> part(PartKind.BELT, PartBasis.LENGTH_MM, PartDetails.ofRim(8)));
+    assertRefused(
+        "partBalls",
+        () -> part(PartKind.BEARING, PartBasis.FIXED_PER_MINUTE, PartDetails.ofCount(8)));
+    assertRefused(
+        "partBalls",
+        () -> part(PartKind.BEARING, PartBasis.FIXED_PER_MINUTE, PartDetails.ofBalls(8, 9, 8)));
+    assertRefused(
+        "partCount", () -> part(PartKind.GEAR, PartBasis.FIXED_PER_MINUTE, PartDetails.ofCount(0)));
+    assertRefused(
+        "partPoles",
+        () -> new RotatingPart("m", PartKind.MOTOR, PartBasis.MAINS_POLE_PAIRS, 1.5, null));
+  }
+
+  private static RotatingPart part(PartKind kind, PartBasis basis, @Nullable PartDetails details) {
+    return new RotatingPart(
+        "it", kind, basis, 250, null, details == null ? PartDetails.NONE : details);
   }
 
   @Test
@@ -152,5 +199,9 @@ class MachineModelTest {
     assertThatThrownBy(call)
         .isInstanceOfSatisfying(
             RefusedChangeException.class, e -> assertThat(e.code()).isEqualTo(code));
+  }
+
+  private static double rate(MachineModel model, RotatingPart part, SpeedSetting setting) {
+    return model.turningAt(part, setting, 50).orElseThrow().hertz();
   }
 }

@@ -122,7 +122,7 @@ class MachineModelsTest {
             ModelSummary::units)
         .containsExactly(
             org.assertj.core.groups.Tuple.tuple("A bare one", 0, 0, 0, 0),
-            org.assertj.core.groups.Tuple.tuple("Transport for 1001", 2, 3, 2, 1));
+            org.assertj.core.groups.Tuple.tuple("Transport for 1001", 2, 5, 2, 1));
     assertThat(models.wholePage(new PageQuery("transport", 1, 10)).items())
         .containsExactly(models.find(unit.modelId()).orElseThrow());
   }

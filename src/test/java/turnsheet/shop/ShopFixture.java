@@ -5,6 +5,8 @@ import java.time.Instant;
 import java.time.ZoneOffset;
 import java.util.List;
 import org.jspecify.annotations.Nullable;
+import turnsheet.core.diagnose.parts.Drive;
+import turnsheet.core.diagnose.parts.PartKind;
 import turnsheet.core.measure.FigureName;
 import turnsheet.testing.Database;
 
@@ -45,6 +47,22 @@ final class ShopFixture {
         .withPart(new RotatingPart("capstan", PartBasis.DIAMETER_MM, 9.096, null))
         .withPart(new RotatingPart("flywheel idler", PartBasis.TURNS_PER_TURN, 0.25, "capstan"))
         .withPart(new RotatingPart("motor", PartBasis.FIXED_PER_MINUTE, 1450, null))
+        .withPart(
+            new RotatingPart(
+                "reel",
+                PartKind.REEL,
+                PartBasis.DIAMETER_MM,
+                250,
+                null,
+                PartDetails.ofPack(110, Drive.Winding.TAKES_UP)))
+        .withPart(
+            new RotatingPart(
+                "bearing",
+                PartKind.BEARING,
+                PartBasis.TURNS_PER_TURN,
+                1,
+                "capstan",
+                new PartDetails(2.0, 8, null, null, null, 4.76, 22.0, 12.5, null, null)))
         .withLimit(
             new ServiceLimit(slow.id(), FigureName.WEIGHTED_TWO_SIGMA, 0.12, "rule of the shop"))
         .withLimit(

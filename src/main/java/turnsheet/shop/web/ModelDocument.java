@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.UUID;
 import org.jspecify.annotations.Nullable;
 import turnsheet.shop.MachineModel;
+import turnsheet.shop.PartDetails;
 import turnsheet.shop.RotatingPart;
 import turnsheet.shop.ServiceLimit;
 import turnsheet.shop.SpeedSetting;
@@ -56,17 +57,27 @@ record ModelDocument(
   }
 
   /**
-   * One of the three numbers is given, the others null.
+   * One of the five numbers is given, the others null.
    *
-   * @param turnsOf name of the part whose turns are counted; null for the nominal rotation
+   * @param kind capstan, roller, idler, belt, pulley, platter, motor, reel, gear, bearing, sensor
+   *     or other; null for other
+   * @param lengthMm of a belt
+   * @param mainsPolePairs of a motor on the mains
+   * @param turnsOf name of the part whose turns are counted, or on which a belt lies; null for the
+   *     nominal rotation, or tape speed
+   * @param details numbers of the kind; null where there are none
    * @param rates told by the service, not read
    */
   record Part(
       @NotBlank @Size(max = RotatingPart.NAME_LENGTH) String name,
+      @Nullable String kind,
       @Nullable @Positive Double diameterMm,
       @Nullable @Positive Double turnsPerTurn,
       @Nullable @Positive Double turnsPerMinute,
+      @Nullable @Positive Double lengthMm,
+      @Nullable @Positive Integer mainsPolePairs,
       @Nullable @Size(max = RotatingPart.NAME_LENGTH) String turnsOf,
+      @Nullable PartDetails details,
       @Nullable List<Rate> rates) {
 
     Part {
@@ -74,8 +85,15 @@ record ModelDocument(
     }
   }
 
-  /** How often a part turns at a speed setting. */
-  record Rate(String speedSetting, double rateHz) {}
+  /**
+   * How often a part turns at a speed setting.
+   *
+   * @param rateHz the middle, where it has a range
+   * @param lowHz low end of the range of a reel or an induction motor; null for others
+   * @param highHz high end of it
+   */
+  record Rate(
+      String speedSetting, double rateHz, @Nullable Double lowHz, @Nullable Double highHz) {}
 
   /**
    * @param speedSetting label of the setting

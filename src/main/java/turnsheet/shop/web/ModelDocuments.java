@@ -4,15 +4,11 @@ import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
-import java.util.Objects;
 import java.util.UUID;
-import java.util.stream.Stream;
 import org.springframework.stereotype.Component;
 import turnsheet.core.measure.FigureName;
 import turnsheet.shop.MachineModel;
 import turnsheet.shop.ModelId;
-import turnsheet.shop.PartBasis;
-import turnsheet.shop.RotatingPart;
 import turnsheet.shop.ServiceLimit;
 import turnsheet.shop.SpeedSetting;
 import turnsheet.shop.SpeedSettingId;
@@ -23,9 +19,11 @@ import turnsheet.shop.SpeedUnit;
 class ModelDocuments {
 
   private final Refusals refusals;
+  private final PartDocuments parts;
 
-  ModelDocuments(Refusals refusals) {
+  ModelDocuments(Refusals refusals, PartDocuments parts) {
     this.refusals = refusals;
+    this.parts = parts;
   }
 
   /** What was sent, in the place of a model or as a new one; settings keep their ids by label. */
@@ -42,7 +40,7 @@ class ModelDocuments {
         sent.pulsesPerTurn(),
         sent.note(),
         settings,
-        sent.rotatingParts().stream().map(this::part).toList(),
+        sent.rotatingParts().stream().map(parts::read).toList(),
         sent.serviceLimits().stream().map(l -> limit(l, settings)).toList());
   }
 
@@ -53,14 +51,14 @@ class ModelDocuments {
         new MachineModel(ModelId.next(), sent.name(), null, "", List.of(), List.of(), List.of()));
   }
 
-  static ModelDocument write(MachineModel model) {
+  ModelDocument write(MachineModel model) {
     return new ModelDocument(
         model.id().value(),
         model.name(),
         model.pulsesPerTurn(),
         model.note(),
         model.settings().stream().map(ModelDocuments::setting).toList(),
-        model.parts().stream().map(p -> part(model, p)).toList(),
+        model.parts().stream().map(p -> parts.write(model, p)).toList(),
         model.limits().stream().map(l -> limit(model, l)).toList());
   }
 
@@ -88,31 +86,6 @@ class ModelDocuments {
     throw refusals.answer("speedOnce", sent.label());
   }
 
-  private RotatingPart part(ModelDocument.Part sent) {
-    long given =
-        Stream.of(sent.diameterMm(), sent.turnsPerTurn(), sent.turnsPerMinute())
-            .filter(Objects::nonNull)
-            .count();
-    if (given != 1) {
-      throw refusals.answer("partOnce", sent.name());
-    }
-    Double turns = sent.turnsPerTurn();
-    if (turns != null) {
-      return new RotatingPart(sent.name(), PartBasis.TURNS_PER_TURN, turns, sent.turnsOf());
-    }
-    if (sent.turnsOf() != null) {
-      throw refusals.answer("turnsOfAlone", sent.name());
-    }
-    Double diameter = sent.diameterMm();
-    return diameter != null
-        ? new RotatingPart(sent.name(), PartBasis.DIAMETER_MM, diameter, null)
-        : new RotatingPart(
-            sent.name(),
-            PartBasis.FIXED_PER_MINUTE,
-            Objects.requireNonNull(sent.turnsPerMinute()),
-            null);
-  }
-
   private ServiceLimit limit(ModelDocument.Limit sent, List<SpeedSetting> settings) {
     FigureName figure =
         FigureName.ofPath(sent.figure())
@@ -135,22 +108,6 @@ class ModelDocuments {
         tape ? null : setting.nominalSpeed(),
         setting.toneHz(),
         setting.pulsesPerSecond());
-  }
-
-  private static ModelDocument.Part part(MachineModel model, RotatingPart part) {
-    List<ModelDocument.Rate> rates = new ArrayList<>();
-    for (SpeedSetting setting : model.settings()) {
-      model
-          .rateHertzAt(part, setting)
-          .ifPresent(rate -> rates.add(new ModelDocument.Rate(setting.label(), rate)));
-    }
-    return new ModelDocument.Part(
-        part.name(),
-        part.basis() == PartBasis.DIAMETER_MM ? part.amount() : null,
-        part.basis() == PartBasis.TURNS_PER_TURN ? part.amount() : null,
-        part.basis() == PartBasis.FIXED_PER_MINUTE ? part.amount() : null,
-        part.referencePart(),
-        rates);
   }
 
   private static ModelDocument.Limit limit(MachineModel model, ServiceLimit limit) {

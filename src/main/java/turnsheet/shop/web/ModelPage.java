@@ -33,10 +33,17 @@ record ModelPage(
 
   /**
    * @param turnsOf the part whose turns are counted; null where none is
+   * @param empty diameter of the bare hub of a reel; empty where there is none
    * @param ratesHz at each setting; a dash where unknown
    */
   record PartRow(
-      String name, String basis, String amount, @Nullable String turnsOf, List<String> ratesHz) {}
+      String name,
+      String kind,
+      String basis,
+      String amount,
+      @Nullable String turnsOf,
+      String empty,
+      List<String> ratesHz) {}
 
   record LimitRow(
       String settingId,

@@ -6,17 +6,22 @@ import java.util.Locale;
 import java.util.OptionalDouble;
 import java.util.UUID;
 import java.util.stream.Stream;
+import org.jspecify.annotations.Nullable;
 import org.springframework.context.MessageSource;
 import org.springframework.context.i18n.LocaleContextHolder;
 import org.springframework.stereotype.Component;
 import org.springframework.ui.Model;
 import turnsheet.access.ShopPreferences;
+import turnsheet.core.diagnose.parts.Drive;
+import turnsheet.core.diagnose.parts.PartKind;
+import turnsheet.core.diagnose.parts.Turning;
 import turnsheet.core.measure.FigureName;
 import turnsheet.shop.MachineModel;
 import turnsheet.shop.MachineModels;
 import turnsheet.shop.ModelId;
 import turnsheet.shop.PageQuery;
 import turnsheet.shop.PartBasis;
+import turnsheet.shop.PartRules;
 import turnsheet.shop.RotatingPart;
 import turnsheet.shop.ServiceLimit;
 import turnsheet.shop.SpeedSetting;
@@ -29,6 +34,13 @@ import turnsheet.web.NotFoundException;
 class ModelScreen {
 
   static final String PAGE = "shop/model";
+
+  /** All that a part can be, as the pages offer them. */
+  private static final List<String> KINDS =
+      Arrays.stream(PartKind.values())
+          .filter(k -> k != PartKind.MAINS)
+          .map(PartKind::name)
+          .toList();
 
   /** What a part's rate is at a setting that it does not follow from. */
   private static final String UNKNOWN = "\u2013";
@@ -67,7 +79,6 @@ class ModelScreen {
     addChoices(model, screen);
     screen.addAttribute("typical", typical.of(model, LocaleContextHolder.getLocale()));
     addUnlessTyped(screen, "settingForm", SettingForm.empty(preferences.get().speeds()));
-    addUnlessTyped(screen, "partForm", PartForm.EMPTY);
     addUnlessTyped(screen, "limitForm", LimitForm.EMPTY);
     return PAGE;
   }
@@ -78,9 +89,17 @@ class ModelScreen {
     screen.addAttribute(
         "speedUnits",
         List.of(SpeedUnit.CM_PER_S.name(), SettingForm.IN_PER_S, SpeedUnit.REV_PER_MIN.name()));
-    screen.addAttribute("bases", Arrays.stream(PartBasis.values()).map(PartBasis::name).toList());
+    screen.addAttribute("kinds", KINDS);
     screen.addAttribute("figures", Stream.of(FigureName.values()).map(this::figure).toList());
     screen.addAttribute("knownSpeeds", KnownSpeed.ALL);
+  }
+
+  /** What the form of a part of a kind asks for. */
+  void addPartFields(PartKind kind, Model screen) {
+    screen.addAttribute("kind", kind.name());
+    screen.addAttribute("bases", PartRules.bases(kind).stream().map(PartBasis::name).toList());
+    screen.addAttribute(
+        "windings", Arrays.stream(Drive.Winding.values()).map(Drive.Winding::name).toList());
   }
 
   private Choice figure(FigureName figure) {
@@ -113,16 +132,28 @@ class ModelScreen {
         pulses.isPresent() && setting.pulsesPerSecond() == null);
   }
 
-  private static ModelPage.PartRow partRow(MachineModel model, RotatingPart part) {
+  private ModelPage.PartRow partRow(MachineModel model, RotatingPart part) {
+    int mains = preferences.get().mainsHz();
     return new ModelPage.PartRow(
         part.name(),
+        part.kind().name(),
         part.basis().name(),
         SpeedText.digits(part.amount()),
         part.referencePart(),
+        digits(part.details().emptyMm()),
         model.settings().stream()
-            .map(s -> model.rateHertzAt(part, s))
-            .map(rate -> rate.isPresent() ? SpeedText.hertz(rate.getAsDouble()) : UNKNOWN)
+            .map(s -> model.turningAt(part, s, mains).map(ModelScreen::hertz).orElse(UNKNOWN))
             .toList());
+  }
+
+  private static String digits(@Nullable Double number) {
+    return number == null ? "" : SpeedText.digits(number);
+  }
+
+  private static String hertz(Turning turning) {
+    return turning.isRange()
+        ? SpeedText.hertz(turning.lowHertz()) + " \u2013 " + SpeedText.hertz(turning.highHertz())
+        : SpeedText.hertz(turning.hertz());
   }
 
   private static ModelPage.LimitRow limitRow(MachineModel model, ServiceLimit limit) {

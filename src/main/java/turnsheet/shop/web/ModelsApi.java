@@ -39,21 +39,21 @@ class ModelsApi {
       @RequestParam(defaultValue = "") String q,
       @RequestParam(defaultValue = "1") int page,
       @RequestParam(defaultValue = "50") int size) {
-    return PageDocument.of(models.wholePage(new PageQuery(q, page, size)), ModelDocuments::write);
+    return PageDocument.of(models.wholePage(new PageQuery(q, page, size)), documents::write);
   }
 
   @GetMapping("/{id}")
   ModelDocument get(@PathVariable UUID id) {
     return models
         .find(new ModelId(id))
-        .map(ModelDocuments::write)
+        .map(documents::write)
         .orElseThrow(() -> new NotFoundException("machine model"));
   }
 
   @PostMapping
   ResponseEntity<ModelDocument> add(@Valid @RequestBody ModelDocument sent) {
     ModelDocument added =
-        ModelDocuments.write(refusals.orAnswer(() -> models.add(documents.read(sent))));
+        documents.write(refusals.orAnswer(() -> models.add(documents.read(sent))));
     return ResponseEntity.created(URI.create(PATH + "/" + added.id())).body(added);
   }
 
@@ -61,7 +61,7 @@ class ModelsApi {
   ModelDocument change(@PathVariable UUID id, @Valid @RequestBody ModelDocument sent) {
     return refusals
         .orAnswer(() -> models.change(new ModelId(id), old -> documents.read(sent, old)))
-        .map(ModelDocuments::write)
+        .map(documents::write)
         .orElseThrow(() -> new NotFoundException("machine model"));
   }
 }

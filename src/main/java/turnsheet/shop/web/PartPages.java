@@ -2,6 +2,7 @@ package turnsheet.shop.web;
 
 import jakarta.validation.Valid;
 import java.util.UUID;
+import org.jspecify.annotations.Nullable;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
 import org.springframework.validation.BindingResult;
@@ -10,6 +11,7 @@ import org.springframework.web.bind.annotation.ModelAttribute;
 import org.springframework.web.bind.annotation.PathVariable;
 import org.springframework.web.bind.annotation.PostMapping;
 import org.springframework.web.bind.annotation.RequestParam;
+import turnsheet.core.diagnose.parts.PartKind;
 import turnsheet.shop.MachineModel;
 import turnsheet.shop.RotatingPart;
 import turnsheet.web.NotFoundException;
@@ -31,24 +33,40 @@ class PartPages {
     this.change = change;
   }
 
+  /** The fields of the kind chosen; a kind that nobody has is that of other parts. */
+  @GetMapping("/models/{id}/parts/new")
+  String start(@PathVariable UUID id, @RequestParam(defaultValue = "") String kind, Model model) {
+    MachineModel of = screen.model(id);
+    PartKind chosen = PartForm.kind(kind).orElse(PartKind.OTHER);
+    model.addAttribute("partForm", PartForm.empty(chosen));
+    return form(of, null, chosen, model);
+  }
+
   @PostMapping("/models/{id}/parts")
   String add(
       @PathVariable UUID id,
       @Valid @ModelAttribute("partForm") PartForm form,
       BindingResult errors,
       Model model) {
+    MachineModel of = screen.model(id);
     boolean done =
         form.part(errors)
             .map(p -> change.done(id, m -> m.withPart(p), errors, "part"))
             .orElse(false);
-    return done ? back(id) : screen.show(id, model, "parts");
+    return done ? back(id) : form(of, null, form.kindChosen(), model);
   }
 
   @GetMapping("/models/{id}/parts/edit")
-  String edit(@PathVariable UUID id, @RequestParam String name, Model model) {
+  String edit(
+      @PathVariable UUID id,
+      @RequestParam String name,
+      @RequestParam(defaultValue = "") String kind,
+      Model model) {
     MachineModel of = screen.model(id);
-    model.addAttribute("partForm", PartForm.of(part(of, name)));
-    return form(of, name, model);
+    PartForm as = PartForm.of(part(of, name));
+    PartForm shown = PartForm.kind(kind).filter(k -> k != as.kindChosen()).map(as::as).orElse(as);
+    model.addAttribute("partForm", shown);
+    return form(of, name, shown.kindChosen(), model);
   }
 
   @PostMapping("/models/{id}/parts/edit")
@@ -64,7 +82,7 @@ class PartPages {
         form.part(errors)
             .map(p -> change.done(id, m -> m.changePart(old, p), errors, "part"))
             .orElse(false);
-    return done ? back(id) : form(of, name, model);
+    return done ? back(id) : form(of, name, form.kindChosen(), model);
   }
 
   @GetMapping("/models/{id}/parts/remove")
@@ -85,8 +103,9 @@ class PartPages {
     return back(id);
   }
 
-  private String form(MachineModel of, String name, Model model) {
+  private String form(MachineModel of, @Nullable String name, PartKind kind, Model model) {
     screen.addChoices(of, model);
+    screen.addPartFields(kind, model);
     model.addAttribute("name", name);
     return FORM_PAGE;
   }

@@ -71,6 +71,41 @@ class ShopApiTest {
   }
 
   @Test
+  void keepsPartsOfAllKinds() throws Exception {
+    String sent =
+        MODEL
+            .formatted("Sorrel transport")
+            .replace(
+                "{\"name\": \"fan\", \"turnsPerMinute\": 1450}",
+                """
+                {"name": "drive", "kind": "motor", "mainsPolePairs": 2,
+                 "details": {"slipLowPercent": 2, "slipHighPercent": 6}},
+                {"name": "belt", "kind": "belt", "lengthMm": 500, "turnsOf": "drive",
+                 "details": {"rimMm": 20, "tolerancePercent": 2}},
+                {"name": "reel", "kind": "reel", "diameterMm": 250,
+                 "details": {"emptyMm": 100, "winding": "gives"}},
+                {"name": "ball race", "kind": "bearing", "turnsPerTurn": 1, "turnsOf": "capstan",
+                 "details": {"count": 8, "ballMm": 4.76, "pitchMm": 22}}
+                """);
+    String added = created("/api/v1/models", sent);
+    assertThat(JsonPath.<String>read(added, "$.rotatingParts[2].kind")).isEqualTo("motor");
+    // 50 Hz on two pole pairs, 2 to 6 % behind
+    assertThat(JsonPath.<Double>read(added, "$.rotatingParts[2].rates[0].lowHz"))
+        .isCloseTo(23.5, org.assertj.core.api.Assertions.within(1e-9));
+    assertThat(JsonPath.<Double>read(added, "$.rotatingParts[2].rates[0].highHz"))
+        .isCloseTo(24.5, org.assertj.core.api.Assertions.within(1e-9));
+    String address = "/api/v1/models/" + JsonPath.read(added, "$.id");
+    assertThat(body(put(address, added))).isEqualTo(added);
+    assertProblem(
+        put(address, sent.replace("\"pitchMm\": 22", "\"pitchMm\": 2")), 422, "partBalls", "race");
+    assertProblem(
+        put(address, sent.replace("\"belt\", \"lengthMm\"", "\"strap\", \"lengthMm\"")),
+        422,
+        "partKindUnknown",
+        "strap");
+  }
+
+  @Test
   void answersWithAProblemWhatTheRulesForbid() throws Exception {
     created("/api/v1/models", MODEL.formatted("Nettle transport"));
     assertProblem(

@@ -94,6 +94,55 @@ class ShopPagesTest {
   }
 
   @Test
+  void asksForTheNumbersOfAKindAndForNoOthers() throws Exception {
+    String page = model("Dogwood transport", "");
+    addSlowSetting(page);
+    assertThat(browser.read(page + "/parts/new?kind=REEL"))
+        .contains("name=\"empty\"", "name=\"winding\"")
+        .doesNotContain("name=\"ball\"", "name=\"slipLow\"", "name=\"turnsOf\"");
+    assertThat(browser.read(page + "/parts/new?kind=BEARING"))
+        .contains("name=\"ball\"", "name=\"pitch\"", "name=\"angle\"");
+    browser.sendBack(
+        page + "/parts",
+        "the bare hub is smaller than the full pack",
+        "supply reel",
+        "part",
+        "supply reel",
+        "kind",
+        "REEL",
+        "basis",
+        "DIAMETER_MM",
+        "amount",
+        "100",
+        "empty",
+        "250",
+        "winding",
+        "GIVES");
+    browser.sendOn(
+        page + "/parts",
+        "part",
+        "supply reel",
+        "kind",
+        "REEL",
+        "basis",
+        "DIAMETER_MM",
+        "amount",
+        "250",
+        "empty",
+        "100",
+        "winding",
+        "GIVES");
+    // v/(pi d) at 4.7625 cm/s: 0.0606 Hz full, 0.1516 Hz bare (computed)
+    assertThat(browser.text(page)).contains("0.061 \u2013 0.152", "250 mm full, 100 mm bare");
+    String edit = page + "/parts/edit?name=supply reel";
+    assertThat(browser.read(edit)).contains("value=\"250\"", "value=\"100\"");
+    // as another kind it keeps what that kind has
+    assertThat(browser.read(edit + "&kind=ROLLER"))
+        .contains("supply reel", "value=\"250\"")
+        .doesNotContain("name=\"empty\"");
+  }
+
+  @Test
   void sendsWhatIsNoNumberBackAsTyped() throws Exception {
     String page = model("Cedar transport", "");
     browser.sendBack(

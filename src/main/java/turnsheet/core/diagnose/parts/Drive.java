@@ -85,7 +85,7 @@ public sealed interface Drive {
     }
   }
 
-  /** Turns at a rate of its own, whatever the rest does. */
+  /** Turns at a rate that was read off a plate, whatever the speed setting. */
   record Own(double perMinute) implements Drive {
 
     public Own {

@@ -66,8 +66,13 @@ public final class Kinematics {
     if (drive instanceof Drive.Supply supply) {
       return Optional.of(onMains(supply).within(tolerance));
     }
-    double perMinute = ((Drive.Own) drive).perMinute();
-    return Optional.of(Turning.exact(perMinute / 60, Lock.FREE).within(tolerance));
+    return Optional.of(own(((Drive.Own) drive).perMinute() / 60).within(tolerance));
+  }
+
+  /** Nobody has said whether what it hangs on moves with the unit: between still and moved. */
+  private Turning own(double hertz) {
+    double moved = hertz * running.speedFactor();
+    return new Turning(Math.min(hertz, moved), Math.max(hertz, moved), 0, 0, Lock.FREE);
   }
 
   private static Turning over(Drive.Pack pack, Turning tape) {
