@@ -18,15 +18,20 @@ record KeptSeries(Map<String, byte[]> contents) {
 
   static KeptSeries of(Series series) {
     Map<String, byte[]> contents = new LinkedHashMap<>();
-    contents.put(SeriesName.TRACE.word(), SeriesCodec.encode(Curve.of(series.trace())));
-    contents.put(SeriesName.SPECTRUM.word(), SeriesCodec.encode(Curve.of(series.spectrum())));
+    boolean curves = series.trace().length() > 0; // none of a recording that was too short
+    if (curves) {
+      contents.put(SeriesName.TRACE.word(), SeriesCodec.encode(Curve.of(series.trace())));
+      contents.put(SeriesName.SPECTRUM.word(), SeriesCodec.encode(Curve.of(series.spectrum())));
+    }
     Series.Histogram histogram = series.histogram();
     if (histogram != null) {
       contents.put(SeriesName.HISTOGRAM.word(), SeriesCodec.encode(histogram));
     }
-    contents.put(FLUCTUATION_BLOCKS, SeriesCodec.encode(series.blocks().fluctuation()));
-    contents.put(INDICATION_BLOCKS, SeriesCodec.encode(series.blocks().indication()));
-    contents.put(FLUCTUATION, SeriesCodec.encode(series.fluctuation().get()));
+    if (curves) {
+      contents.put(FLUCTUATION_BLOCKS, SeriesCodec.encode(series.blocks().fluctuation()));
+      contents.put(INDICATION_BLOCKS, SeriesCodec.encode(series.blocks().indication()));
+      contents.put(FLUCTUATION, SeriesCodec.encode(series.fluctuation().get()));
+    }
     return new KeptSeries(contents);
   }
 }

@@ -62,8 +62,23 @@ final class EdgePlan {
     SpeedTrace trace = scan.trace();
     double band = scan.speed.passHertz();
     List<Stretch> excluded = excluded(scan);
-    requireLength(scan, trace, excluded);
     EdgeNoise noise = EdgeNoise.of(scan, probe);
+    List<Warning> warnings = new ArrayList<>(scan.warnings);
+    warnings.addAll(new EdgeWarnings(scan, probe, settings).all(band, noise));
+    if (scan.periods.edges() >= BriefReading.FEWEST_EDGES && !showsSpeed(trace, excluded)) {
+      return new Outcome.Measured(
+          reading(
+              scan,
+              noise,
+              signal,
+              BriefReading.speed(1 / scan.periods.meanSeconds(), settings),
+              BriefReading.flutter(),
+              List.of(),
+              BriefReading.floor(),
+              BriefReading.and(warnings)),
+          BriefReading.series(histogram(scan.histogram)));
+    }
+    requireLength(scan, trace, excluded);
     TraceFigures figures =
         TraceFigures.of(
             trace,
@@ -72,41 +87,56 @@ final class EdgePlan {
             band,
             settings);
     requireSpeed(figures.speed());
-
-    List<Warning> warnings = new ArrayList<>(scan.warnings);
-    warnings.addAll(new EdgeWarnings(scan, probe, settings).all(band, noise));
     warnings.addAll(figures.warnings());
-    Reading reading =
-        new Reading(
-            new Reading.Source(
-                sha256,
-                format,
-                settings.kind(),
-                settings.channel(),
-                sampleRateHz,
-                scan.periods.spanSeconds()),
-            new Reading.Method(Measurement.METHOD_VERSION, settings),
+    return new Outcome.Measured(
+        reading(
+            scan,
+            noise,
+            signal,
             figures.speed(),
             flutter(figures, band),
             figures.lines(),
-            new EdgeFigures(scan, settings, noise).edges(),
-            new Reading.Signal(
-                signal.snrDb(),
-                signal.mains(),
-                signal.clippedSamples().getAsLong(),
-                scan.gaps.stream()
-                    .map(g -> new Reading.Dropout(g.startSeconds(), g.durationSeconds()))
-                    .toList(),
-                noise.floorFigure(figures.floorPercent())),
-            warnings);
-    return new Outcome.Measured(
-        reading,
+            noise.floorFigure(figures.floorPercent()),
+            warnings),
         new Series(
             trace,
             figures.spectrum(),
             histogram(scan.histogram),
             figures.blocks(),
             figures::fluctuation));
+  }
+
+  private Reading reading(
+      EdgeScan scan,
+      EdgeNoise noise,
+      WaveformSignal signal,
+      Reading.Speed speed,
+      Reading.Flutter flutter,
+      List<Reading.Line> lines,
+      Figure floor,
+      List<Warning> warnings) {
+    return new Reading(
+        new Reading.Source(
+            sha256,
+            format,
+            settings.kind(),
+            settings.channel(),
+            sampleRateHz,
+            scan.periods.spanSeconds()),
+        new Reading.Method(Measurement.METHOD_VERSION, settings),
+        speed,
+        flutter,
+        lines,
+        new EdgeFigures(scan, settings, noise).edges(),
+        new Reading.Signal(
+            signal.snrDb(),
+            signal.mains(),
+            signal.clippedSamples().getAsLong(),
+            scan.gaps.stream()
+                .map(g -> new Reading.Dropout(g.startSeconds(), g.durationSeconds()))
+                .toList(),
+            floor),
+        warnings);
   }
 
   private void requireSteady(EdgeScan scan, EdgeProbe probe) throws RejectedException {
@@ -170,17 +200,21 @@ final class EdgePlan {
     }
   }
 
+  private static boolean showsSpeed(SpeedTrace trace, List<Stretch> excluded) {
+    return trace.length() >= 2 * FEWEST_EDGES
+        && TraceFigures.longestUsableSeconds(trace, excluded) >= TraceFigures.SHORTEST_SECONDS;
+  }
+
   private static void requireLength(EdgeScan scan, SpeedTrace trace, List<Stretch> excluded)
       throws RejectedException {
-    double usable = trace.length() == 0 ? 0 : TraceFigures.longestUsableSeconds(trace, excluded);
-    if (usable < TraceFigures.SHORTEST_SECONDS || trace.length() < 2 * FEWEST_EDGES) {
+    if (!showsSpeed(trace, excluded)) {
       throw new RejectedException(
           "tooShort",
           String.format(
               Locale.ROOT,
               "The longest stretch without a gap is %.2f s of the %.2f s recorded: record at least"
                   + " %d pulses and 5 s in one piece, better 30 s.",
-              usable,
+              trace.length() == 0 ? 0 : TraceFigures.longestUsableSeconds(trace, excluded),
               scan.periods.spanSeconds(),
               2 * scan.speed.reachEdges() + 2 * FEWEST_EDGES));
     }

@@ -60,13 +60,26 @@ class PeriodCorpusTest {
     assertThat(statistics.meanSeconds()).isCloseTo(0.760532591, within(1e-9));
   }
 
-  /** 12 MHz analyser on a clock of 1 MHz: steps of 83.3 ns; 30 ms are too short for a speed. */
+  /**
+   * 12 MHz analyser on a clock of 1 MHz for 30 ms: too short for a speed, but 30 000 periods with
+   * the mean and deviation counted, and what scatters them is the analyser's step of 83.3 ns.
+   */
   @Test
   void namesTheStepOfTheAnalyser() throws Exception {
-    EdgeProbe probe = EdgeProbe.of(periods("real-logic-captures/clock-1mhz-a-periods.txt"), 1);
-    // the periods are written with 13 digits
-    assertThat(probe.gridSeconds()).isCloseTo(1 / 12e6, within(1e-12));
-    assertThat(probe.medianSeconds()).isCloseTo(1e-6, within(1e-12));
+    Reading clock = measured(plan(1e6, periods("real-logic-captures/clock-1mhz-a-periods.txt")));
+    Reading.Edges edges = Objects.requireNonNull(clock.edges());
+    assertThat(edges.count()).isEqualTo(30_001);
+    assertThat(value(edges.meanPeriodMicroseconds())).isCloseTo(1.00015277778, within(1e-9));
+    assertThat(value(edges.periodStdDevMicroseconds())).isCloseTo(0.00788969, within(1e-8));
+    assertThat(value(clock.speed().deviationPercent())).isCloseTo(-0.0152754, within(1e-6));
+    assertThat(clock.flutter().weightedTwoSigmaPercent().value()).isNull();
+    assertThat(clock.warnings())
+        .filteredOn(w -> w.code().equals("quantised"))
+        .singleElement()
+        .extracting(Warning::message)
+        .asString()
+        .contains("a grid of 0.08333 \u00b5s");
+    assertThat(clock.warnings()).extracting(Warning::code).contains("periodsOnly");
   }
 
   /**

@@ -8,8 +8,11 @@ import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.
 import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.redirectedUrl;
 import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.status;
 
+import java.io.ByteArrayInputStream;
+import java.io.InputStream;
 import java.nio.ByteBuffer;
 import java.nio.ByteOrder;
+import java.nio.charset.StandardCharsets;
 import java.time.Clock;
 import java.util.UUID;
 import org.junit.jupiter.api.BeforeEach;
@@ -19,6 +22,13 @@ import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.test.web.servlet.MockMvc;
 import org.springframework.transaction.support.TransactionTemplate;
 import turnsheet.capture.CaptureId;
+import turnsheet.core.format.CaptureFormats;
+import turnsheet.core.format.api.ByteSource;
+import turnsheet.core.format.api.ReadOptions;
+import turnsheet.core.measure.MeasureSettings;
+import turnsheet.core.measure.Measurement;
+import turnsheet.core.measure.Outcome;
+import turnsheet.core.measure.Progress;
 import turnsheet.document.ReadingDocument;
 import turnsheet.reading.ReadingId;
 import turnsheet.reading.Readings;
@@ -294,5 +304,48 @@ class ReadingPagesTest {
         .andExpect(content().json("[]"));
     mvc.perform(get("/api/v1/readings/" + UUID.randomUUID() + "/motion"))
         .andExpect(status().isNotFound());
+  }
+
+  /** 5000 periods of 100 µs: half a second, from which no speed trace can be made. */
+  @Test
+  void aReadingOfPeriodsAloneHasAPageWithoutCurves() throws Exception {
+    StringBuilder periods = new StringBuilder("period_s\n");
+    for (int i = 0; i < 5000; i++) {
+      periods.append(i % 3 == 0 ? "0.0001001\n" : "0.0000999\n");
+    }
+    byte[] bytes = periods.toString().getBytes(StandardCharsets.UTF_8);
+    Outcome outcome =
+        new Measurement(CaptureFormats.standard())
+            .measure(
+                new ByteSource() {
+                  @Override
+                  public InputStream open() {
+                    return new ByteArrayInputStream(bytes);
+                  }
+
+                  @Override
+                  public long length() {
+                    return bytes.length;
+                  }
+                },
+                "00",
+                ReadOptions.none(),
+                MeasureSettings.edges(10_000, null),
+                Progress.NONE);
+    assertThat(outcome).isInstanceOf(Outcome.Measured.class);
+    Outcome.Measured measured = (Outcome.Measured) outcome;
+    ReadingId brief =
+        readings.add(bench.capture("brief", "measured"), measured.reading(), measured.series());
+
+    String page = page("/readings/" + brief);
+
+    assertThat(page)
+        .contains("Less than a second could be used")
+        .contains("The edges sit on a grid of")
+        .contains("the recording is too short to tell how the speed varies")
+        .doesNotContain("data-plot=\"trace\"");
+    mvc.perform(get("/readings/" + brief + ".csv")).andExpect(status().isOk());
+    mvc.perform(get("/readings/" + brief + "/series/trace")).andExpect(status().isNotFound());
+    mvc.perform(get("/readings/" + brief + "/sound.wav")).andExpect(status().isNotFound());
   }
 }
