@@ -43,7 +43,7 @@ class ReadingController {
     ReadingId reading = new ReadingId(id);
     model.addAttribute(
         "page", pages.find(reading, locale).orElseThrow(() -> new NotFoundException("reading")));
-    model.addAttribute("motion", motion.page(reading, line, faster, locale));
+    model.addAttribute("overTime", motion.page(reading, line, faster, locale));
     return "reading/reading";
   }
 
