@@ -25,6 +25,7 @@ import turnsheet.demo.SampleFolder;
       "turnsheet.report",
       "turnsheet.share",
       "turnsheet.shop",
+      "turnsheet.trial",
       "turnsheet.web"
     })
 @Import(ServiceConfig.class)

@@ -37,6 +37,7 @@ class ArchitectureTest {
           "turnsheet.capture",
           "turnsheet.reading",
           "turnsheet.evidence",
+          "turnsheet.trial",
           "turnsheet.bench",
           "turnsheet.report",
           "turnsheet.share",

@@ -49,6 +49,7 @@ public final class JobRun {
    * @param fraction 0 to 1; anything beyond is cut
    * @param message what is being done, for people; may be empty
    * @throws JobStoppedException if the service is going down; let it pass
+   * @throws JobCancelledException if people have called the job off; let it pass
    */
   public void progress(double fraction, String message) {
     // the flag is cleared, or the database would close its file at the next write
@@ -59,7 +60,9 @@ public final class JobRun {
     if (lastWrite.equals(Instant.MIN)
         || Duration.between(lastWrite, now).compareTo(BETWEEN_WRITES) >= 0) {
       lastWrite = now;
-      table.progress(job.id(), Math.min(1, Math.max(0, fraction)), message);
+      if (!table.progress(job.id(), Math.min(1, Math.max(0, fraction)), message)) {
+        throw new JobCancelledException();
+      }
     }
   }
 }

@@ -63,6 +63,9 @@ class JobRunner {
             .orElseThrow(() -> new IllegalStateException("no handler for " + job.name()));
     try {
       handler.run(new JobRun(job, table, clock, context.getSchedulerState()::isShuttingDown));
+    } catch (JobCancelledException e) {
+      log.info("job {} was called off", id.value());
+      return;
     } catch (RuntimeException e) {
       throw e;
     } catch (Exception e) {

@@ -9,10 +9,12 @@ public enum JobState {
   /** came to its end */
   DONE,
   /** was given up */
-  FAILED;
+  FAILED,
+  /** was called off by people */
+  CANCELLED;
 
   /** Whether nothing will happen to the job any more. */
   public boolean isOver() {
-    return this == DONE || this == FAILED;
+    return this == DONE || this == FAILED || this == CANCELLED;
   }
 }

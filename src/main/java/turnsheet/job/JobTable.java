@@ -65,14 +65,27 @@ class JobTable {
         == 1;
   }
 
-  void progress(JobId id, double fraction, String message) {
-    jdbc.sql(
-            "update job set progress = :fraction, message = :message"
-                + " where id = :id and state = 'running'")
-        .param("fraction", fraction)
-        .param("message", cut(message))
-        .param("id", id.value())
-        .update();
+  /** Notes how far it is; false where the job runs no more, as it was called off. */
+  boolean progress(JobId id, double fraction, String message) {
+    return jdbc.sql(
+                "update job set progress = :fraction, message = :message"
+                    + " where id = :id and state = 'running'")
+            .param("fraction", fraction)
+            .param("message", cut(message))
+            .param("id", id.value())
+            .update()
+        == 1;
+  }
+
+  /** Calls the job off; false where it is over already. */
+  boolean cancel(JobId id) {
+    return jdbc.sql(
+                "update job set state = 'cancelled', message = '', finished_at = :now"
+                    + " where id = :id and state in ('queued', 'running')")
+            .param("now", now())
+            .param("id", id.value())
+            .update()
+        == 1;
   }
 
   void requeue(JobId id, String message) {

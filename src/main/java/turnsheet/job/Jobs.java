@@ -54,6 +54,16 @@ public class Jobs {
     return id;
   }
 
+  /**
+   * Calls a job off. One that waits is never begun; one that runs ends the next time its handler
+   * tells its progress.
+   *
+   * @return false where it was over already, or is unknown
+   */
+  public boolean cancel(JobId id) {
+    return table.cancel(id);
+  }
+
   public Optional<Job> find(JobId id) {
     return table.find(id);
   }

@@ -44,6 +44,25 @@ class AccessibilityIT {
   private static final String LINKS =
       "return [...document.querySelectorAll('a[href]')].map((a) => a.href.split('#')[0])";
 
+  /** Goes by itself from the units to the first capture on which filters can be tried. */
+  private static final String TRIALS =
+      """
+      return (async () => {
+      const text = async (address) => (await fetch(address)).text();
+      const found = (page, pattern) => [...new Set(page.match(pattern) ?? [])];
+      const id = '[0-9a-f-]{36}';
+      for (const unit of found(await text('/units'), RegExp('/units/' + id, 'g'))) {
+        for (const visit of found(await text(unit), RegExp('/visits/' + id + '(?=")', 'g'))) {
+          for (const reading of found(await text(visit), RegExp('/readings/' + id, 'g'))) {
+            const to = found(await text(reading), RegExp('/captures/' + id + '/trials', 'g'));
+            if (to.length) { return location.origin + to[0]; }
+          }
+        }
+      }
+      return 'none';
+      })();
+      """;
+
   private RunningService service;
   private Visitor visitor;
   private Audit audit;
@@ -81,6 +100,7 @@ class AccessibilityIT {
     visitor.open(service.address("/import"));
     wrong.addAll(look("/import", 200));
     wrong.addAll(sharing(shapes));
+    wrong.addAll(trying());
     wrong.addAll(german());
 
     System.out.println("Pages looked at: " + String.join(" ", shapes));
@@ -126,6 +146,38 @@ class AccessibilityIT {
       }
     }
     return seen.keySet();
+  }
+
+  /** A trial that is called off, one that comes to a circuit, and its removal. */
+  private List<String> trying() throws IOException {
+    var wrong = new ArrayList<String>();
+    String trials = String.valueOf(visitor.script(TRIALS));
+    visitor.open(trials);
+    visited.add(trials);
+    wrong.addAll(look("/captures/{id}/trials", 200));
+    visitor.fill("steps", "8");
+    visitor.pressButton("Try them");
+    // nearly 200 filters take two processors some seconds
+    visitor.pressButton("Cancel the trial");
+    assertThat(visitor.find("main .lead").getText()).contains("called off");
+    wrong.addAll(look("/trials/{id}, called off", 200));
+
+    visitor.open(trials);
+    for (String extra : List.of("kinds][value=BAND_PASS", "families][value=BESSEL")) {
+      visitor.find("input[name=" + extra + "]").click();
+    }
+    visitor.fill("steps", "2");
+    visitor.fill("hysteresis", "2");
+    visitor.pressButton("Try them");
+    visitor.awaitTrue(() -> !visitor.all("#maps").isEmpty());
+    visitor.open(visitor.address() + "?candidate=2");
+    visited.add(visitor.address());
+    assertThat(visitor.all("svg.stage")).hasSize(1);
+    wrong.addAll(look("/trials/{id}", 200));
+    visitor.open(visitor.address().replaceAll("\\?.*", "") + "/remove");
+    visited.add(visitor.address());
+    wrong.addAll(look("/trials/{id}/remove", 200));
+    return wrong;
   }
 
   /** The customer's page, and what is left of it when the link is withdrawn. */

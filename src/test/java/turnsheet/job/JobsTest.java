@@ -194,6 +194,37 @@ class JobsTest {
   }
 
   @Test
+  void aJobThatIsCalledOffEndsAtItsNextProgressAndIsNotBegunAgain() throws InterruptedException {
+    recorder.waits = true;
+    scheduler.start();
+    JobId id = enqueue("record", UUID.randomUUID());
+    assertThat(recorder.reached.await(DEADLINE.toSeconds(), TimeUnit.SECONDS)).isTrue();
+    assertThat(jobs.cancel(id)).isTrue();
+    assertThat(jobs.cancel(id)).isFalse();
+    Thread.sleep(JobRun.BETWEEN_WRITES.toMillis()); // or the next progress would write nothing
+    recorder.goOn.countDown();
+    awaitNoExecutions();
+    Job cancelled = jobs.find(id).orElseThrow();
+    assertThat(cancelled.state()).isEqualTo(JobState.CANCELLED);
+    assertThat(cancelled.state().isOver()).isTrue();
+    assertThat(cancelled.attempts()).isEqualTo(1);
+    assertThat(cancelled.finishedAt()).isNotNull();
+    assertThat(recorder.subjects).isEmpty();
+    assertThat(recorder.gaveUp).isEmpty();
+  }
+
+  @Test
+  void aJobThatIsCalledOffWhileItWaitsIsNeverBegun() {
+    JobId id = enqueue("record", UUID.randomUUID());
+    assertThat(jobs.cancel(id)).isTrue();
+    scheduler.start();
+    awaitNoExecutions();
+    assertThat(jobs.find(id).orElseThrow().attempts()).isZero();
+    assertThat(recorder.subjects).isEmpty();
+    assertThat(jobs.cancel(new JobId(UUID.randomUUID()))).isFalse();
+  }
+
+  @Test
   void writesProgressSeldom() {
     JobId id = enqueue("record", UUID.randomUUID());
     Instant start = Instant.parse("2020-01-01T00:00:00Z");

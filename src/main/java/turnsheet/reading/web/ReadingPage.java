@@ -14,6 +14,7 @@ import turnsheet.web.Shown;
  * @param edges empty for a tone
  * @param channels null where the recording has one only
  * @param others earlier or later readings of the same channel
+ * @param waveform whether it is one of a tachometer, on which filters can be tried
  */
 record ReadingPage(
     String id,
@@ -40,7 +41,8 @@ record ReadingPage(
     List<Fact> source,
     List<Fact> method,
     @Nullable ChannelTable channels,
-    List<Other> others) {
+    List<Other> others,
+    boolean waveform) {
 
   /** Whether a figure of these has a limit, so that limit and verdict need columns. */
   public boolean judged(List<Group> groups) {

@@ -8,6 +8,7 @@ import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
 import turnsheet.access.ShopPreferences;
 import turnsheet.capture.ToneMethod;
+import turnsheet.core.measure.CaptureKind;
 import turnsheet.core.measure.FigureName;
 import turnsheet.core.measure.Reading;
 import turnsheet.core.signal.Warning;
@@ -108,7 +109,8 @@ class ReadingView {
         facts.source(reading, place),
         facts.method(reading, stored.madeAt()),
         channels.of(stored, words),
-        others(stored));
+        others(stored),
+        reading.source().kind() == CaptureKind.TACHOMETER);
   }
 
   private List<ServiceLimit> limits(CapturePlace place) {
