@@ -37,6 +37,7 @@ class AccessibilityIT {
       Map.of(
           "/readings/{id}", 2,
           "/captures/{id}", 3,
+          "/captures/{id}/evidence", 2,
           "/visits/{id}", 2,
           "/visits/{id}/sheet", 2,
           "/instruments/{id}", 2);
@@ -99,6 +100,7 @@ class AccessibilityIT {
     wrong.addAll(look("/no-such-page", 404));
     visitor.open(service.address("/import"));
     wrong.addAll(look("/import", 200));
+    wrong.addAll(evidence());
     wrong.addAll(sharing(shapes));
     wrong.addAll(trying());
     wrong.addAll(german());
@@ -108,6 +110,7 @@ class AccessibilityIT {
         .contains("/reports", "/reports/{id}", "/reports/{id}/revise", "/check")
         .contains("/export", "/export?unit=", "/export?visit=")
         .contains("/", "/units/{id}", "/visits/{id}", "/readings/{id}", "/models/{id}", "/shop")
+        .contains("/captures/{id}/evidence")
         .contains("/units/{id}/label", "/shop/preferences", "/visits/{id}/remove")
         .contains("/instruments/{id}/clock-checks/{id}", "/instruments/{id}/clock-checks/new");
     // the signed-in shapes and the eight pages opened by hand, each with its file for the checker
@@ -177,6 +180,19 @@ class AccessibilityIT {
     visitor.open(visitor.address().replaceAll("\\?.*", "") + "/remove");
     visited.add(visitor.address());
     wrong.addAll(look("/trials/{id}/remove", 200));
+    return wrong;
+  }
+
+  /** What a closer look shows, of each recording whose page was seen before it. */
+  private List<String> evidence() throws IOException {
+    var wrong = new ArrayList<String>();
+    for (String address : visited.stream().filter(a -> a.endsWith("/evidence")).toList()) {
+      visitor.open(address);
+      visitor.pressButton("Look closer");
+      visitor.awaitTrue(
+          () -> visitor.all("main button").stream().anyMatch(b -> b.getText().endsWith("again")));
+      wrong.addAll(look("/captures/{id}/evidence after the look", 200));
+    }
     return wrong;
   }
 

@@ -66,6 +66,7 @@ class EvidencePagesTest {
         .contains("Look closer again")
         .contains("The mains ran at (50.02")
         .contains("<svg")
+        .doesNotContain("Signal of the sensor</h2>")
         .doesNotContain("style=")
         .doesNotContain("The machine's own part")
         .doesNotContain("??");
@@ -84,6 +85,22 @@ class EvidencePagesTest {
     mvc.perform(get("/api/v1" + address + "/job"))
         .andExpect(jsonPath("$.jobState").value("done"))
         .andExpect(jsonPath("$.over").value(true));
+  }
+
+  @Test
+  void theSignalOfATachometerIsJudged() throws Exception {
+    CaptureId id = bench.measured(LookedAt.tachometer());
+    evidence.look(id);
+    bench.awaitLook(id);
+
+    String page = page("/captures/" + id + "/evidence").replace("&#39;", "'");
+    assertThat(page)
+        .contains("With this signal the smallest flutter that can be shown is")
+        .contains("the signal's: it rides on the pulses, the shaft does not do it")
+        .contains("the shaft's: both readings show it")
+        .contains("charged capacitors")
+        .doesNotContain("style=")
+        .doesNotContain("??");
   }
 
   @Test
