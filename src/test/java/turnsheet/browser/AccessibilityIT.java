@@ -101,6 +101,7 @@ class AccessibilityIT {
     visitor.open(service.address("/import"));
     wrong.addAll(look("/import", 200));
     wrong.addAll(evidence());
+    wrong.addAll(kindsOfParts());
     wrong.addAll(sharing(shapes));
     wrong.addAll(trying());
     wrong.addAll(german());
@@ -113,8 +114,8 @@ class AccessibilityIT {
         .contains("/captures/{id}/evidence")
         .contains("/units/{id}/label", "/shop/preferences", "/visits/{id}/remove")
         .contains("/instruments/{id}/clock-checks/{id}", "/instruments/{id}/clock-checks/new");
-    // the signed-in shapes and the eight pages opened by hand, each with its file for the checker
-    assertThat(sent.count()).isGreaterThanOrEqualTo(shapes.size() + 8);
+    // the signed-in shapes and the twelve pages opened by hand, each with its file for the checker
+    assertThat(sent.count()).isGreaterThanOrEqualTo(shapes.size() + 12);
     assertThat(wrong).as(String.join("\n", wrong)).isEmpty();
   }
 
@@ -192,6 +193,21 @@ class AccessibilityIT {
       visitor.awaitTrue(
           () -> visitor.all("main button").stream().anyMatch(b -> b.getText().endsWith("again")));
       wrong.addAll(look("/captures/{id}/evidence after the look", 200));
+    }
+    return wrong;
+  }
+
+  /** The fields of a part, which differ from kind to kind and stand behind a button. */
+  private List<String> kindsOfParts() throws IOException {
+    String model =
+        visited.stream()
+            .filter(a -> a.matches(".*/models/[0-9a-f-]{36}"))
+            .findFirst()
+            .orElseThrow();
+    var wrong = new ArrayList<String>();
+    for (String kind : List.of("BEARING", "REEL", "MOTOR", "BELT")) {
+      visitor.open(model + "/parts/new?kind=" + kind);
+      wrong.addAll(look("/models/{id}/parts/new of " + kind, 200));
     }
     return wrong;
   }

@@ -193,8 +193,12 @@ final class Drawings {
         .toList();
   }
 
-  private static String suspect(Reading.Line line) {
-    return line.suspects().isEmpty() ? "" : " " + line.suspects().get(0).part();
+  private String suspect(Reading.Line line) {
+    if (line.suspects().isEmpty()) {
+      return "";
+    }
+    Reading.Suspect first = line.suspects().get(0);
+    return " " + ("hum".equals(first.cause()) ? words.text("causes.hum") : first.part());
   }
 
   private List<List<String>> stretches(Curve whole) {

@@ -18,11 +18,13 @@ import turnsheet.web.NotFoundException;
 class ReadingController {
 
   private final ReadingView pages;
+  private final CauseView causes;
   private final MotionView motion;
   private final Readings readings;
 
-  ReadingController(ReadingView pages, MotionView motion, Readings readings) {
+  ReadingController(ReadingView pages, CauseView causes, MotionView motion, Readings readings) {
     this.pages = pages;
+    this.causes = causes;
     this.motion = motion;
     this.readings = readings;
   }
@@ -43,6 +45,7 @@ class ReadingController {
     ReadingId reading = new ReadingId(id);
     model.addAttribute(
         "page", pages.find(reading, locale).orElseThrow(() -> new NotFoundException("reading")));
+    model.addAttribute("causes", causes.page(reading, locale));
     model.addAttribute("overTime", motion.page(reading, line, faster, locale));
     return "reading/reading";
   }

@@ -15,6 +15,7 @@ import turnsheet.core.signal.Warning;
 import turnsheet.reading.CapturePlace;
 import turnsheet.reading.CapturePlaces;
 import turnsheet.reading.Judged;
+import turnsheet.reading.MachineInCapture;
 import turnsheet.reading.ReadingId;
 import turnsheet.reading.Readings;
 import turnsheet.reading.SeriesName;
@@ -67,8 +68,8 @@ class ReadingView {
   }
 
   private ReadingPage page(StoredReading stored, Wording words) {
-    Reading reading = stored.reading();
     CapturePlace place = places.find(stored.captureId()).orElseThrow();
+    Reading reading = withSuspectsOfNow(stored.reading(), place);
     List<Judged> judged = Judged.all(limits(place), name -> name.of(reading), rules.get().rule());
     FigureTables tables = new FigureTables(words, reading, judged);
     Drawings drawings = new Drawings(words, stored.id());
@@ -113,6 +114,16 @@ class ReadingView {
         reading.source().kind() == CaptureKind.TACHOMETER);
   }
 
+  /** The parts of the model may have been put right since. */
+  private Reading withSuspectsOfNow(Reading reading, CapturePlace place) {
+    return models
+        .find(place.modelId())
+        .flatMap(
+            m -> MachineInCapture.of(m, place.settingId(), reading, preferences.get().mainsHz()))
+        .map(machine -> machine.suspectsIn(reading))
+        .orElse(reading);
+  }
+
   private List<ServiceLimit> limits(CapturePlace place) {
     return models
         .find(place.modelId())
@@ -151,16 +162,8 @@ class ReadingView {
                 new ReadingPage.LineRow(
                     words.numbers().show(line.rateHz(), "Hz", PLAIN),
                     words.numbers().show(line.peakPercent(), "%", PLAIN),
-                    line.suspects().stream().map(s -> suspect(s, words)).toList()))
+                    line.suspects().stream().map(new CauseWords(words)::shortly).toList()))
         .toList();
-  }
-
-  private static String suspect(Reading.Suspect suspect, Wording words) {
-    String rate = words.numbers().fixed(suspect.rateHz(), 2);
-    return suspect.harmonic() == 1
-        ? words.text("reading.suspect.own", suspect.part(), rate)
-        : words.text(
-            "reading.suspect.harmonic", suspect.part(), Integer.toString(suspect.harmonic()), rate);
   }
 
   private static List<ReadingPage.StabilityRow> stability(Reading reading, Wording words) {

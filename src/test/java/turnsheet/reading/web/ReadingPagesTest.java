@@ -22,6 +22,7 @@ import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.test.web.servlet.MockMvc;
 import org.springframework.transaction.support.TransactionTemplate;
 import turnsheet.capture.CaptureId;
+import turnsheet.core.diagnose.parts.PartKind;
 import turnsheet.core.format.CaptureFormats;
 import turnsheet.core.format.api.ByteSource;
 import turnsheet.core.format.api.ReadOptions;
@@ -34,6 +35,9 @@ import turnsheet.reading.ReadingId;
 import turnsheet.reading.Readings;
 import turnsheet.reading.SampleBench;
 import turnsheet.reading.SampleReadings;
+import turnsheet.shop.MachineModels;
+import turnsheet.shop.PartBasis;
+import turnsheet.shop.RotatingPart;
 import turnsheet.testing.AsTechnician;
 import turnsheet.testing.ServiceTest;
 
@@ -59,6 +63,43 @@ class ReadingPagesTest {
   }
 
   @Test
+  void linesAreHeldAgainstThePartsAsTheyAreNow() throws Exception {
+    // the line of 9.98 Hz, a shaft of 10 Hz on a unit 0.37 % fast
+    String page = plain(page("/readings/" + reading));
+    assertThat(page)
+        .contains("9.98 Hz: capstan shaft, very likely")
+        .contains("common practice")
+        .contains("mains plug out");
+    // the shaft is measured anew: 8 % larger, so that nothing turns at that rate any more
+    new MachineModels(jdbc, transactions)
+        .change(
+            bench.model.id(),
+            m ->
+                m.changePart(
+                    "capstan shaft",
+                    new RotatingPart(
+                        "capstan shaft",
+                        PartKind.CAPSTAN,
+                        PartBasis.DIAMETER_MM,
+                        1.08 * 190.5 / (10 * Math.PI),
+                        null)));
+    assertThat(plain(page("/readings/" + reading)))
+        .contains("9.98 Hz: nothing known turns at this rate")
+        // v (1 + 0.0037) / (pi 9.98 Hz), computed: 6.098 mm
+        .contains("a diameter of (6.098")
+        .contains("times per turn of capstan shaft");
+    mvc.perform(get("/api/v1/readings/" + reading + "/suspects"))
+        .andExpect(status().isOk())
+        .andExpect(jsonPath("$.lines[0].rateHz").value(9.98))
+        .andExpect(jsonPath("$.lines[0].suspects.length()").value(0))
+        .andExpect(jsonPath("$.lines[0].lock").value("neither"))
+        .andExpect(jsonPath("$.lines[0].explanation.reference").value("capstan shaft"));
+    // the document of the day says what was known then
+    mvc.perform(get("/api/v1/readings/" + reading))
+        .andExpect(jsonPath("$.lines[0].suspects[0].part").value("capstan shaft"));
+  }
+
+  @Test
   void readingPageAnswersFirstAndShowsLimitsLinesAndWarnings() throws Exception {
     String page = page("/readings/" + reading);
 
@@ -67,7 +108,7 @@ class ReadingPagesTest {
             "Runs (0.3700 ± 0.0060) % fast, limit ± 0.5 %: within;"
                 + " weighted flutter (two-sigma) (0.0670 ± 0.0020) %, limit 0.06 %: outside.");
     assertThat(page)
-        .contains("capstan shaft, expected at 10.02 Hz")
+        .contains("capstan shaft, expected at 10.04 Hz")
         .contains("The recording lasts 4 s: record 60 s or more.")
         .contains("too short")
         .contains("one stretch only")
