@@ -29,10 +29,16 @@ class EvidenceController {
     this.pages = pages;
   }
 
+  /**
+   * The page.
+   *
+   * @param said whether the visitor says what the motor is; else the model does
+   */
   @GetMapping("/captures/{id}/evidence")
   String page(
       @PathVariable UUID id,
       @RequestParam(required = false) @Nullable Integer channel,
+      @RequestParam(defaultValue = "false") boolean said,
       @RequestParam(defaultValue = "false") boolean synchronous,
       Locale locale,
       Model model) {
@@ -40,7 +46,7 @@ class EvidenceController {
         "page",
         captures
             .find(new CaptureId(id))
-            .flatMap(capture -> pages.find(capture, channel, synchronous, locale))
+            .flatMap(capture -> pages.find(capture, channel, said ? synchronous : null, locale))
             .orElseThrow(() -> new NotFoundException("reading")));
     return "evidence/evidence";
   }

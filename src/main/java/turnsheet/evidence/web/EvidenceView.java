@@ -14,6 +14,7 @@ import org.springframework.stereotype.Component;
 import turnsheet.capture.Capture;
 import turnsheet.capture.CaptureChoices;
 import turnsheet.capture.CaptureStore;
+import turnsheet.core.diagnose.parts.PartKind;
 import turnsheet.core.measure.CaptureKind;
 import turnsheet.core.measure.Reading;
 import turnsheet.core.signal.Rejection;
@@ -27,6 +28,8 @@ import turnsheet.reading.CapturePlace;
 import turnsheet.reading.CapturePlaces;
 import turnsheet.reading.Readings;
 import turnsheet.reading.StoredReading;
+import turnsheet.shop.MachineModels;
+import turnsheet.shop.PartBasis;
 import turnsheet.web.Crumb;
 import turnsheet.web.Times;
 import turnsheet.web.Wording;
@@ -39,6 +42,7 @@ class EvidenceView {
   private final Readings readings;
   private final CapturePlaces places;
   private final CaptureStore store;
+  private final MachineModels models;
   private final Map<String, SectionView> views;
   private final MessageSource messages;
   private final Times times;
@@ -48,6 +52,7 @@ class EvidenceView {
       Readings readings,
       CapturePlaces places,
       CaptureStore store,
+      MachineModels models,
       ObjectProvider<SectionView> views,
       MessageSource messages,
       Times times) {
@@ -55,6 +60,7 @@ class EvidenceView {
     this.readings = readings;
     this.places = places;
     this.store = store;
+    this.models = models;
     this.views = views.stream().collect(Collectors.toMap(SectionView::name, Function.identity()));
     this.messages = messages;
     this.times = times;
@@ -63,11 +69,12 @@ class EvidenceView {
   /**
    * The page.
    *
+   * @param synchronous what the visitor says of the motor; null for what the model's parts say
    * @param wanted channel; where it was not measured, or null, the one that stands for the capture
    * @return empty where the capture has no reading
    */
   Optional<EvidencePage> find(
-      Capture capture, @Nullable Integer wanted, boolean synchronous, Locale locale) {
+      Capture capture, @Nullable Integer wanted, @Nullable Boolean synchronous, Locale locale) {
     List<StoredReading> channels = readings.ofChannels(capture.id());
     return channels.stream()
         .filter(r -> wanted != null && r.reading().source().channel() == wanted)
@@ -80,9 +87,10 @@ class EvidenceView {
       Capture capture,
       List<StoredReading> channels,
       StoredReading shown,
-      boolean synchronous,
+      @Nullable Boolean said,
       Wording words) {
     CapturePlace place = places.find(capture.id()).orElseThrow();
+    boolean synchronous = said == null ? isSynchronous(place) : said;
     Reading reading = shown.reading();
     int channel = reading.source().channel();
     StoredEvidence stored =
@@ -123,6 +131,17 @@ class EvidenceView {
             .map(k -> words.text("capture.kind." + k.name()))
             .toList(),
         holdings(words));
+  }
+
+  /** Whether the model has a motor on the mains that does not fall behind them. */
+  private boolean isSynchronous(CapturePlace place) {
+    return models.find(place.modelId()).stream()
+        .flatMap(model -> model.parts().stream())
+        .anyMatch(
+            part ->
+                part.kind() == PartKind.MOTOR
+                    && part.basis() == PartBasis.MAINS_POLE_PAIRS
+                    && part.details().slipHighPercent() == null);
   }
 
   private static List<String> notes(

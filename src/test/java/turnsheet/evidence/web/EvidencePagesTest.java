@@ -21,11 +21,15 @@ import org.springframework.transaction.support.TransactionTemplate;
 import turnsheet.capture.CaptureId;
 import turnsheet.capture.Captures;
 import turnsheet.capture.Intake;
+import turnsheet.core.diagnose.parts.PartKind;
 import turnsheet.evidence.Evidence;
 import turnsheet.evidence.LookedAt;
 import turnsheet.job.JobState;
 import turnsheet.job.Jobs;
 import turnsheet.reading.SampleBench;
+import turnsheet.shop.MachineModels;
+import turnsheet.shop.PartBasis;
+import turnsheet.shop.RotatingPart;
 import turnsheet.testing.AsTechnician;
 import turnsheet.testing.ServiceTest;
 
@@ -44,11 +48,13 @@ class EvidencePagesTest {
   @Autowired Evidence evidence;
   @Autowired Jobs jobs;
 
+  private SampleBench sample;
   private LookedAt bench;
 
   @BeforeEach
   void open() {
-    bench = new LookedAt(new SampleBench(jdbc, transactions, clock), intake, captures, evidence);
+    sample = new SampleBench(jdbc, transactions, clock);
+    bench = new LookedAt(sample, intake, captures, evidence);
   }
 
   @Test
@@ -72,7 +78,7 @@ class EvidencePagesTest {
         .doesNotContain("??");
     // closed form: the hum says +0.04 % (50.02 Hz), the speed is +0.12 %, and
     // 1.0012 / 1.0004 - 1 = 0.080 %
-    assertThat(page(address + "?synchronous=true").replace("&#39;", "'"))
+    assertThat(page(address + "?said=true&synchronous=true").replace("&#39;", "'"))
         .contains("The machine's own part")
         .containsPattern(
             "from the supply and \\(\\+0\\.0(79|80)\\d* ± [\\d.]+\\) %".replace(" ", "[ \u202f]"));
@@ -85,6 +91,25 @@ class EvidencePagesTest {
     mvc.perform(get("/api/v1" + address + "/job"))
         .andExpect(jsonPath("$.jobState").value("done"))
         .andExpect(jsonPath("$.over").value(true));
+  }
+
+  /** The model's parts say what the motor is; the visitor may say otherwise. */
+  @Test
+  void aSynchronousMotorAmongThePartsSplitsTheErrorUnasked() throws Exception {
+    CaptureId id = bench.measured(LookedAt.tone());
+    evidence.look(id);
+    bench.awaitLook(id);
+    String address = "/captures/" + id + "/evidence";
+    assertThat(page(address)).doesNotContain("own part");
+    MachineModels models = new MachineModels(jdbc, transactions);
+    models.change(
+        sample.model.id(),
+        model ->
+            model.withPart(
+                new RotatingPart("motor", PartKind.MOTOR, PartBasis.MAINS_POLE_PAIRS, 2, null)));
+
+    assertThat(page(address)).contains("own part");
+    assertThat(page(address + "?said=true")).doesNotContain("own part");
   }
 
   @Test
