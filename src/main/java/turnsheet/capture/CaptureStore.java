@@ -13,7 +13,6 @@ import java.nio.file.StandardOpenOption;
 import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
 import java.util.HexFormat;
-import java.util.UUID;
 import org.slf4j.Logger;
 import org.slf4j.LoggerFactory;
 import org.springframework.beans.factory.annotation.Value;
@@ -50,7 +49,7 @@ public class CaptureStore {
    * @throws StoreException if the disk does not take the bytes; nothing is left of them
    */
   public StoredBytes receive(InputStream in) throws BrokenUploadException, StoreException {
-    Path part = incoming.path().resolve(UUID.randomUUID() + IncomingFolder.PART);
+    Path part = incoming.newPart();
     try {
       StoredBytes stored = write(in, part);
       keep(part, stored);

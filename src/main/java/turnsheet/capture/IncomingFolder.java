@@ -11,14 +11,15 @@ import java.nio.file.StandardOpenOption;
 import java.time.Clock;
 import java.time.Duration;
 import java.time.Instant;
+import java.util.UUID;
 import org.slf4j.Logger;
 import org.slf4j.LoggerFactory;
 import org.springframework.beans.factory.annotation.Value;
 import org.springframework.stereotype.Component;
 
 /**
- * Where uploads grow until they are whole. What a killed process left in it is removed at the next
- * start.
+ * Where files grow until they are whole: uploads, and exports before they are sent. What a killed
+ * process left in it is removed at the next start.
  */
 @Component
 public class IncomingFolder {
@@ -43,6 +44,11 @@ public class IncomingFolder {
     return path;
   }
 
+  /** A name that nobody else has, for whoever holds a lock on the file while it is needed. */
+  public Path newPart() {
+    return path.resolve(UUID.randomUUID() + PART);
+  }
+
   private void clean(Instant oldBefore) throws IOException {
     try (DirectoryStream<Path> files = Files.newDirectoryStream(path)) {
       for (Path file : files) {
@@ -52,7 +58,7 @@ public class IncomingFolder {
                 : Files.getLastModifiedTime(file).toInstant().isBefore(oldBefore);
         if (leftover && Files.isRegularFile(file)) {
           Files.deleteIfExists(file);
-          log.info("removed what an interrupted upload left: {}", file.getFileName());
+          log.info("removed what an interrupted upload or export left: {}", file.getFileName());
         }
       }
     }

@@ -2,8 +2,7 @@ package turnsheet.exchange.web;
 
 import jakarta.servlet.http.HttpServletResponse;
 import java.io.IOException;
-import java.io.OutputStreamWriter;
-import java.io.Writer;
+import java.io.OutputStream;
 import java.nio.charset.StandardCharsets;
 import java.util.UUID;
 import org.jspecify.annotations.Nullable;
@@ -12,17 +11,20 @@ import org.springframework.http.HttpHeaders;
 import org.springframework.stereotype.Component;
 import turnsheet.exchange.Export;
 import turnsheet.exchange.Scope;
+import turnsheet.exchange.Spool;
 import turnsheet.web.NotFoundException;
 import turnsheet.web.RefusedRequestException;
 
-/** Exports as downloads: written row by row, so that their length does not matter. */
+/** Exports as downloads: whole on the disk before the first byte is sent. */
 @Component
 class ExportFiles {
 
   private final Export export;
+  private final Spool spool;
 
-  ExportFiles(Export export) {
+  ExportFiles(Export export, Spool spool) {
     this.export = export;
+    this.spool = spool;
   }
 
   /**
@@ -45,29 +47,31 @@ class ExportFiles {
   }
 
   void json(Scope scope, HttpServletResponse response) throws IOException {
-    try (Writer out = open(response, "application/json", scope, "json")) {
-      export.writeJson(scope, out);
-    }
+    spool.send(
+        out -> export.writeJson(scope, out),
+        length -> open(response, "application/json", scope, "json", length));
   }
 
   void csv(Scope scope, HttpServletResponse response) throws IOException {
-    try (Writer out = open(response, "text/csv", scope, "csv")) {
-      export.writeCsv(scope, out);
-    }
+    spool.send(
+        out -> export.writeCsv(scope, out),
+        length -> open(response, "text/csv", scope, "csv", length));
   }
 
-  private static Writer open(HttpServletResponse response, String type, Scope scope, String ending)
+  private static OutputStream open(
+      HttpServletResponse response, String type, Scope scope, String ending, long lengthBytes)
       throws IOException {
     UUID id = scope.id();
     String of = id == null ? "all" : id.toString();
     response.setContentType(type);
     response.setCharacterEncoding(StandardCharsets.UTF_8);
+    response.setContentLengthLong(lengthBytes);
     response.setHeader(
         HttpHeaders.CONTENT_DISPOSITION,
         ContentDisposition.attachment()
             .filename("turnsheet-" + of + "." + ending)
             .build()
             .toString());
-    return new OutputStreamWriter(response.getOutputStream(), StandardCharsets.UTF_8);
+    return response.getOutputStream();
   }
 }
