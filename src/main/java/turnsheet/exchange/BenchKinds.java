@@ -12,6 +12,26 @@ import java.util.List;
 /** What the bench adds to the books: recordings and what came of them. */
 final class BenchKinds {
 
+  /** One at most for a visit; the picture itself lies in the store. */
+  static final Kind PHOTOS =
+      new Kind(
+          "photos",
+          "plate_photo",
+          "visitId",
+          "taken_in_at,",
+          "visit_id in ({visits})",
+          List.of(
+              id("visitId").naming("visit"),
+              text("sha256"),
+              whole("byteLength"),
+              whole("widthPx"),
+              whole("heightPx"),
+              time("takenInAt"),
+              text("takenInBy"),
+              Member.of("jpeg", MemberType.STORED)),
+          List.of(),
+          2);
+
   static final Kind CLOCK_CHECKS =
       new Kind(
           "clockChecks",
@@ -86,6 +106,21 @@ final class BenchKinds {
                   null,
                   "channel",
                   List.of(whole("channel"), text("code"), text("message")))));
+
+  static final Kind LEFT_OUT =
+      new Kind(
+          "leftOut",
+          "left_out_capture",
+          "reason",
+          "left_out_at,",
+          "capture_id in (select id from capture where visit_id in ({visits}))",
+          List.of(
+              id("captureId").naming("capture"),
+              text("reason"),
+              time("leftOutAt"),
+              text("leftOutBy")),
+          List.of(),
+          2);
 
   static final Kind READINGS =
       new Kind(

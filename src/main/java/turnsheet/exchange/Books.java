@@ -97,6 +97,21 @@ final class Books {
     }
   }
 
+  /** Writes an entry over the one of its key; for kinds without parts. */
+  void update(Entry entry) {
+    Member key = entry.kind().key();
+    List<Extra> all = columns(entry.kind().members(), entry.values());
+    String set =
+        all.stream().skip(1).map(e -> e.column() + " = ?").collect(Collectors.joining(", "));
+    JdbcClient.StatementSpec statement =
+        jdbc.sql(
+            "update " + entry.kind().table() + " set " + set + " where " + key.column() + " = ?");
+    for (int i = 1; i < all.size(); i++) {
+      statement = statement.param(i, all.get(i).value(), all.get(i).sqlType());
+    }
+    statement.param(all.size(), entry.key()).update();
+  }
+
   boolean has(String table, UUID id) {
     return !jdbc.sql("select 1 from " + table + " where id = ?")
         .param(id)
@@ -119,7 +134,7 @@ final class Books {
 
   private static List<Extra> columns(List<Member> members, Map<String, @Nullable Object> values) {
     List<Extra> columns = new ArrayList<>();
-    for (Member member : members) {
+    for (Member member : inColumns(members)) {
       Object value = values.get(member.name());
       columns.add(
           new Extra(
@@ -130,8 +145,12 @@ final class Books {
     return columns;
   }
 
+  private static List<Member> inColumns(List<Member> members) {
+    return members.stream().filter(m -> m.type() != MemberType.STORED).toList();
+  }
+
   private static String select(List<Member> members, String key) {
-    return members.stream()
+    return inColumns(members).stream()
         .filter(m -> !m.column().equals(key))
         .map(m -> m.source().equals(m.column()) ? m.column() : m.source() + " as " + m.column())
         .collect(Collectors.joining(", ", "select " + key + ", ", ""));
@@ -140,7 +159,7 @@ final class Books {
   private static Map<String, @Nullable Object> values(List<Member> members, ResultSet row)
       throws SQLException {
     Map<String, @Nullable Object> values = new LinkedHashMap<>();
-    for (Member member : members) {
+    for (Member member : inColumns(members)) {
       values.put(member.name(), member.type().fromRow(row, member.column()));
     }
     return values;

@@ -131,6 +131,10 @@ final class Checks {
                 "it is recognised or measured without a recognition");
             yield captures.find(new CaptureId(id(entry))).isPresent();
           }
+          case "shop", "shopRules", "shopLogo" -> {
+            ShopChecks.check(entry);
+            yield true;
+          }
           case "readings" -> {
             readings.addFigures(
                 new ReadingId(id(entry)), ReadingDocument.fromJson(entry.text("document")));

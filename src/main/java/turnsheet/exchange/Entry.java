@@ -37,6 +37,11 @@ record Entry(
     return (Long) Objects.requireNonNull(values.get(name));
   }
 
+  /** A number that is never null. */
+  double decimal(String name) {
+    return (Double) Objects.requireNonNull(values.get(name));
+  }
+
   boolean is(Kind one) {
     return kind.equals(one);
   }
@@ -62,14 +67,25 @@ record Entry(
     return JsonTree.write(tree());
   }
 
-  /** Names of the members in which another entry of the same key is not equal to this one. */
+  /** The same with one value more. */
+  Entry with(String name, Object value) {
+    Map<String, @Nullable Object> more = new LinkedHashMap<>(values);
+    more.put(name, value);
+    return new Entry(kind, more, parts);
+  }
+
+  /**
+   * Names of the members in which another entry of the same key is not equal to this one; bytes in
+   * the store are known by their SHA-256, which is a member too.
+   */
   List<String> differences(Entry other) {
     Map<String, @Nullable Object> here = tree();
     Map<String, @Nullable Object> there = other.tree();
     List<String> names = new ArrayList<>();
     here.forEach(
         (name, value) -> {
-          if (!JsonTree.write(value).equals(JsonTree.write(there.get(name)))) {
+          if (!kind.isStored(name)
+              && !JsonTree.write(value).equals(JsonTree.write(there.get(name)))) {
             names.add(name);
           }
         });

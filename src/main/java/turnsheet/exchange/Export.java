@@ -5,6 +5,7 @@ import java.io.Writer;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.UUID;
 import org.jspecify.annotations.Nullable;
 import org.springframework.stereotype.Component;
@@ -15,7 +16,8 @@ import org.springframework.transaction.support.TransactionTemplate;
 /**
  * Writes the books out: an entry a line, in an order that two exports of the same books share.
  *
- * <p>Memory: the keys of one kind and {@value #AT_ONCE} entries, however many there are.
+ * <p>Memory: the keys of one kind and {@value #AT_ONCE} entries with one picture, however many
+ * there are.
  */
 @Component
 public final class Export {
@@ -28,11 +30,14 @@ public final class Export {
 
   private final Books books;
   private final FigureRows figures;
+  private final Pictures pictures;
   private final TransactionTemplate snapshot;
 
-  Export(Books books, FigureRows figures, PlatformTransactionManager transactions) {
+  Export(
+      Books books, FigureRows figures, Pictures pictures, PlatformTransactionManager transactions) {
     this.books = books;
     this.figures = figures;
+    this.pictures = pictures;
     this.snapshot = snapshot(transactions);
   }
 
@@ -76,9 +81,12 @@ public final class Export {
       for (int from = 0; from < keys.size(); from += AT_ONCE) {
         List<?> some = keys.subList(from, Math.min(keys.size(), from + AT_ONCE));
         for (Entry entry : books.read(kind, some)) {
-          out.write(before);
-          out.write(entry.toJson());
-          before = ",\n";
+          Optional<Entry> whole = pictures.filled(entry);
+          if (whole.isPresent()) {
+            out.write(before);
+            out.write(whole.get().toJson());
+            before = ",\n";
+          }
         }
       }
       out.write("\n]");

@@ -21,7 +21,8 @@ import turnsheet.exchange.RefusedFileException.Place;
  * Reads an exported document from its first to its last character, an entry at a time.
  *
  * <p>Strict: every member has to be there and none besides, the lists in their order. What was cut
- * off, made by something else or changed by hand is noticed rather than half understood.
+ * off, made by something else or changed by hand is noticed rather than half understood. A file of
+ * an earlier version has the lists of that version.
  */
 final class ExportReader {
 
@@ -100,6 +101,9 @@ final class ExportReader {
 
   private void lists(Taker taker) {
     for (Kind kind : Kinds.ALL) {
+      if (kind.since() > documentVersion) {
+        continue;
+      }
       name(kind.name());
       if (json.nextToken() != JsonToken.START_ARRAY) {
         throw refused("the list of " + kind.name() + " should begin here.");

@@ -10,6 +10,7 @@ import java.util.UUID;
 import org.jspecify.annotations.Nullable;
 import org.springframework.dao.DataAccessException;
 import org.springframework.dao.DataIntegrityViolationException;
+import turnsheet.exchange.Import.ShopSettings;
 import turnsheet.exchange.ImportResult.Left;
 import turnsheet.exchange.ImportResult.Reason;
 import turnsheet.exchange.RefusedFileException.Place;
@@ -20,6 +21,8 @@ final class Importing implements ExportReader.Taker {
   private final Books books;
   private final Places places;
   private final Checks checks;
+  private final Pictures pictures;
+  private final ShopSettings settings;
   private final Map<String, Count> counts = new LinkedHashMap<>();
 
   /** Rows known to be here, and rows of the file that are not: both as table and key. */
@@ -27,10 +30,14 @@ final class Importing implements ExportReader.Taker {
 
   private final Set<Row> left = new HashSet<>();
 
-  Importing(Books books, Places places, Checks checks) {
+  private int tookOver;
+
+  Importing(Books books, Places places, Checks checks, Pictures pictures, ShopSettings settings) {
     this.books = books;
     this.places = places;
     this.checks = checks;
+    this.pictures = pictures;
+    this.settings = settings;
     Kinds.ALL.forEach(kind -> counts.put(kind.name(), new Count()));
   }
 
@@ -57,6 +64,11 @@ final class Importing implements ExportReader.Taker {
             .toList());
   }
 
+  /** How many settings of the shop were replaced. */
+  int tookOver() {
+    return tookOver;
+  }
+
   @Override
   public void take(Entry entry, Place place) {
     Count count = count(entry);
@@ -66,6 +78,17 @@ final class Importing implements ExportReader.Taker {
       List<String> differences = entry.differences(standing.get(0));
       if (differences.isEmpty()) {
         count.same++;
+        holding(entry, place, () -> pictures.restore(entry));
+      } else if (settings == ShopSettings.TAKE_OVER && ShopKinds.has(entry.kind())) {
+        holding(
+            entry,
+            place,
+            () -> {
+              books.update(entry);
+              checks.afterwards(entry);
+            });
+        count.added++;
+        tookOver++;
       } else {
         leaveOut(entry, place, Reason.OTHER_CONTENT, differences);
       }
@@ -88,18 +111,29 @@ final class Importing implements ExportReader.Taker {
   }
 
   private void add(Entry entry, Place place) {
+    holding(
+        entry,
+        place,
+        () -> {
+          pictures.keep(entry);
+          books.insert(entry, checks.extras(entry));
+          checks.afterwards(entry);
+        });
+    noteHere(entry);
+    entry.settings().forEach(setting -> here.add(new Row(Kinds.SETTING_TABLE, setting)));
+  }
+
+  /** Says of what goes wrong at which entry it did. */
+  private static void holding(Entry entry, Place place, Runnable step) {
     try {
-      books.insert(entry, checks.extras(entry));
-      checks.afterwards(entry);
+      step.run();
     } catch (DataIntegrityViolationException e) {
       throw refused(entry, place, "a value is longer or larger than it can be, or stands twice");
-    } catch (DataAccessException e) {
+    } catch (DataAccessException | RefusedFileException e) {
       throw e;
     } catch (RuntimeException e) {
       throw refused(entry, place, String.valueOf(e.getMessage()));
     }
-    noteHere(entry);
-    entry.settings().forEach(setting -> here.add(new Row(Kinds.SETTING_TABLE, setting)));
   }
 
   /** Members that name something of the file that was left out. */

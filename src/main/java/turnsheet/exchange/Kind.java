@@ -11,6 +11,7 @@ import java.util.List;
  * @param within condition that an entry belongs to a unit or a visit; {@code {unit}} stands for the
  *     condition on the unit and {@code {visits}} for the ids of the visits
  * @param members the key first
+ * @param since version of the document that brought it
  */
 record Kind(
     String name,
@@ -19,7 +20,25 @@ record Kind(
     String order,
     String within,
     List<Member> members,
-    List<Part> parts) {
+    List<Part> parts,
+    int since) {
+
+  /** A kind that was there from the first version. */
+  Kind(
+      String name,
+      String table,
+      String label,
+      String order,
+      String within,
+      List<Member> members,
+      List<Part> parts) {
+    this(name, table, label, order, within, members, parts, 1);
+  }
+
+  /** Whether a member's bytes are in the store and not in the table. */
+  boolean isStored(String member) {
+    return members.stream().anyMatch(m -> m.name().equals(member) && m.type() == MemberType.STORED);
+  }
 
   Member key() {
     return members.get(0);

@@ -148,14 +148,19 @@ final class Kinds {
 
   static final List<Kind> ALL =
       List.of(
+          ShopKinds.PROFILE,
+          ShopKinds.RULES,
+          ShopKinds.LOGO,
           INSTRUMENTS,
           MEDIA,
           MODELS,
           CUSTOMERS,
           UNITS,
           VISITS,
+          BenchKinds.PHOTOS,
           BenchKinds.CLOCK_CHECKS,
           BenchKinds.CAPTURES,
+          BenchKinds.LEFT_OUT,
           BenchKinds.READINGS,
           BenchKinds.REPORTS);
 

@@ -10,6 +10,7 @@ import java.time.LocalDate;
 import java.time.OffsetDateTime;
 import java.time.ZoneOffset;
 import java.time.temporal.ChronoUnit;
+import java.util.Base64;
 import java.util.Objects;
 import java.util.UUID;
 import org.jspecify.annotations.Nullable;
@@ -29,7 +30,11 @@ enum MemberType {
   /** a day, ISO 8601 */
   DAY(Types.DATE, "a day"),
   /** JSON within the document, text in the column */
-  DOCUMENT(Types.VARCHAR, "an object or a list");
+  DOCUMENT(Types.VARCHAR, "an object or a list"),
+  /** bytes in the column, base 64 (RFC 4648, with padding) in the document and between the two */
+  BYTES(Types.BINARY, "bytes in base 64"),
+  /** the same, but of a file of the store and in no column */
+  STORED(Types.NULL, "bytes in base 64");
 
   private final int sqlType;
   private final String words;
@@ -53,7 +58,8 @@ enum MemberType {
         switch (this) {
           case ID -> row.getObject(column, UUID.class);
           case TEXT, DOCUMENT -> row.getString(column);
-          case CONTENT -> row.getBytes(column);
+          case CONTENT, BYTES -> row.getBytes(column);
+          case STORED -> throw new IllegalStateException("no column holds " + column);
           case WHOLE -> row.getLong(column);
           case DECIMAL -> row.getDouble(column);
           case FLAG -> row.getBoolean(column);
@@ -65,6 +71,7 @@ enum MemberType {
     }
     return switch (this) {
       case CONTENT -> new String((byte[]) value, StandardCharsets.UTF_8);
+      case BYTES -> Base64.getEncoder().encodeToString((byte[]) value);
       case TIME -> ((OffsetDateTime) value).toInstant();
       case DOCUMENT -> JsonTree.canonical((String) value);
       default -> value;
@@ -74,6 +81,7 @@ enum MemberType {
   Object toColumn(Object value) {
     return switch (this) {
       case CONTENT -> ((String) value).getBytes(StandardCharsets.UTF_8);
+      case BYTES -> Base64.getDecoder().decode((String) value);
       case TIME -> ((Instant) value).atOffset(ZoneOffset.UTC);
       default -> value;
     };
@@ -105,6 +113,7 @@ enum MemberType {
         case TIME -> instant((String) json);
         case DAY -> LocalDate.parse((String) json);
         case DOCUMENT -> document(json);
+        case BYTES, STORED -> base64((String) json);
       };
     } catch (ClassCastException | DateTimeException e) {
       throw new IllegalArgumentException("not " + words, e);
@@ -142,6 +151,13 @@ enum MemberType {
       throw new IllegalArgumentException("a time in the year " + year);
     }
     return instant;
+  }
+
+  private static String base64(String text) {
+    if (!Base64.getEncoder().encodeToString(Base64.getDecoder().decode(text)).equals(text)) {
+      throw new IllegalArgumentException("not as an export writes it");
+    }
+    return text;
   }
 
   private static String document(Object json) {

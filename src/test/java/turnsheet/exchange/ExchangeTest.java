@@ -18,6 +18,7 @@ import turnsheet.core.measure.Figure;
 import turnsheet.core.measure.FigureName;
 import turnsheet.core.measure.Reading;
 import turnsheet.document.FigurePaths;
+import turnsheet.exchange.Import.ShopSettings;
 import turnsheet.exchange.ImportResult.Left;
 import turnsheet.exchange.ImportResult.OfKind;
 import turnsheet.exchange.ImportResult.Reason;
@@ -77,22 +78,6 @@ class ExchangeTest {
     Reports reports = service.getBean(Reports.class);
     assertThat(reports.find(1).orElseThrow().replacedBy()).isEqualTo(2);
     assertThat(reports.pdf(2, report -> new byte[] {1})).hasValue(new byte[] {1});
-  }
-
-  /** As services wrote it before parts had kinds. */
-  @Test
-  void aDocumentOfVersion1IsReadWithPartsOfNoKind() throws IOException {
-    String old =
-        everything
-            .replace("\"version\": 2", "\"version\": 1")
-            .replaceAll(
-                "(\"name\": ?\"capstan shaft\"[^}]*?), ?\"kind\": ?null, ?\"details\": ?null",
-                "$1");
-    assertThat(old).doesNotContain("details");
-    database.empty();
-
-    assertThat(take(old).complete()).isTrue();
-    assertThat(json(Scope.everything())).isEqualTo(everything);
   }
 
   @Test
@@ -203,6 +188,7 @@ class ExchangeTest {
     jdbc.sql("delete from reading_series").update();
     jdbc.sql("delete from reading").update();
     jdbc.sql("delete from refused_channel").update();
+    jdbc.sql("delete from left_out_capture").update();
     jdbc.sql("delete from capture").update();
     jdbc.sql("delete from visit where id = ?").param(bench.visit.id().value()).update();
 
@@ -267,7 +253,8 @@ class ExchangeTest {
   }
 
   private ImportResult take(String file) throws IOException {
-    return importer.take(new ByteArrayInputStream(file.getBytes(StandardCharsets.UTF_8)));
+    return importer.take(
+        new ByteArrayInputStream(file.getBytes(StandardCharsets.UTF_8)), ShopSettings.KEEP);
   }
 
   private String json(Scope scope) throws IOException {

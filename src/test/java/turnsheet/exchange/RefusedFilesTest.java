@@ -14,6 +14,7 @@ import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.Test;
 import org.springframework.context.annotation.AnnotationConfigApplicationContext;
 import org.springframework.jdbc.core.simple.JdbcClient;
+import turnsheet.exchange.Import.ShopSettings;
 import turnsheet.testing.Database;
 import turnsheet.testing.OnEachDatabase;
 
@@ -65,7 +66,7 @@ class RefusedFilesTest {
       // the last two bytes are the brace and a line feed that nobody needs
       int length = i == 0 ? whole.length - 2 : i == 1 ? 0 : random.nextInt(whole.length - 2);
       byte[] cut = java.util.Arrays.copyOf(whole, length);
-      assertThatThrownBy(() -> importer.take(new ByteArrayInputStream(cut)))
+      assertThatThrownBy(() -> importer.take(new ByteArrayInputStream(cut), ShopSettings.KEEP))
           .as("cut at " + length)
           .isInstanceOfSatisfying(
               RefusedFileException.class,
@@ -88,7 +89,7 @@ class RefusedFilesTest {
       int at = random.nextInt(changed.length);
       changed[at] = i % 3 == 0 ? (byte) random.nextInt(256) : (byte) "\"{}[],:0-x".charAt(i % 10);
       try {
-        importer.take(new ByteArrayInputStream(changed));
+        importer.take(new ByteArrayInputStream(changed), ShopSettings.KEEP);
         database.empty();
       } catch (RefusedFileException e) {
         refused++;
@@ -112,13 +113,24 @@ class RefusedFilesTest {
         everything.replaceFirst("\"note\":", "\"extra\":1,\"note\":"), "brokenExport", "'extra'");
     refused(everything.replaceFirst("\"media\"", "\"medias\""), "brokenExport", "\"media\"");
     refused(
-        everything.replaceFirst("\"speedUnit\":\"[A-Z_]+\"", "\"speedUnit\":\"FURLONGS\""),
+        everything.replaceFirst("\"speedUnit\":\"CM_PER_S\"", "\"speedUnit\":\"FURLONGS\""),
         "brokenExport",
         "this entry of models is wrong");
     refused(
         everything.replaceFirst("\"name\":\"Test tape\"", "\"name\":\"" + "x".repeat(300) + "\""),
         "brokenExport",
         "this entry of media is wrong");
+    refused(
+        everything.replace("\"decisionRule\":\"GUARDED\"", "\"decisionRule\":\"GUESSED\""),
+        "brokenExport",
+        "this entry of shopRules is wrong");
+    refused(
+        everything.replace("\"image/png\"", "\"image/svg+xml\""), "brokenExport", "it is no PNG");
+    refused(everything.replace("\"widthPx\":8", "\"widthPx\":9"), "brokenExport", "another size");
+    refused(
+        everything.replaceFirst("\"jpeg\":\"/9j/", "\"jpeg\":\"/9k/"),
+        "brokenExport",
+        "not the one of its SHA-256");
     refused(everything.replace("A. Customer", "A\\u0000B"), "brokenExport", "'name' is not a text");
   }
 
@@ -141,14 +153,18 @@ class RefusedFilesTest {
                 return read();
               }
             });
-    assertThatThrownBy(() -> importer.take(breaking)).isInstanceOf(IOException.class);
+    assertThatThrownBy(() -> importer.take(breaking, ShopSettings.KEEP))
+        .isInstanceOf(IOException.class);
     assertEmpty();
   }
 
   private void refused(String file, String code, String words) {
     database.empty();
     assertThatThrownBy(
-            () -> importer.take(new ByteArrayInputStream(file.getBytes(StandardCharsets.UTF_8))))
+            () ->
+                importer.take(
+                    new ByteArrayInputStream(file.getBytes(StandardCharsets.UTF_8)),
+                    ShopSettings.KEEP))
         .isInstanceOfSatisfying(
             RefusedFileException.class, e -> assertThat(e.code()).isEqualTo(code))
         .hasMessageContaining(words);

@@ -1,5 +1,10 @@
 package turnsheet.exchange;
 
+import java.awt.image.BufferedImage;
+import java.io.ByteArrayInputStream;
+import java.io.ByteArrayOutputStream;
+import java.io.IOException;
+import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
 import java.sql.Types;
 import java.time.Clock;
@@ -8,6 +13,7 @@ import java.time.LocalDate;
 import java.time.ZoneOffset;
 import java.util.List;
 import java.util.UUID;
+import javax.imageio.ImageIO;
 import org.springframework.context.annotation.AnnotationConfigApplicationContext;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.jdbc.datasource.DataSourceTransactionManager;
@@ -18,11 +24,14 @@ import org.springframework.transaction.support.TransactionTemplate;
 import turnsheet.access.Accounts;
 import turnsheet.access.AuditTrail;
 import turnsheet.access.CurrentUser;
+import turnsheet.access.ShopProfiles;
 import turnsheet.bench.ClockChecks;
 import turnsheet.capture.CaptureChoices;
 import turnsheet.capture.CaptureId;
+import turnsheet.capture.CaptureStore;
 import turnsheet.capture.Captures;
 import turnsheet.capture.Looked;
+import turnsheet.capture.StoredBytes;
 import turnsheet.core.diagnose.DecisionRule;
 import turnsheet.core.format.api.Contents;
 import turnsheet.core.format.api.ReadOptions;
@@ -51,10 +60,17 @@ final class SampleBooks {
 
   static final String ODD = "=1+1; \"quoted\", 'and'\r\nÄ µ \uD83C\uDF9B / </script> \\ \t end";
 
+  /** One for all books; what lies in it is known by its digest. */
+  static final CaptureStore STORE = ExportOn.store();
+
   private SampleBooks() {}
 
   /** The parts that an export and an import are made of, on a database. */
   static AnnotationConfigApplicationContext service(Database database) {
+    return service(database, STORE);
+  }
+
+  static AnnotationConfigApplicationContext service(Database database, CaptureStore store) {
     AnnotationConfigApplicationContext context = new AnnotationConfigApplicationContext();
     context.registerBean(JdbcClient.class, database::jdbc);
     context.registerBean(
@@ -65,6 +81,8 @@ final class SampleBooks {
     context.registerBean(
         PasswordEncoder.class, PasswordEncoderFactories::createDelegatingPasswordEncoder);
     context.register(Books.class, FigureRows.class, Export.class, Import.class);
+    context.registerBean(CaptureStore.class, () -> store);
+    context.register(Pictures.class, ShopProfiles.class);
     context.register(Places.class, Checks.class, AuditTrail.class, CurrentUser.class);
     context.register(Accounts.class, ClockChecks.class, Captures.class, Readings.class);
     context.register(Customers.class, Instruments.class, Media.class, MachineModels.class);
@@ -106,9 +124,46 @@ final class SampleBooks {
     jdbc.sql("insert into refused_channel values (?, 3, 'silent', 'The channel is silent.')")
         .param(capture.value())
         .update();
+    shop(jdbc);
+    photograph(jdbc, past);
+    jdbc.sql("insert into left_out_capture values (?, ?, ?, 'A')")
+        .params(old.value(), ODD, Instant.EPOCH.atOffset(ZoneOffset.UTC))
+        .update();
     Report first = report(database, past, null);
     report(database, past, first.number());
     return bench;
+  }
+
+  /** The shop as its first run and its owner left it; the rules are there from the beginning. */
+  static void shop(JdbcClient jdbc) {
+    jdbc.sql("insert into shop_rules values (1, 'GUARDED', 10, 0.02)").update();
+    jdbc.sql("insert into shop_profile values (1, ?, ?, 'IN_PER_S', 60, 'LETTER', 'de')")
+        .params("Shop " + ODD, "1 Invented Lane\nNowhere")
+        .update();
+    jdbc.sql("insert into shop_logo values (1, 'image/png', ?)").param(picture("png")).update();
+  }
+
+  private static void photograph(JdbcClient jdbc, VisitId visit) {
+    try {
+      StoredBytes bytes = STORE.receive(new ByteArrayInputStream(picture("jpeg")));
+      jdbc.sql("insert into plate_photo values (?, ?, ?, 8, 6, ?, 'B')")
+          .params(
+              visit.value(), bytes.sha256(), bytes.length(), Instant.EPOCH.atOffset(ZoneOffset.UTC))
+          .update();
+    } catch (IOException e) {
+      throw new UncheckedIOException(e);
+    }
+  }
+
+  /** 8 x 6 pixels. */
+  static byte[] picture(String format) {
+    try {
+      ByteArrayOutputStream out = new ByteArrayOutputStream();
+      ImageIO.write(new BufferedImage(8, 6, BufferedImage.TYPE_INT_RGB), format, out);
+      return out.toByteArray();
+    } catch (IOException e) {
+      throw new UncheckedIOException(e);
+    }
   }
 
   private static void measured(JdbcClient jdbc, CaptureId id, UUID instrument, UUID medium) {

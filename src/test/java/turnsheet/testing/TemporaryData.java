@@ -33,7 +33,8 @@ public final class TemporaryData
                     "turnsheet.data-dir", folder.toString(), "spring.datasource.url", database)));
   }
 
-  private static Path newFolder() {
+  /** A folder that goes away with the process. */
+  public static Path newFolder() {
     try {
       Path folder = Files.createTempDirectory("turnsheet-test");
       Runtime.getRuntime().addShutdownHook(new Thread(() -> delete(folder)));

@@ -46,10 +46,17 @@ class ExchangeApi {
     files.csv(files.scope(unit, visit), response);
   }
 
-  /** Takes a document in, for an owner; answers 422 where nothing of it could be taken. */
+  /**
+   * Takes a document in, for an owner; answers 422 where nothing of it could be taken.
+   *
+   * @param shop {@code take} to replace letterhead, logo, preferences and rules by those of the
+   *     file
+   */
   @PostMapping(path = "/import", consumes = MediaType.APPLICATION_JSON_VALUE)
-  ImportDocument take(HttpServletRequest body) throws IOException {
-    ImportResult result = desk.take(body.getInputStream());
+  ImportDocument take(
+      @RequestParam(required = false) @Nullable String shop, HttpServletRequest body)
+      throws IOException {
+    ImportResult result = desk.take(body.getInputStream(), shop);
     return ImportDocument.of(result);
   }
 }

@@ -5,6 +5,7 @@ import java.io.IOException;
 import java.io.InputStream;
 import java.util.List;
 import java.util.stream.Stream;
+import org.jspecify.annotations.Nullable;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
 import org.springframework.web.bind.annotation.GetMapping;
@@ -49,14 +50,17 @@ class ImportController {
   /** Answers with the page itself: to send the same file again does no harm. */
   @PostMapping("/import")
   String take(
-      @RequestParam(name = "file") MultipartFile file, Model model, HttpServletResponse response)
+      @RequestParam(name = "file") MultipartFile file,
+      @RequestParam(required = false) @Nullable String shop,
+      Model model,
+      HttpServletResponse response)
       throws IOException {
     if (file.isEmpty()) {
       throw new RefusedRequestException(
           "noFile", "No file came with the form, or an empty one: choose an exported document.");
     }
     try (InputStream in = file.getInputStream()) {
-      ImportResult result = desk.take(in);
+      ImportResult result = desk.take(in, shop);
       List<Row> left = result.kinds().stream().flatMap(ImportController::rows).toList();
       model.addAttribute("fileName", file.getOriginalFilename());
       model.addAttribute("result", result);

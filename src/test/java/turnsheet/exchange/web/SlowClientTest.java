@@ -113,7 +113,7 @@ class SlowClientTest {
             files.json(Scope.everything(), response);
           }
         });
-    context.addServletMappingDecoded("/", "export");
+    context.addServletMappingDecoded("/", "export", false);
     server.start();
     return server;
   }
