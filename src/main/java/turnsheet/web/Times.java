@@ -2,6 +2,7 @@ package turnsheet.web;
 
 import java.time.Instant;
 import java.time.LocalDate;
+import java.time.YearMonth;
 import java.time.ZoneId;
 import java.time.format.DateTimeFormatter;
 import java.util.Locale;
@@ -24,6 +25,7 @@ public class Times {
   private static final DateTimeFormatter MONTH =
       DateTimeFormatter.ofPattern("yyyy-MM", Locale.ROOT);
   private static final DateTimeFormatter MONTH_GERMAN = german("LLLL yyyy");
+  private static final DateTimeFormatter SHORT_MONTH_GERMAN = german("MMM yyyy");
 
   private final ZoneId zone = ZoneId.systemDefault();
 
@@ -39,7 +41,7 @@ public class Times {
 
   /** A day in a language that is not that of the page around it. */
   public String day(Instant at, Locale locale) {
-    return PageLanguage.isGerman(locale) ? DAY_GERMAN.format(date(at)) : date(at).toString();
+    return day(date(at), locale);
   }
 
   /** A day that was entered as one; empty for none. */
@@ -47,7 +49,17 @@ public class Times {
     if (day == null) {
       return "";
     }
-    return isGerman() ? DAY_GERMAN.format(day) : day.toString();
+    return day(day, LocaleContextHolder.getLocale());
+  }
+
+  /** A day in a language. */
+  public static String day(LocalDate day, Locale locale) {
+    return PageLanguage.isGerman(locale) ? DAY_GERMAN.format(day) : day.toString();
+  }
+
+  /** A month where there is little room: {@code 2026-12}, or {@code Dez. 2026}. */
+  public static String shortMonth(YearMonth month, Locale locale) {
+    return (PageLanguage.isGerman(locale) ? SHORT_MONTH_GERMAN : MONTH).format(month);
   }
 
   /** {@code 2026-12}, or {@code Dezember 2026}. */

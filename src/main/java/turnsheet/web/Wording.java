@@ -21,6 +21,11 @@ public final class Wording {
     this.numbers = Numbers.in(locale);
   }
 
+  /** The language. */
+  public Locale locale() {
+    return locale;
+  }
+
   /** The text of a key; parts are texts already. */
   public String text(String key, String... parts) {
     return messages.getMessage(key, parts, locale);

@@ -136,7 +136,10 @@ class ShopSettingsTest {
     assertThat(profile().name()).isEqualTo("Another shop");
     // what the old file has, the new one has in the same words; its parts are of no kind
     assertThat(
-            json(Scope.everything()).replace(",\"kind\":null,\"details\":null", "").lines().toList())
+            json(Scope.everything())
+                .replace(",\"kind\":null,\"details\":null", "")
+                .lines()
+                .toList())
         .containsAll(old.lines().filter(line -> line.startsWith("{\"")).toList());
   }
 

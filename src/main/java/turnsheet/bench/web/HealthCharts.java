@@ -64,7 +64,7 @@ final class HealthCharts {
     Axis x = Axis.linear(words.text("reading.chart.day"), "", first - air, last + air);
     return new SvgChart(x, y, HEIGHT, words.text(title), words.text(more))
         .decimalSign(words.numbers().decimalSign())
-        .xTicks(DateTicks.between(x.from(), x.to()));
+        .xTicks(DateTicks.between(x.from(), x.to(), words.locale()));
   }
 
   private static List<TimeMarks.Point> points(Stream<ClockCheck> checks) {

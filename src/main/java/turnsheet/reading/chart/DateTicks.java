@@ -4,6 +4,8 @@ import java.time.LocalDate;
 import java.time.YearMonth;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
+import turnsheet.web.Times;
 
 /** Round dates for an axis whose values are days since 1970-01-01. */
 public final class DateTicks {
@@ -14,34 +16,34 @@ public final class DateTicks {
 
   private DateTicks() {}
 
-  /** Marks between two days, seven at most, in rising order. */
-  public static List<Axis.Tick> between(double fromDay, double toDay) {
+  /** Marks between two days, seven at most, in rising order, written as a language does. */
+  public static List<Axis.Tick> between(double fromDay, double toDay, Locale locale) {
     double span = toDay - fromDay;
     for (int step : DAYS) {
       if (span / step <= MOST - 1) {
-        return days(fromDay, toDay, step);
+        return days(fromDay, toDay, step, locale);
       }
     }
     for (int step : MONTHS) {
       // a month has at least 28 days
       if (span / (28.0 * step) <= MOST - 1) {
-        return months(fromDay, toDay, step);
+        return months(fromDay, toDay, step, locale);
       }
     }
     return List.of();
   }
 
-  private static List<Axis.Tick> days(double from, double to, int step) {
+  private static List<Axis.Tick> days(double from, double to, int step, Locale locale) {
     List<Axis.Tick> ticks = new ArrayList<>();
     for (long day = -Math.floorDiv(-(long) Math.ceil(from), (long) step) * step;
         day <= to;
         day += step) {
-      ticks.add(new Axis.Tick(day, LocalDate.ofEpochDay(day).toString()));
+      ticks.add(new Axis.Tick(day, Times.day(LocalDate.ofEpochDay(day), locale)));
     }
     return ticks;
   }
 
-  private static List<Axis.Tick> months(double from, double to, int step) {
+  private static List<Axis.Tick> months(double from, double to, int step, Locale locale) {
     YearMonth first = YearMonth.from(LocalDate.ofEpochDay((long) Math.floor(from)));
     long number = first.getYear() * 12L + first.getMonthValue() - 1;
     List<Axis.Tick> ticks = new ArrayList<>();
@@ -53,7 +55,9 @@ public final class DateTicks {
       }
       if (day >= from) {
         ticks.add(
-            new Axis.Tick(day, step >= 12 ? Integer.toString(month.getYear()) : month.toString()));
+            new Axis.Tick(
+                day,
+                step >= 12 ? Integer.toString(month.getYear()) : Times.shortMonth(month, locale)));
       }
     }
   }

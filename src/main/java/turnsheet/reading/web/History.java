@@ -55,7 +55,7 @@ final class History {
                     "history.chart.more",
                     String.join(", ", history.conditions().stream().map(words::said).toList())))
             .decimalSign(words.numbers().decimalSign());
-    chart.xTicks(DateTicks.between(x.from(), x.to()));
+    chart.xTicks(DateTicks.between(x.from(), x.to(), words.locale()));
     limits.forEach(level -> chart.limit(level.value(), level.name()));
     if (band != null) {
       chart.mark(

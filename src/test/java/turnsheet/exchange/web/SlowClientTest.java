@@ -113,7 +113,7 @@ class SlowClientTest {
             files.json(Scope.everything(), response);
           }
         });
-    context.addServletMappingDecoded("/", "export", false);
+    context.addServletMapping("/", "export");
     server.start();
     return server;
   }
