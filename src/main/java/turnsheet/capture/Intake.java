@@ -223,7 +223,12 @@ public class Intake {
             null,
             why,
             null);
-    captures.add(received);
+    transaction.executeWithoutResult(
+        status -> {
+          // the file took its time: somebody may have closed the visit or named another model
+          shelf.hold(key).requireOpen();
+          captures.add(received);
+        });
     return received;
   }
 

@@ -58,6 +58,15 @@ class Shelf {
   }
 
   /**
+   * The same, and nobody changes the visit or the model of its unit until the transaction at hand
+   * commits.
+   */
+  Surroundings hold(CaptureKey key) {
+    visits.lock(key.visit());
+    return of(key);
+  }
+
+  /**
    * The visit that something comes in for.
    *
    * @throws NotFoundException if there is none

@@ -8,6 +8,7 @@ import java.util.Optional;
 import org.springframework.dao.DuplicateKeyException;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.stereotype.Component;
+import org.springframework.transaction.support.TransactionOperations;
 
 /** The units that the shop knows. */
 @Component
@@ -38,10 +39,12 @@ public final class Units {
               + " u.created_at) desc, u.id");
 
   private final JdbcClient jdbc;
+  private final TransactionOperations transactions;
   private final Clock clock;
 
-  public Units(JdbcClient jdbc, Clock clock) {
+  public Units(JdbcClient jdbc, TransactionOperations transactions, Clock clock) {
     this.jdbc = jdbc;
+    this.transactions = transactions;
     this.clock = clock;
   }
 
@@ -129,22 +132,36 @@ public final class Units {
   }
 
   /**
-   * Writes what a unit is now; its id and the time it was entered stay.
+   * Writes what a unit is now; its id and the time it was entered stay. A recording that comes in
+   * meanwhile waits, or is waited for: see {@link Visits#lock}.
    *
    * @throws RefusedChangeException {@code serialTaken}, or {@code modelHasCaptures} where the model
    *     changes although captures name its speed settings
    */
   public Optional<Unit> change(
       UnitId id, ModelId model, CustomerId customer, String serialNumber, String note) {
-    return find(id)
-        .map(
-            old -> {
-              if (!old.modelId().equals(model) && hasCaptures(id)) {
-                throw new RefusedChangeException("modelHasCaptures", old.serialNumber());
-              }
-              return write(
-                  new Unit(id, old.code(), model, customer, serialNumber, note, old.createdAt()));
-            });
+    return transactions.execute(
+        status -> {
+          lock(jdbc, id);
+          return find(id)
+              .map(
+                  old -> {
+                    if (!old.modelId().equals(model) && hasCaptures(id)) {
+                      throw new RefusedChangeException("modelHasCaptures", old.serialNumber());
+                    }
+                    return write(
+                        new Unit(
+                            id, old.code(), model, customer, serialNumber, note, old.createdAt()));
+                  });
+        });
+  }
+
+  /** Changes to a unit, its visits and what comes in for them queue here until they commit. */
+  static void lock(JdbcClient jdbc, UnitId unit) {
+    jdbc.sql("select id from unit where id = ? for update")
+        .param(unit.value())
+        .query((row, n) -> n)
+        .list();
   }
 
   private UnitCode freeCode() {

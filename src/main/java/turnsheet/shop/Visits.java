@@ -1,8 +1,5 @@
 package turnsheet.shop;
 
-import java.sql.ResultSet;
-import java.sql.SQLException;
-import java.sql.Types;
 import java.time.Clock;
 import java.time.Instant;
 import java.util.List;
@@ -19,23 +16,6 @@ import org.springframework.transaction.support.TransactionOperations;
 @Component
 public final class Visits {
 
-  private static final PageQuery.Listing LISTING =
-      new PageQuery.Listing(
-          """
-          select v.*, u.serial_number, u.model_id, m.name as model_name, u.customer_id,
-            c.name as customer_name,
-            (select max(r.number) from report r where r.visit_id = v.id) as report,
-            (select max(r.issued_at) from report r where r.visit_id = v.id) as reported_at
-          """,
-          """
-          from visit v join unit u on u.id = v.unit_id join machine_model m on m.id = u.model_id
-            join customer c on c.id = u.customer_id
-          """,
-          "",
-          List.of(),
-          "u.serial_number || ' ' || m.name || ' ' || c.name",
-          "order by v.opened_at desc, v.id");
-
   private final JdbcClient jdbc;
   private final TransactionOperations transactions;
   private final FittedParts parts;
@@ -51,16 +31,16 @@ public final class Visits {
   public Optional<Visit> find(VisitId id) {
     return jdbc.sql("select * from visit where id = ?")
         .param(id.value())
-        .query(Visits::visit)
+        .query(VisitRows::visit)
         .optional()
         .map(this::whole);
   }
 
   /** The visit with the unit, model and customer it belongs to. */
   public Optional<VisitSummary> summary(VisitId id) {
-    return jdbc.sql(LISTING.select() + LISTING.from() + " where v.id = ?")
+    return jdbc.sql(VisitRows.LISTING.select() + VisitRows.LISTING.from() + " where v.id = ?")
         .param(id.value())
-        .query(Visits::summary)
+        .query(VisitRows::summary)
         .optional()
         .map(s -> s.withVisit(whole(s.visit())));
   }
@@ -70,7 +50,7 @@ public final class Visits {
     List<Visit> visits =
         jdbc.sql("select * from visit where unit_id = ? order by opened_at desc, id")
             .param(unit.value())
-            .query(Visits::visit)
+            .query(VisitRows::visit)
             .list();
     Map<VisitId, List<FittedPart>> fitted = parts.of(visits);
     return visits.stream().map(v -> v.withParts(fitted.getOrDefault(v.id(), List.of()))).toList();
@@ -83,17 +63,17 @@ public final class Visits {
 
   /** A page of all visits, newest first; words are looked for in serial number, model, customer. */
   public PageOf<VisitSummary> page(PageQuery query) {
-    return whole(query.run(jdbc, LISTING, Visits::summary));
+    return whole(query.run(jdbc, VisitRows.LISTING, VisitRows::summary));
   }
 
   /** A page of the visits of one unit, newest first. */
   public PageOf<VisitSummary> page(UnitId unit, PageQuery query) {
-    return whole(query.run(jdbc, LISTING.where("v.unit_id = ?", unit.value()), Visits::summary));
+    return whole(query.run(jdbc, VisitRows.LISTING.where("v.unit_id = ?", unit.value()), VisitRows::summary));
   }
 
   /** A page of the visits that are still open, newest first. */
   public PageOf<VisitSummary> open(PageQuery query) {
-    return whole(query.run(jdbc, LISTING.where("v.closed_at is null"), Visits::summary));
+    return whole(query.run(jdbc, VisitRows.LISTING.where("v.closed_at is null"), VisitRows::summary));
   }
 
   /** A page of the visits that are open, or were until this instant or later; newest first. */
@@ -101,9 +81,9 @@ public final class Visits {
     return whole(
         query.run(
             jdbc,
-            LISTING.where(
+            VisitRows.LISTING.where(
                 "(v.closed_at is null or v.closed_at >= ?)", Columns.time(Columns.kept(instant))),
-            Visits::summary));
+            VisitRows::summary));
   }
 
   /**
@@ -118,13 +98,7 @@ public final class Visits {
           refuseSecondOpen(unit);
           Instant now = Columns.kept(clock.instant());
           Visit opened = new Visit(VisitId.next(), unit, now, null, complaint, "");
-          jdbc.sql(
-                  """
-                  insert into visit (id, unit_id, opened_at, complaint, work_done)
-                  values (?, ?, ?, ?, ?)
-                  """)
-              .params(opened.id().value(), unit.value(), Columns.time(now), complaint, "")
-              .update();
+          VisitRows.insert(jdbc, opened);
           return opened;
         });
   }
@@ -177,7 +151,7 @@ public final class Visits {
     return Boolean.TRUE.equals(
         transactions.execute(
             status -> {
-              find(id).ifPresent(visit -> lockUnit(visit.unitId()));
+              lock(id);
               if (captures(id) > 0) {
                 throw new RefusedChangeException("visitHasCaptures");
               }
@@ -219,20 +193,25 @@ public final class Visits {
         });
   }
 
+  /**
+   * Holds a visit and its unit as they are until the transaction at hand commits: nobody closes the
+   * visit or gives the unit another model meanwhile. What is to be relied on is read afterwards.
+   */
+  public void lock(VisitId id) {
+    find(id).ifPresent(visit -> lockUnit(visit.unitId()));
+  }
+
   private Optional<Visit> change(VisitId id, UnaryOperator<Visit> verb) {
     return transactions.execute(
         status -> {
-          find(id).ifPresent(visit -> lockUnit(visit.unitId()));
+          lock(id);
           return find(id).map(verb).map(this::write);
         });
   }
 
   /** Changes to the visits of one unit queue here, so that each sees what the one before left. */
   private void lockUnit(UnitId unit) {
-    jdbc.sql("select id from unit where id = ? for update")
-        .param(unit.value())
-        .query((row, n) -> n)
-        .list();
+    Units.lock(jdbc, unit);
   }
 
   private void refuseSecondOpen(UnitId unit) {
@@ -242,22 +221,8 @@ public final class Visits {
   }
 
   private Visit write(Visit visit) {
-    Instant closedAt = visit.closedAt();
-    VisitNotes notes = visit.notes();
-    jdbc.sql(
-            """
-            update visit set closed_at = ?, complaint = ?, work_done = ?, sensor_replaced = ?,
-              sensor_note = ?
-            where id = ?
-            """)
-        .param(1, closedAt == null ? null : Columns.time(closedAt), Types.TIMESTAMP_WITH_TIMEZONE)
-        .param(2, notes.complaint())
-        .param(3, notes.workDone())
-        .param(4, notes.sensorReplaced())
-        .param(5, notes.sensorNote())
-        .param(6, visit.id().value())
-        .update();
-    parts.put(visit.id(), notes.parts());
+    VisitRows.update(jdbc, visit);
+    parts.put(visit.id(), visit.notes().parts());
     return visit;
   }
 
@@ -269,31 +234,5 @@ public final class Visits {
     var fitted = parts.of(page.items().stream().map(VisitSummary::visit).toList());
     return page.map(
         s -> s.withVisit(s.visit().withParts(fitted.getOrDefault(s.visit().id(), List.of()))));
-  }
-
-  private static VisitSummary summary(ResultSet row, int number) throws SQLException {
-    return new VisitSummary(
-        visit(row, number),
-        row.getString("serial_number"),
-        new ModelId(Columns.uuid(row, "model_id")),
-        row.getString("model_name"),
-        new CustomerId(Columns.uuid(row, "customer_id")),
-        row.getString("customer_name"),
-        Columns.longOrNull(row, "report"),
-        Columns.instantOrNull(row, "reported_at"));
-  }
-
-  private static Visit visit(ResultSet row, int number) throws SQLException {
-    return new Visit(
-        new VisitId(Columns.uuid(row, "id")),
-        new UnitId(Columns.uuid(row, "unit_id")),
-        Columns.instant(row, "opened_at"),
-        Columns.instantOrNull(row, "closed_at"),
-        new VisitNotes(
-            row.getString("complaint"),
-            row.getString("work_done"),
-            List.of(),
-            row.getBoolean("sensor_replaced"),
-            row.getString("sensor_note")));
   }
 }

@@ -40,6 +40,7 @@ import turnsheet.shop.ReferenceMedium;
 import turnsheet.shop.SpeedSetting;
 import turnsheet.shop.SpeedSettingId;
 import turnsheet.shop.SpeedUnit;
+import turnsheet.shop.Unit;
 import turnsheet.shop.Units;
 import turnsheet.shop.VisitId;
 import turnsheet.shop.Visits;
@@ -79,7 +80,7 @@ class IntakeTest {
     MachineModel model =
         models.add(MachineModel.named("Invented deck", 120, "").withSetting(setting));
     var customer = new Customers(database.jdbc(), clock).add("An invented customer", "");
-    var unit = new Units(database.jdbc(), clock).add(model.id(), customer.id(), "1001", "");
+    var unit = new Units(database.jdbc(), database.transactions(), clock).add(model.id(), customer.id(), "1001", "");
     key =
         new CaptureKey(
             visits.open(unit.id(), "").id(), setting.id(), CaptureKey.AS_RECEIVED, null, null);
@@ -114,6 +115,28 @@ class IntakeTest {
     assertThat(captures.find(capture.id())).contains(capture);
     assertThat(corrections.nameMethod(capture.id(), null).key().toneMethod()).isNull();
     assertThat(receive("tone").key().toneMethod()).isNull();
+  }
+
+  @Test
+  void aModelThatChangesWhileTheFileIsOnItsWayIsNoticed() {
+    Units units = new Units(database.jdbc(), database.transactions(), clock);
+    Unit unit = units.find(visits.find(key.visit()).orElseThrow().unitId()).orElseThrow();
+    MachineModel other = models.add(MachineModel.named("Another deck", 120, ""));
+    InputStream slow =
+        new java.io.SequenceInputStream(
+            bytes("tone"),
+            new InputStream() {
+              @Override
+              public int read() {
+                units.change(unit.id(), other.id(), unit.customerId(), "1001", "");
+                return -1;
+              }
+            });
+
+    assertThatThrownBy(() -> intake.receive(key, "a.wav", "bench", slow))
+        .isInstanceOfSatisfying(
+            RefusedRequestException.class, e -> assertThat(e.code()).isEqualTo("foreignSetting"));
+    assertThat(captures.ofVisit(key.visit())).isEmpty();
   }
 
   @Test

@@ -34,6 +34,7 @@ public final class SampleBench {
   public final Visit visit;
   private final JdbcClient jdbc;
   private final Clock clock;
+  private final Units units;
 
   public SampleBench(JdbcClient jdbc, TransactionOperations transactions, Clock clock) {
     this.jdbc = jdbc;
@@ -61,13 +62,14 @@ public final class SampleBench {
                         new ServiceLimit(
                             setting, FigureName.WEIGHTED_TWO_SIGMA, 0.06, "service manual"))));
     var customer = new Customers(jdbc, clock).add("A. Customer", "");
-    this.unit = new Units(jdbc, clock).add(modelId, customer.id(), "0042", "");
+    this.units = new Units(jdbc, transactions, clock);
+    this.unit = units.add(modelId, customer.id(), "0042", "");
     this.visit = new Visits(jdbc, transactions, clock).open(unit.id(), "voices waver");
   }
 
   /** Another unit of the model, with nothing behind it. */
   public Unit anotherUnit(String serialNumber) {
-    return new Units(jdbc, clock).add(model.id(), unit.customerId(), serialNumber, "");
+    return units.add(model.id(), unit.customerId(), serialNumber, "");
   }
 
   /** A visit of a unit that was over on the day it began. */

@@ -11,7 +11,11 @@ final class Captures {
   private Captures() {}
 
   static void insertOne(Database database, ShopFixture shop, Unit unit) {
-    Visit visit = shop.visits.open(unit.id(), "");
+    insertOne(database, shop, unit, shop.visits.open(unit.id(), ""));
+  }
+
+  /** In the transaction at hand, where there is one. */
+  static void insertOne(Database database, ShopFixture shop, Unit unit, Visit visit) {
     SpeedSetting setting = shop.models.find(unit.modelId()).orElseThrow().settings().get(0);
     database
         .jdbc()

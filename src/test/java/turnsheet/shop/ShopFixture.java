@@ -27,7 +27,7 @@ final class ShopFixture {
     database.empty();
     customers = new Customers(database.jdbc(), clock);
     models = new MachineModels(database.jdbc(), database.transactions());
-    units = new Units(database.jdbc(), clock);
+    units = new Units(database.jdbc(), database.transactions(), clock);
     visits = visitsAt(database, clock);
     instruments = new Instruments(database.jdbc());
     media = new Media(database.jdbc());

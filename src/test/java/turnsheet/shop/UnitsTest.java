@@ -1,10 +1,16 @@
 package turnsheet.shop;
 
+import static java.util.Objects.requireNonNull;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 
 import java.time.Clock;
 import java.time.Duration;
+import java.util.concurrent.ExecutorService;
+import java.util.concurrent.Executors;
+import java.util.concurrent.Future;
+import java.util.concurrent.TimeUnit;
+import java.util.concurrent.TimeoutException;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import turnsheet.testing.Database;
@@ -111,6 +117,40 @@ class UnitsTest {
     assertThatThrownBy(() -> units.change(unit.id(), other.id(), unit.customerId(), "1001", ""))
         .isInstanceOf(RefusedChangeException.class)
         .hasMessageContaining("modelHasCaptures");
+  }
+
+  @Test
+  void aChangeOfModelWaitsForARecordingThatIsComingIn() throws Exception {
+    Unit unit = shop.unit("1001");
+    MachineModel other = shop.models.add(ShopFixture.transport("Another model"));
+    Visit visit = shop.visits.open(unit.id(), "");
+    ExecutorService colleague = Executors.newSingleThreadExecutor();
+    try {
+      Future<?> change =
+          requireNonNull(
+              database
+                  .transactions()
+                  .execute(
+                      status -> {
+                        shop.visits.lock(visit.id());
+                        Future<?> started =
+                            colleague.submit(
+                                () ->
+                                    units.change(
+                                        unit.id(), other.id(), unit.customerId(), "1001", ""));
+                        // it would be through long before, if it did not wait
+                        assertThatThrownBy(() -> started.get(300, TimeUnit.MILLISECONDS))
+                            .isInstanceOf(TimeoutException.class);
+                        Captures.insertOne(database, shop, unit, visit);
+                        return started;
+                      }));
+      assertThatThrownBy(() -> change.get(20, TimeUnit.SECONDS))
+          .hasRootCauseInstanceOf(RefusedChangeException.class)
+          .hasMessageContaining("modelHasCaptures");
+    } finally {
+      colleague.shutdown();
+    }
+    assertThat(units.find(unit.id())).contains(unit);
   }
 
   @Test

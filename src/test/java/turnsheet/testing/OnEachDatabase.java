@@ -18,7 +18,7 @@ import org.junit.jupiter.params.provider.EnumSource;
  *
  *   UnitsTest(Database database) {
  *     database.empty();
- *     units = new Units(database.jdbc(), Clock.systemUTC());
+ *     units = new Units(database.jdbc(), database.transactions(), Clock.systemUTC());
  *   }
  * }
  * }</pre>
