@@ -98,8 +98,8 @@ class DemoBench {
   void refusedUpload(VisitId visit, Setup setup) {
     receive(
         setup.key(visit, CaptureKey.AS_RECEIVED),
-        SampleUploads.RENAMED_ZIP,
-        SampleUploads.refused(SampleUploads.RENAMED_ZIP));
+        RefusedUploads.RENAMED_ZIP,
+        RefusedUploads.bytes(RefusedUploads.RENAMED_ZIP));
   }
 
   /**

@@ -52,8 +52,8 @@ public final class SampleFolder {
     for (SampleUpload sample : SampleUploads.all()) {
       Files.write(folder.resolve(sample.fileName()), sample.bytes());
     }
-    for (String name : SampleUploads.REFUSED) {
-      Files.write(folder.resolve(name), SampleUploads.refused(name));
+    for (String name : RefusedUploads.ALL) {
+      Files.write(folder.resolve(name), RefusedUploads.bytes(name));
     }
     Files.writeString(folder.resolve("README.md"), readme());
   }

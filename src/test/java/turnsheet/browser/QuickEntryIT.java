@@ -3,14 +3,11 @@ package turnsheet.browser;
 import static org.assertj.core.api.Assertions.assertThat;
 
 import java.io.ByteArrayInputStream;
-import java.nio.file.Files;
 import java.nio.file.Path;
-import java.time.Duration;
 import java.util.ArrayList;
 import java.util.Base64;
 import java.util.List;
 import java.util.Map;
-import java.util.regex.Pattern;
 import javax.imageio.ImageIO;
 import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
@@ -34,7 +31,6 @@ class QuickEntryIT {
   private static final String TACHO = "reel-38-tacho-as-received.wav";
   private static final String EDGES = "reel-9-edges-as-received.csv";
   private static final String TONE = "reel-19-tone-as-received.wav";
-  private static final String PASSWORD = "a long road home 47";
 
   private RunningService service;
   private RunningService other;
@@ -72,14 +68,14 @@ class QuickEntryIT {
     oneKeyMeasuresThemAll();
     theBenchShowsWhatWasMeasuredToday();
     labelsPrintInTheirSize();
-    theBooksOfTheUnitMoveToAnotherService();
+    new MovedBooks(visitor, audit, folder).move(unit, code, other, wrong);
     // the browser reports the status of the files that are meant to be refused
     visitor.complaints().stream().filter(c -> !c.contains("status of 422")).forEach(wrong::add);
     assertThat(wrong).as(String.join("\n", wrong)).isEmpty();
   }
 
   private void aUnitWithThreeSpeedsIsKnown() throws Exception {
-    setUp(service, "Level Turn Bench");
+    FirstRun.of(service, visitor, "Level Turn Bench");
     visitor.open(service.address("/models/new"));
     visitor.fill("name", "Invented three-speed transport");
     visitor.press(visitor.find("form.sheet button"));
@@ -168,72 +164,6 @@ class QuickEntryIT {
     visitor.press(visitor.find("form.sheet button"));
     visitor.open(service.address("/units/labels"));
     printed.sheet(215.9, 279.4);
-  }
-
-  private void theBooksOfTheUnitMoveToAnotherService() throws Exception {
-    visitor.open(unit);
-    visitor.press(visitor.find("main .actions a[href*='/export']"));
-    visitor.protocol(
-        "Browser.setDownloadBehavior",
-        Map.of("behavior", "allow", "downloadPath", folder.toString()));
-    visitor.find("dl.facts a[href*='/export.json']").click();
-    String id = unit.substring(unit.lastIndexOf('/') + 1);
-    Path books = folder.resolve("turnsheet-" + id + ".json");
-    // the browser gives the file its name once it is whole
-    visitor.awaitTrue(() -> Files.exists(books));
-    Path torn = folder.resolve("torn.json");
-    String whole = Files.readString(books);
-    Files.writeString(torn, whole.substring(0, whole.indexOf("\"readings\"") + 500));
-
-    visitor.forgetSession(); // a browser keeps one session for all ports of a host
-    setUp(other, "Second Bench");
-    visitor.open(other.address("/shop"));
-    visitor.press(visitor.find("main a[href='/export']"));
-    bring(SAMPLES.resolve("renamed-zip.wav"));
-    assertThat(visitor.find("[role=alert]").getText())
-        .contains("This is no export of this service")
-        .contains("Nothing of the file was taken in");
-    wrong.addAll(audit.of("/import, refused", 422));
-    bring(torn);
-    assertThat(visitor.find("[role=alert]").getText())
-        .contains("breaks off")
-        .contains("Nothing of the file was taken in");
-    visitor.open(other.address("/units"));
-    assertThat(visitor.all("main .empty")).hasSize(1);
-    visitor.open(other.address("/models"));
-    assertThat(visitor.all("main .empty")).hasSize(1);
-
-    visitor.open(other.address("/import"));
-    bring(books);
-    assertThat(visitor.find("[role=status]").getText()).contains("Everything in");
-    visitor.open(other.address("/units/" + id));
-    assertThat(visitor.find(".unit-code").getText()).isEqualTo(code);
-    visitor.press(visitor.find("main a[href*='/visits/']"));
-    assertThat(visitor.find("table.even").getText()).contains("+0.37", "\u22120.21", "+0.51");
-    bring(other.address("/import"), torn);
-    visitor.open(other.address("/units/" + id));
-    assertThat(visitor.find(".unit-code").getText()).isEqualTo(code);
-  }
-
-  private void bring(String page, Path file) {
-    visitor.open(page);
-    bring(file);
-  }
-
-  private void bring(Path file) {
-    visitor.find("input[name=file]").sendKeys(file.toString());
-    visitor.pressButton("Import");
-  }
-
-  private void setUp(RunningService one, String shop) throws InterruptedException {
-    visitor.open(
-        one.printed(Pattern.compile("Set up the owner's account: (\\S+)"), Duration.ofMinutes(3)));
-    visitor.fill("name", "bench");
-    visitor.fill("displayName", "Bench Owner");
-    visitor.fill("password", PASSWORD);
-    visitor.fill("again", PASSWORD);
-    visitor.fill("shopName", shop);
-    visitor.pressButton("Set up and sign in");
   }
 
   private void setting(String label, String speed, String pulses) {

@@ -22,8 +22,8 @@ class SampleUploadsTest {
           .as(sample.fileName())
           .isTrue();
     }
-    for (String name : SampleUploads.REFUSED) {
-      assertThat(Files.readAllBytes(FOLDER.resolve(name))).isEqualTo(SampleUploads.refused(name));
+    for (String name : RefusedUploads.ALL) {
+      assertThat(Files.readAllBytes(FOLDER.resolve(name))).isEqualTo(RefusedUploads.bytes(name));
     }
     assertThat(Files.readString(FOLDER.resolve("README.md"))).isEqualTo(SampleFolder.readme());
   }
