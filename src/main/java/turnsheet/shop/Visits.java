@@ -68,12 +68,15 @@ public final class Visits {
 
   /** A page of the visits of one unit, newest first. */
   public PageOf<VisitSummary> page(UnitId unit, PageQuery query) {
-    return whole(query.run(jdbc, VisitRows.LISTING.where("v.unit_id = ?", unit.value()), VisitRows::summary));
+    return whole(
+        query.run(
+            jdbc, VisitRows.LISTING.where("v.unit_id = ?", unit.value()), VisitRows::summary));
   }
 
   /** A page of the visits that are still open, newest first. */
   public PageOf<VisitSummary> open(PageQuery query) {
-    return whole(query.run(jdbc, VisitRows.LISTING.where("v.closed_at is null"), VisitRows::summary));
+    return whole(
+        query.run(jdbc, VisitRows.LISTING.where("v.closed_at is null"), VisitRows::summary));
   }
 
   /** A page of the visits that are open, or were until this instant or later; newest first. */

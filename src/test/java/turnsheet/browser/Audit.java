@@ -39,9 +39,34 @@ final class Audit {
       return [root.scrollWidth + " px wide: " + out.slice(-3).join(", ")];
       """;
 
+  /**
+   * Fields that stand side by side and do not begin on one line, and charts that hide the newest.
+   */
+  private static final String UNEVEN =
+      """
+      const out = [];
+      for (const row of document.querySelectorAll(".row:not(.search)")) {
+        const tops = new Map();
+        for (const field of row.querySelectorAll(":scope > .field")) {
+          const control = field.querySelector("input, select");
+          if (!control) continue;
+          const at = Math.round(field.getBoundingClientRect().top);
+          const top = control.getBoundingClientRect().top;
+          if (Math.abs((tops.get(at) ?? top) - top) > 1) out.push("uneven beside its neighbour: " + control.name);
+          tops.set(at, top);
+        }
+      }
+      for (const box of document.querySelectorAll(".plot-drawn.latest")) {
+        const drawing = box.querySelector("svg");
+        if (drawing && drawing.getBoundingClientRect().right > box.getBoundingClientRect().right + 1) out.push("a chart does not begin at its newest end");
+      }
+      return out;
+      """;
+
   private static final String HTML = "return document.documentElement.outerHTML";
   private static final Pattern MISSING_TEXT = Pattern.compile("\\?\\?[\\w.]+\\?\\?");
   private static final int DESKTOP_PX = 1280;
+  private static final int TABLET_PX = 600;
   private static final int PHONE_PX = 390;
   private static final int NARROW_PHONE_PX = 360;
 
@@ -67,6 +92,7 @@ final class Audit {
     visitor.size(DESKTOP_PX, 900);
     wrong.addAll(list("desktop", visitor.awaitScript(rules(true))));
     wrong.addAll(spills("desktop"));
+    wrong.addAll(list("desktop", visitor.script(UNEVEN)));
     visitor.size(PHONE_PX, 844);
     scheme("dark");
     wrong.addAll(list("phone, dark", visitor.awaitScript(rules(true))));
@@ -74,6 +100,7 @@ final class Audit {
     wrong.addAll(spills("phone"));
     visitor.size(NARROW_PHONE_PX, 740);
     wrong.addAll(spills("narrow phone"));
+    wrong.addAll(list("narrow phone", visitor.script(UNEVEN)));
     visitor.anySize();
     for (String complaint : visitor.complaints()) {
       // the browser itself reports the status of a page that is meant to fail
@@ -96,6 +123,8 @@ final class Audit {
     visitor.size(NARROW_PHONE_PX, 740);
     wrong.addAll(list("narrow phone", visitor.awaitScript(rules(false))));
     wrong.addAll(spills("narrow phone"));
+    visitor.size(TABLET_PX, 900); // where German words take two lines beside one
+    wrong.addAll(list("tablet", visitor.script(UNEVEN)));
     visitor.anySize();
     return wrong.stream().map(line -> "in German, " + page + ": " + line).toList();
   }

@@ -13,7 +13,8 @@ final class FirstRun {
 
   static void of(RunningService service, Visitor visitor, String shop) throws InterruptedException {
     visitor.open(
-        service.printed(Pattern.compile("Set up the owner's account: (\\S+)"), Duration.ofMinutes(3)));
+        service.printed(
+            Pattern.compile("Set up the owner's account: (\\S+)"), Duration.ofMinutes(3)));
     visitor.fill("name", "bench");
     visitor.fill("displayName", "Bench Owner");
     visitor.fill("password", PASSWORD);

@@ -80,7 +80,9 @@ class IntakeTest {
     MachineModel model =
         models.add(MachineModel.named("Invented deck", 120, "").withSetting(setting));
     var customer = new Customers(database.jdbc(), clock).add("An invented customer", "");
-    var unit = new Units(database.jdbc(), database.transactions(), clock).add(model.id(), customer.id(), "1001", "");
+    var unit =
+        new Units(database.jdbc(), database.transactions(), clock)
+            .add(model.id(), customer.id(), "1001", "");
     key =
         new CaptureKey(
             visits.open(unit.id(), "").id(), setting.id(), CaptureKey.AS_RECEIVED, null, null);
@@ -122,16 +124,20 @@ class IntakeTest {
     Units units = new Units(database.jdbc(), database.transactions(), clock);
     Unit unit = units.find(visits.find(key.visit()).orElseThrow().unitId()).orElseThrow();
     MachineModel other = models.add(MachineModel.named("Another deck", 120, ""));
+    InputStream file = bytes("tone");
     InputStream slow =
-        new java.io.SequenceInputStream(
-            bytes("tone"),
-            new InputStream() {
-              @Override
-              public int read() {
-                units.change(unit.id(), other.id(), unit.customerId(), "1001", "");
-                return -1;
-              }
-            });
+        new InputStream() {
+          @Override
+          public int read() throws IOException {
+            return file.read();
+          }
+
+          @Override
+          public int read(byte[] into, int from, int length) throws IOException {
+            units.change(unit.id(), other.id(), unit.customerId(), "1001", "");
+            return file.read(into, from, length);
+          }
+        };
 
     assertThatThrownBy(() -> intake.receive(key, "a.wav", "bench", slow))
         .isInstanceOfSatisfying(

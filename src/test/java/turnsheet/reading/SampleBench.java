@@ -33,12 +33,10 @@ public final class SampleBench {
   public final Unit unit;
   public final Visit visit;
   private final JdbcClient jdbc;
-  private final Clock clock;
   private final Units units;
 
   public SampleBench(JdbcClient jdbc, TransactionOperations transactions, Clock clock) {
     this.jdbc = jdbc;
-    this.clock = clock;
     this.setting = SpeedSettingId.next();
     ModelId modelId = ModelId.next();
     String name = "Testdeck " + modelId.toString().substring(0, 8);

@@ -23,7 +23,8 @@ class DateTicksTest {
         .containsExactly("2025-12", "2026-01", "2026-02", "2026-03", "2026-04");
     assertThat(labels(150, Locale.GERMANY))
         .containsExactly("Dez. 2025", "Jan. 2026", "Feb. 2026", "M\u00e4rz 2026", "Apr. 2026");
-    assertThat(labels(1500, Locale.GERMANY)).containsExactly("2026", "2027", "2028", "2029", "2030");
+    assertThat(labels(1500, Locale.GERMANY))
+        .containsExactly("2026", "2027", "2028", "2029", "2030");
   }
 
   /** Marks stand where their words say, whatever the words. */
