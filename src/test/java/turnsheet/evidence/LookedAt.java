@@ -17,6 +17,7 @@ import turnsheet.capture.Wish;
 import turnsheet.core.synth.SignalSynth;
 import turnsheet.core.synth.SpeedFunction;
 import turnsheet.core.synth.WavWriter;
+import turnsheet.core.synth.WheelSynth;
 import turnsheet.reading.SampleBench;
 
 /** Captures that go the whole way from their bytes to a closer look. */
@@ -69,6 +70,17 @@ public final class LookedAt {
     return wav(withHum(samples, 0.05));
   }
 
+  /** The waveform of a wheel of 60 places, 2 of them without a tooth, and tooth 17 bent. */
+  public static byte[] wheel() throws Exception {
+    double[] rises =
+        WheelSynth.uneven(60, 0.003, 4)
+            .without(58, 59)
+            .late(16, -0.1)
+            .risingEdges(
+                SpeedFunction.constant(0.0012).plusLine(4, 0.0005, 0), 800, SECONDS, 0, 0, 7);
+    return wav(WheelSynth.waveform(rises, 1 / 800.0, RATE_HERTZ, SECONDS, 0.5, 0.001, 7));
+  }
+
   /** Sends, confirms and waits for the measurement. */
   public CaptureId measured(byte[] wav) throws Exception {
     CaptureId id = intake.confirm(recognised(wav), Wish.none()).id();
@@ -109,7 +121,8 @@ public final class LookedAt {
     return bytes.toByteArray();
   }
 
-  private static void await(BooleanSupplier reached) {
+  /** Waits until that is so. */
+  public static void await(BooleanSupplier reached) {
     while (!reached.getAsBoolean()) {
       LockSupport.parkNanos(Duration.ofMillis(30).toNanos());
     }

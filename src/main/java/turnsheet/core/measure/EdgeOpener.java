@@ -6,6 +6,6 @@ import turnsheet.core.signal.RejectedException;
 
 /** Opens the same edges again and again, from the start each time. */
 @FunctionalInterface
-interface EdgeOpener {
+public interface EdgeOpener {
   EdgeReader open() throws IOException, RejectedException;
 }

@@ -16,6 +16,7 @@ import turnsheet.core.stats.EdgeSink;
 import turnsheet.core.stats.Moments;
 import turnsheet.core.stats.PeriodHistogram;
 import turnsheet.core.stats.PeriodStatistics;
+import turnsheet.core.stats.RegularGaps;
 import turnsheet.core.stats.StabilityLadder;
 import turnsheet.core.stats.WheelPattern;
 
@@ -41,6 +42,8 @@ final class EdgeScan {
   private final EdgeRepair repair;
   private final EdgeProbe probe;
   private final double nominalHz;
+  private final RegularGaps regular = new RegularGaps();
+  private long places;
   private long rises;
   private double lastRise = Double.NaN;
   private double fall = Double.NaN;
@@ -120,6 +123,7 @@ final class EdgeScan {
   }
 
   private void repaired(double seconds, boolean real) {
+    places++;
     periods.edge(seconds, real);
     stability.edge(seconds, real);
     if (wheel != null) {
@@ -144,6 +148,7 @@ final class EdgeScan {
   }
 
   private void gap(double fromSeconds, double toSeconds, long missing) {
+    regular.gap(places, missing);
     if (missing > LONGEST_REPAIR) {
       gaps.add(new Stretch(fromSeconds, toSeconds));
     }
@@ -154,8 +159,15 @@ final class EdgeScan {
     return rises;
   }
 
+  /** Edges that ought to have been there; teeth that a reference mark lacks are none of them. */
   long missing() {
-    return repair.missing();
+    RegularGaps.Mark mark = mark();
+    return repair.missing() - mark.missing() * mark.count();
+  }
+
+  /** The reference mark of the wheel; of no gaps where there is none. */
+  RegularGaps.Mark mark() {
+    return regular.mark(places);
   }
 
   long extra() {

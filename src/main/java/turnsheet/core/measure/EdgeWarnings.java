@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import turnsheet.core.signal.Warning;
+import turnsheet.core.stats.RegularGaps;
 import turnsheet.core.stats.WheelPattern;
 
 /** What the reader of figures from edges must know beyond them. */
@@ -34,6 +35,16 @@ final class EdgeWarnings {
               "leadingGap",
               "The first edge stands alone, far before the others: it was taken for an offset and"
                   + " left out."));
+    }
+    RegularGaps.Mark mark = scan.mark();
+    if (mark.count() > 0) {
+      warnings.add(
+          warning(
+              "referenceMark",
+              "Every %d pulses %d are missing: that was taken for the reference mark of the wheel"
+                  + " and is not counted as lost.",
+              mark.every(),
+              mark.missing()));
     }
     if (scan.missing() + scan.extra() > 0) {
       warnings.add(repaired());

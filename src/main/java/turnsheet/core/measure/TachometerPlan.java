@@ -34,18 +34,24 @@ final class TachometerPlan {
   private List<Reading.MainsLine> mains = List.of();
   private ClipCounter clips = ClipCounter.atFullScale();
 
-  /** Opens the same samples again and again, from the start each time. */
-  @FunctionalInterface
-  interface SampleOpener {
-    SampleReader open() throws IOException, RejectedException;
-  }
-
   TachometerPlan(SampleOpener opener, MeasureSettings settings) {
     this.opener = opener;
     this.settings = settings;
   }
 
   Outcome.Measured measure(EdgePlan plan) throws IOException, RejectedException {
+    EdgeOpener edges = edges();
+    return plan.measure(
+        edges,
+        new WaveformSignal(
+            Figure.absent(
+                "pulses have no single level to compare with noise: see the noise of the edges"),
+            mains,
+            () -> clips.clipped()));
+  }
+
+  /** Finds the levels; what it gives reads the edges, as often as they are asked for. */
+  EdgeOpener edges() throws IOException, RejectedException {
     Quantiles levels = new Quantiles(beginning());
     double low = levels.at(LEVEL_SHARE);
     double high = levels.at(1 - LEVEL_SHARE);
@@ -57,19 +63,11 @@ final class TachometerPlan {
               + " again.");
     }
     double middle = (low + high) / 2;
-    EdgeOpener edges =
-        () -> {
-          clips = ClipCounter.atFullScale();
-          return new CrossingReader(
-              new ClipCountingReader(opener.open(), clips), middle, BAND_SHARE * swing);
-        };
-    return plan.measure(
-        edges,
-        new WaveformSignal(
-            Figure.absent(
-                "pulses have no single level to compare with noise: see the noise of the edges"),
-            mains,
-            () -> clips.clipped()));
+    return () -> {
+      clips = ClipCounter.atFullScale();
+      return new CrossingReader(
+          new ClipCountingReader(opener.open(), clips), middle, BAND_SHARE * swing);
+    };
   }
 
   /** Samples of the first minute, thinned evenly. */

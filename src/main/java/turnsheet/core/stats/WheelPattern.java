@@ -1,7 +1,5 @@
 package turnsheet.core.stats;
 
-import java.util.Arrays;
-
 /**
  * The part of the edge times that repeats each turn of the sensor wheel, by synchronous averaging:
  * the place of every tooth between the first edge of a turn and the first of the next one, averaged
@@ -13,21 +11,21 @@ import java.util.Arrays;
 public final class WheelPattern implements EdgeSink {
 
   private static final int FEWEST_TURNS = 4;
+  private static final int[] DIFFERENCE = {1, -4, 6, -4, 1};
 
   private final int teeth;
   private final double[] turn;
   private final boolean[] real;
-  private final double[] sum;
-  private final double[] squares;
+  private final Sums whole;
+  private final Sums gapped;
   private int filled;
-  private long turns;
 
   public WheelPattern(int teeth) {
     this.teeth = teeth;
     this.turn = new double[teeth + 1];
     this.real = new boolean[teeth + 1];
-    this.sum = new double[teeth];
-    this.squares = new double[teeth];
+    this.whole = new Sums(teeth);
+    this.gapped = new Sums(teeth);
   }
 
   @Override
@@ -44,35 +42,69 @@ public final class WheelPattern implements EdgeSink {
   }
 
   private void take() {
-    for (boolean r : real) {
-      if (!r) {
-        return;
-      }
+    if (!real[0] || !real[teeth]) {
+      return;
     }
-    double whole = turn[teeth] - turn[0];
+    double length = turn[teeth] - turn[0];
     double mean = 0;
     double[] place = new double[teeth];
+    int there = 0;
     for (int j = 0; j < teeth; j++) {
-      // in periods, so that a slow change of speed drops out
-      place[j] = (turn[j] - turn[0]) / whole * teeth - j;
-      mean += place[j] / teeth;
+      if (real[j]) {
+        // in periods, so that a slow change of speed drops out
+        place[j] = (turn[j] - turn[0]) / length * teeth - j;
+        mean += place[j];
+        there++;
+      }
     }
+    Sums sums = there == teeth ? whole : gapped;
+    sums.turns++;
     for (int j = 0; j < teeth; j++) {
-      double d = place[j] - mean;
-      sum[j] += d;
-      squares[j] += d * d;
+      if (real[j]) {
+        double d = place[j] - mean / there;
+        sums.sum[j] += d;
+        sums.squares[j] += d * d;
+        sums.count[j]++;
+      }
     }
-    turns++;
   }
 
-  /** Whole turns without a repaired edge. */
+  /** Turns of one kind, place by place. */
+  private static final class Sums {
+    private final double[] sum;
+    private final double[] squares;
+    private final long[] count;
+    private long turns;
+
+    Sums(int teeth) {
+      sum = new double[teeth];
+      squares = new double[teeth];
+      count = new long[teeth];
+    }
+
+    /** A place that is empty in half of the turns is that of a reference mark. */
+    boolean tooth(int j) {
+      return 2 * count[j] > turns && count[j] > 1;
+    }
+
+    double mean(int j) {
+      return sum[j] / count[j];
+    }
+  }
+
+  /** Whole turns; of a wheel with a reference mark, which has none, those that lack teeth. */
+  private Sums sums() {
+    return whole.turns >= FEWEST_TURNS ? whole : gapped;
+  }
+
+  /** Turns that the pattern is averaged over. */
   public long turns() {
-    return turns;
+    return sums().turns;
   }
 
   /** Whether enough turns came to speak of a pattern. */
   public boolean known() {
-    return turns >= FEWEST_TURNS && teeth >= 2;
+    return turns() >= FEWEST_TURNS && teeth >= 2;
   }
 
   /**
@@ -96,30 +128,50 @@ public final class WheelPattern implements EdgeSink {
 
   /** Mean square of the fourth difference of the pattern round the wheel, in squared periods. */
   public double fourthDifferenceMeanSquare() {
+    Sums sums = sums();
     double total = 0;
+    int used = 0;
     for (int j = 0; j < teeth; j++) {
-      double d =
-          sum[j]
-              - 4 * sum[(j + 1) % teeth]
-              + 6 * sum[(j + 2) % teeth]
-              - 4 * sum[(j + 3) % teeth]
-              + sum[(j + 4) % teeth];
-      total += d * d / turns / turns;
+      double d = 0;
+      boolean there = true;
+      for (int i = 0; i < DIFFERENCE.length; i++) {
+        int at = (j + i) % teeth;
+        there &= sums.tooth(at);
+        d += DIFFERENCE[i] * (sums.tooth(at) ? sums.mean(at) : 0);
+      }
+      if (there) {
+        total += d * d;
+        used++;
+      }
     }
     // what the scatter from turn to turn lends the averages is not pattern
-    return Math.max(0, total / teeth - 70 * scatterOfMeans());
+    return Math.max(0, total / Math.max(1, used) - 70 * scatterOfMeans());
   }
 
   private double meanSquare() {
-    return Arrays.stream(sum).map(s -> s / turns).map(p -> p * p).sum() / teeth;
+    Sums sums = sums();
+    double total = 0;
+    int there = 0;
+    for (int j = 0; j < teeth; j++) {
+      if (sums.tooth(j)) {
+        total += sums.mean(j) * sums.mean(j);
+        there++;
+      }
+    }
+    return total / Math.max(1, there);
   }
 
   private double scatterOfMeans() {
+    Sums sums = sums();
     double scatter = 0;
+    int there = 0;
     for (int j = 0; j < teeth; j++) {
-      double mean = sum[j] / turns;
-      scatter += Math.max(0, squares[j] / turns - mean * mean) / (turns - 1);
+      if (sums.tooth(j)) {
+        double mean = sums.mean(j);
+        scatter += Math.max(0, sums.squares[j] / sums.count[j] - mean * mean) / (sums.count[j] - 1);
+        there++;
+      }
     }
-    return scatter / teeth;
+    return scatter / Math.max(1, there);
   }
 }
