@@ -21,6 +21,7 @@ import turnsheet.demo.SampleFolder;
       "turnsheet.evidence",
       "turnsheet.exchange",
       "turnsheet.job",
+      "turnsheet.pair",
       "turnsheet.reading",
       "turnsheet.report",
       "turnsheet.share",

@@ -37,6 +37,7 @@ class ArchitectureTest {
           "turnsheet.capture",
           "turnsheet.reading",
           "turnsheet.evidence",
+          "turnsheet.pair",
           "turnsheet.trial",
           "turnsheet.bench",
           "turnsheet.report",

@@ -54,10 +54,11 @@ final class PairSpectra {
     all.add(odd);
   }
 
+  /** A power of two that leaves enough of them. */
   private int segment(double seconds) {
-    double wanted = Math.min(SEGMENT_SECONDS, seconds / 5) * rateHertz;
+    double most = Math.min(Math.sqrt(2) * SEGMENT_SECONDS, seconds / 5) * rateHertz;
     int length = 2;
-    while (length * Math.sqrt(2) < wanted) {
+    while (2 * length <= most) {
       length *= 2;
     }
     return length;
