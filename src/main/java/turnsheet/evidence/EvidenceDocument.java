@@ -17,7 +17,7 @@ public record EvidenceDocument(
     String version, String sha256, int channel, MeasureSettings settings, List<Section> sections) {
 
   /** Changes whenever a value of any section can, or a section joins. */
-  public static final String VERSION = "3";
+  public static final String VERSION = "4";
 
   public EvidenceDocument {
     sections = List.copyOf(sections);

@@ -12,6 +12,7 @@ import turnsheet.web.Shown;
  * @param edgeNoise whether noise over slope explains the noise of the edges; empty where unknown
  * @param hysteresis the room for a comparator in a sentence
  * @param riding what rides on the pulses
+ * @param top how far the band reaches; empty without readings
  * @param readings both readings, figure by figure; empty where they could not be made
  */
 record HealthPage(
@@ -22,6 +23,7 @@ record HealthPage(
     List<Fact> facts,
     Picture pulse,
     List<Riding> riding,
+    String top,
     List<Both> readings,
     List<Line> lines) {
 

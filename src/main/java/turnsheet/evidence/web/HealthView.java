@@ -52,6 +52,9 @@ class HealthView implements SectionView {
         HealthTables.facts(health, words),
         HealthTables.pulse(health, words),
         health.riding().stream().map(r -> riding(r, words)).toList(),
+        both == null
+            ? ""
+            : words.text("evidence.health.top", words.numbers().fixed(both.bandTopHz(), 0)),
         both == null ? List.of() : HealthTables.both(both, words),
         both == null ? List.of() : both.lines().stream().map(l -> line(l, words)).toList());
   }
@@ -102,13 +105,16 @@ class HealthView implements SectionView {
   }
 
   private static HealthPage.Line line(TwoReadings.Line line, Wording words) {
+    Double band = line.bandPeakPercent();
     return new HealthPage.Line(
         words.numbers().fixed(line.rateHz(), 2),
         percent(line.edgesPeakPercent(), words),
-        percent(line.bandPeakPercent(), words),
-        percent(line.edgesPeakPercent() - line.bandPeakPercent(), words),
+        optional(band, words),
+        optional(band == null ? null : line.edgesPeakPercent() - band, words),
         optional(line.predictedPercent(), words),
-        words.text("evidence.health.who." + line.who().name()));
+        band == null
+            ? words.text("evidence.health.beyond")
+            : words.text("evidence.health.who." + line.who().name()));
   }
 
   private static String optional(@Nullable Double value, Wording words) {

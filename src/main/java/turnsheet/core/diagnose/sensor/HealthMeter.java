@@ -5,6 +5,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import org.jspecify.annotations.Nullable;
+import turnsheet.core.dsp.ToneBand;
 import turnsheet.core.format.api.ByteSource;
 import turnsheet.core.format.api.ReadOptions;
 import turnsheet.core.measure.CaptureKind;
@@ -74,7 +75,8 @@ public final class HealthMeter {
     Outcome band = measured(CaptureKind.TONE, f -> progress.reached(0.6 + 0.4 * f));
     TwoReadings both =
         edges instanceof Outcome.Measured one && band instanceof Outcome.Measured other
-            ? TwoReadings.of(one, other, riding)
+            ? TwoReadings.of(
+                one, other, ToneBand.of(pulses, wave.rateHertz()).flutterHertz(), riding)
             : null;
     Reading.Edges counted = edges instanceof Outcome.Measured one ? one.reading().edges() : null;
     double noise = WaveNoise.rms(wave);

@@ -19,6 +19,8 @@ import turnsheet.core.measure.Series;
  * @param falsePercent root mean square of the lines that the riding ones put into the edges
  * @param bandFloorPercent what the noise beside the pulse rate alone would show
  * @param smallestByEdgesPercent, smallestByBandPercent the smallest flutter that can be shown
+ * @param bandTopHz highest fluctuation that the band shows in full: it is narrow where pulses are
+ *     few or near half the sample rate
  * @param lines by rate
  */
 public record TwoReadings(
@@ -31,6 +33,7 @@ public record TwoReadings(
     Figure bandFloorPercent,
     Figure smallestByEdgesPercent,
     Figure smallestByBandPercent,
+    double bandTopHz,
     List<Line> lines) {
 
   /** A figure below this many times its floor is marked everywhere else as well. */
@@ -45,13 +48,14 @@ public record TwoReadings(
   /**
    * One line in both readings.
    *
+   * @param bandPeakPercent null beyond what the band shows
    * @param predictedPercent what a riding line must put there; null where none does
    * @param who what the two readings say of it
    */
   public record Line(
       double rateHz,
       double edgesPeakPercent,
-      double bandPeakPercent,
+      @Nullable Double bandPeakPercent,
       @Nullable Double predictedPercent,
       Who who) {}
 
@@ -86,7 +90,8 @@ public record TwoReadings(
         bandFloor,
         smallest(edgesFloor, squares),
         smallest(bandFloor, 0),
-        lines(edges, band, riding));
+        bandTopHz,
+        lines(edges, band, bandTopHz, riding));
   }
 
   private static Figure smallest(Figure floor, double falseSquares) {
@@ -100,7 +105,7 @@ public record TwoReadings(
   }
 
   private static List<Line> lines(
-      Outcome.Measured edges, Outcome.Measured band, List<RidingLine> riding) {
+      Outcome.Measured edges, Outcome.Measured band, double bandTopHz, List<RidingLine> riding) {
     double apart = 2 / edges.reading().source().durationSeconds();
     List<Double> rates = new ArrayList<>();
     rates(edges.reading()).forEach(r -> addOnce(rates, r, apart));
@@ -115,7 +120,7 @@ public record TwoReadings(
     }
     return rates.stream()
         .sorted(Comparator.naturalOrder())
-        .map(rate -> line(rate, apart, edges, band, riding))
+        .map(rate -> line(rate, apart, edges, rate > bandTopHz ? null : band, riding))
         .toList();
   }
 
@@ -140,7 +145,7 @@ public record TwoReadings(
       double rate,
       double apart,
       Outcome.Measured edges,
-      Outcome.Measured band,
+      Outcome.@Nullable Measured band,
       List<RidingLine> riding) {
     double squares =
         riding.stream()
@@ -149,12 +154,15 @@ public record TwoReadings(
             .sum();
     Double predicted = squares == 0 ? null : Math.sqrt(squares);
     double byEdges = peak(edges, rate, apart);
-    double byBand = peak(band, rate, apart);
+    Double byBand = band == null ? null : peak(band, rate, apart);
     return new Line(rate, byEdges, byBand, predicted, who(byEdges, byBand, predicted));
   }
 
   /** A quarter either way: two lines of unknown phase in one place may differ by more. */
-  private static Who who(double edges, double band, @Nullable Double predicted) {
+  private static Who who(double edges, @Nullable Double band, @Nullable Double predicted) {
+    if (band == null) {
+      return Who.UNTOLD;
+    }
     if (Math.abs(edges - band) < 0.25 * Math.max(edges, band)) {
       return Who.SHAFT;
     }

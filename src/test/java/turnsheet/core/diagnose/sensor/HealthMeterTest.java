@@ -176,6 +176,12 @@ class HealthMeterTest {
     Waves.add(x, RATE, 150.2, 0.01 * PEAK, 0.4);
     Waves.addNoise(x, 0.0001, 3);
     SensorHealth health = judge(x, RATE, 100);
+    // half of 100 Hz less 4 % for straying
+    assertThat(requireNonNull(health.readings()).bandTopHz()).isCloseTo(46, within(0.1));
+    assertThat(requireNonNull(health.readings()).lines())
+        .filteredOn(l -> l.rateHz() > 49)
+        .singleElement()
+        .satisfies(l -> assertThat(l.bandPeakPercent()).isNull());
     RidingLine line = health.riding().get(0);
     assertThat(line.falseRateHz()).isCloseTo(49.8, within(0.01));
     // 100 * 0.01 * 49.8 / 100
