@@ -18,7 +18,8 @@ import turnsheet.core.measure.Reading;
  * expected rate, spread evenly over the range of a rate that has one. A harmonic of a turning part
  * counts as much as the part's own rate where the line of that own rate is there as well. One
  * unknown part, as probable as a known one and anywhere between 0.1 and 200 Hz on a logarithmic
- * scale, competes with them. Two parts cannot be told apart where the better is less than nineteen
+ * scale, competes with them; where lines without any suspect lie closer than that within an octave
+ * to either side, as many as they are. Two parts cannot be told apart where the better is less than nineteen
  * times as probable as the other, that is 95 to 5 (the weights are common practice, no source; how
  * often they are right is measured).
  */
@@ -28,6 +29,10 @@ public final class LineSuspects {
   // side; half a bin more for the interpolation on noise
   private static final double RESOLUTION_BINS = 1.5;
   private static final double UNKNOWN_RANGE = Math.log(200 / 0.1);
+
+  /** From half a rate to twice that rate. */
+  private static final double CROWD_RANGE = Math.log(4);
+
   private static final double CERTAIN = 19;
 
   private final List<ExpectedRate> rates;
@@ -68,7 +73,7 @@ public final class LineSuspects {
         weighed.add(new RankedSuspect(rate, mismatch, tolerance, weight));
       }
     }
-    double unknown = 1 / (line * UNKNOWN_RANGE);
+    double unknown = Math.max(1 / (line * UNKNOWN_RANGE), crowd(line, all));
     double sum = unknown + weighed.stream().mapToDouble(RankedSuspect::probability).sum();
     Map<String, Double> ofPart = new HashMap<>();
     weighed.forEach(s -> ofPart.merge(s.part(), s.probability() / sum, Double::sum));
@@ -90,6 +95,29 @@ public final class LineSuspects {
         rivals(suspects, ofPart),
         lock(suspects),
         suspects.isEmpty() ? Explanation.of(line, lineExpanded(figure), rates, running) : null);
+  }
+
+  /**
+   * How densely lines without any suspect lie about a line, per hertz: where many things turn that
+   * nobody has entered, one that meets a part by chance is likelier.
+   */
+  private double crowd(double line, List<Reading.Line> all) {
+    double unnamed = 0;
+    for (Reading.Line other : all) {
+      Double rate = other.rateHz().value();
+      if (rate != null
+          && rate > line / 2
+          && rate < 2 * line
+          && rates.stream().noneMatch(expected -> meets(expected, rate))) {
+        unnamed++;
+      }
+    }
+    return unnamed / (line * CROWD_RANGE);
+  }
+
+  private boolean meets(ExpectedRate expected, double line) {
+    return Math.abs(expected.rate().distance(line))
+        <= resolutionHertz + expected.rate().limitHertz();
   }
 
   private static double part(Map<String, Double> ofPart, RankedSuspect suspect) {
