@@ -15,6 +15,14 @@ import java.util.function.DoubleFunction;
 final class PackFit {
 
   private static final int ROUNDS = 12;
+
+  /**
+   * Sums over as many parts of the capture are kept for one start: within a part the laws that are
+   * tried stray from the start by a tenth of a radian at most, those beside it for the noise by a
+   * third.
+   */
+  private static final int PARTS = 256;
+
   private static final int BESIDE = 8;
 
   private final double[] samples;
@@ -45,6 +53,7 @@ final class PackFit {
   record Fit(PackLaw law, double hertzU, double bendU, double peakPercent, double peakU) {}
 
   Fit from(PackLaw start) {
+    Sums sums = new Sums(start);
     double seconds = samples.length / rateHertz;
     double cube = Math.pow(start.middleHertz(), 3);
     double hertzStep = 0.4 / seconds;
@@ -52,16 +61,16 @@ final class PackFit {
     PackLaw law = start;
     for (int round = 0; round < ROUNDS; round++) {
       PackLaw now = law;
-      law = best(law, hertzStep, s -> new PackLaw(now.middleHertz() + s, now.bendSeconds()));
+      law = best(sums, law, hertzStep, s -> new PackLaw(now.middleHertz() + s, now.bendSeconds()));
       PackLaw next = law;
-      law = best(law, bendStep, s -> new PackLaw(next.middleHertz(), next.bendSeconds() + s));
+      law = best(sums, law, bendStep, s -> new PackLaw(next.middleHertz(), next.bendSeconds() + s));
       if (round >= 3) {
         hertzStep *= 0.6;
         bendStep *= 0.6;
       }
     }
-    double peak = Math.sqrt(power(law));
-    double noise = Math.sqrt(noisePower(law, seconds));
+    double peak = Math.sqrt(sums.power(law));
+    double noise = Math.sqrt(noisePower(sums, law, seconds));
     PackLaw found = law;
     double hertzU = noise / peak * spread(t -> 2 * Math.PI * t);
     double bendU =
@@ -70,45 +79,65 @@ final class PackFit {
   }
 
   /** The best of three laws a step apart, or the crest of the parabola through them. */
-  private PackLaw best(PackLaw law, double step, DoubleFunction<PackLaw> moved) {
-    double here = power(law);
-    double low = power(moved.apply(-step));
-    double high = power(moved.apply(step));
+  private PackLaw best(Sums sums, PackLaw law, double step, DoubleFunction<PackLaw> moved) {
+    double here = sums.power(law);
+    double low = sums.power(moved.apply(-step));
+    double high = sums.power(moved.apply(step));
     double bend = low - 2 * here + high;
     double shift = bend < 0 ? 0.5 * (low - high) / bend : low > high ? -1 : 1;
     PackLaw crest = moved.apply(step * Math.max(-1, Math.min(1, shift)));
     double best = Math.max(Math.max(low, high), here);
-    if (power(crest) >= best) {
+    if (sums.power(crest) >= best) {
       return crest;
     }
     return here == best ? law : moved.apply(low == best ? -step : step);
   }
 
-  /** Squared amplitude of what follows the law, in squared percent; 0 where the law breaks down. */
-  double power(PackLaw law) {
-    if (!law.holds(middle / rateHertz) || law.middleHertz() <= 0) {
-      return 0;
+  /** The weighted samples turned back by one law, summed part by part. */
+  private final class Sums {
+    private final PackLaw start;
+    private final double[] re = new double[PARTS];
+    private final double[] im = new double[PARTS];
+
+    Sums(PackLaw start) {
+      this.start = start;
+      for (int i = 0; start.holds(middle / rateHertz) && i < samples.length; i++) {
+        double angle = 2 * Math.PI * start.turns((i - middle) / rateHertz);
+        double x = samples[i] * weights[i];
+        int part = (int) ((long) i * PARTS / samples.length);
+        re[part] += x * Math.cos(angle);
+        im[part] -= x * Math.sin(angle);
+      }
     }
-    double re = 0;
-    double im = 0;
-    for (int i = 0; i < samples.length; i++) {
-      double angle = 2 * Math.PI * law.turns((i - middle) / rateHertz);
-      double x = samples[i] * weights[i];
-      re += x * Math.cos(angle);
-      im += x * Math.sin(angle);
+
+    /** Squared amplitude of what follows a law near the start, in squared percent; 0 for none. */
+    double power(PackLaw law) {
+      if (law.middleHertz() <= 0 || !law.holds(middle / rateHertz)) {
+        return 0;
+      }
+      double sumRe = 0;
+      double sumIm = 0;
+      for (int p = 0; p < PARTS; p++) {
+        double t = ((p + 0.5) / PARTS * samples.length - 0.5 - middle) / rateHertz;
+        double angle = 2 * Math.PI * (law.turns(t) - start.turns(t));
+        double c = Math.cos(angle);
+        double s = Math.sin(angle);
+        sumRe += re[p] * c + im[p] * s;
+        sumIm += im[p] * c - re[p] * s;
+      }
+      double scale = 2 / weightSum;
+      return scale * scale * (sumRe * sumRe + sumIm * sumIm);
     }
-    double scale = 2 / weightSum;
-    return scale * scale * (re * re + im * im);
   }
 
   /** Mean squared amplitude that noise alone shows, from the median beside the line. */
-  private double noisePower(PackLaw law, double seconds) {
+  private static double noisePower(Sums sums, PackLaw law, double seconds) {
     double[] beside = new double[2 * BESIDE];
     for (int i = 0; i < BESIDE; i++) {
       double off = (3 + 1.5 * i) / seconds;
-      beside[2 * i] = power(new PackLaw(law.middleHertz() + off, law.bendSeconds()));
+      beside[2 * i] = sums.power(new PackLaw(law.middleHertz() + off, law.bendSeconds()));
       beside[2 * i + 1] =
-          power(new PackLaw(Math.max(0, law.middleHertz() - off), law.bendSeconds()));
+          sums.power(new PackLaw(Math.max(0, law.middleHertz() - off), law.bendSeconds()));
     }
     double[] known = Arrays.stream(beside).filter(p -> p > 0).sorted().toArray();
     return known.length == 0 ? 0 : known[known.length / 2] / Math.log(2);

@@ -8,13 +8,18 @@ import turnsheet.core.dsp.Window;
 
 /**
  * Peaks of short spectra, linked from one to the next. A peak counts where its power is so much
- * above the median of the bins beside it that noise alone does so less often than once in four
+ * above the median of the bins about it that noise alone does so less often than once in four
  * thousand bins; a track counts where it holds for most of the capture.
  */
 final class PeakTracks {
 
   /** Noise powers are exponential: {@code exp(-12 ln 2)} is 2.4e-4. */
   private static final double OVER_MEDIAN = 12;
+
+  /** Below, side lobes of the window and rounding can look like lines, as in other spectra here. */
+  private static final double SMALLEST_SHARE = 1e-3;
+
+  private static final double SMALLEST_PERCENT = 0.0002;
 
   private static final double SHARE_OF_CAPTURE = 1 / 5.0;
   private static final double SHORTEST_SECONDS = 5;
@@ -114,11 +119,15 @@ final class PeakTracks {
       power[k] = bins[2 * k] * bins[2 * k] + bins[2 * k + 1] * bins[2 * k + 1];
     }
     int lobe = (int) Math.ceil(2 / windowSeconds / stepHertz);
+    double[] middles = middles(power, BESIDE_BINS * lobe / 2);
+    double strongest = Math.sqrt(Arrays.stream(power).max().orElse(0));
+    double least = Math.pow(Math.max(SMALLEST_PERCENT, SMALLEST_SHARE * strongest), 2);
     List<MovingLine.Place> peaks = new ArrayList<>();
     for (int k = Math.max(2, (int) (LOWEST_TURNS / windowSeconds / stepHertz)); k <= last; k++) {
       if (power[k] > power[k - 1]
           && power[k] >= power[k + 1]
-          && power[k] > OVER_MEDIAN * medianBeside(power, k, lobe)) {
+          && power[k] >= least
+          && power[k] > OVER_MEDIAN * middles[2 * k / (BESIDE_BINS * lobe)]) {
         double a = Math.log(power[k - 1]);
         double b = Math.log(power[k]);
         double c = Math.log(power[k + 1]);
@@ -132,15 +141,21 @@ final class PeakTracks {
     return peaks;
   }
 
-  private static double medianBeside(double[] power, int k, int lobe) {
-    int reach = BESIDE_BINS * lobe / 2;
-    double[] beside =
-        java.util.stream.IntStream.rangeClosed(
-                Math.max(1, k - reach), Math.min(power.length - 1, k + reach))
-            .filter(i -> Math.abs(i - k) > lobe)
-            .mapToDouble(i -> power[i])
-            .sorted()
-            .toArray();
-    return beside.length == 0 ? Double.POSITIVE_INFINITY : beside[beside.length / 2];
+  /**
+   * Medians of the bins about each stretch of spectrum, as long again to either side: a line's lobe
+   * is a twelfth of that and hardly moves them.
+   */
+  private static double[] middles(double[] power, int stretch) {
+    double[] middles = new double[power.length / stretch + 1];
+    for (int i = 0; i < middles.length; i++) {
+      double[] near =
+          Arrays.copyOfRange(
+              power,
+              Math.max(1, (i - 1) * stretch),
+              Math.max(2, Math.min(power.length, (i + 2) * stretch)));
+      Arrays.sort(near);
+      middles[i] = near[near.length / 2];
+    }
+    return middles;
   }
 }

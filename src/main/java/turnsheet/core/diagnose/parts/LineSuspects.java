@@ -19,9 +19,9 @@ import turnsheet.core.measure.Reading;
  * counts as much as the part's own rate where the line of that own rate is there as well. One
  * unknown part, as probable as a known one and anywhere between 0.1 and 200 Hz on a logarithmic
  * scale, competes with them; where lines without any suspect lie closer than that within an octave
- * to either side, as many as they are. Two parts cannot be told apart where the better is less than nineteen
- * times as probable as the other, that is 95 to 5 (the weights are common practice, no source; how
- * often they are right is measured).
+ * to either side, as many as they are. Two parts cannot be told apart where the better is less than
+ * nineteen times as probable as the other, that is 95 to 5 (the weights are common practice, no
+ * source; how often they are right is measured).
  */
 public final class LineSuspects {
 

@@ -70,7 +70,8 @@ public record TwoReadings(
   }
 
   /** Sets the two side by side. */
-  static TwoReadings of(Outcome.Measured edges, Outcome.Measured band, double bandTopHz, List<RidingLine> riding) {
+  static TwoReadings of(
+      Outcome.Measured edges, Outcome.Measured band, double bandTopHz, List<RidingLine> riding) {
     Reading byEdges = edges.reading();
     Reading byBand = band.reading();
     double squares =
