@@ -17,6 +17,7 @@ import org.springframework.beans.factory.annotation.Autowired;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.test.web.servlet.MockMvc;
 import org.springframework.transaction.support.TransactionTemplate;
+import turnsheet.access.ShopLanguage;
 import turnsheet.capture.CaptureId;
 import turnsheet.capture.CaptureState;
 import turnsheet.capture.Captures;
@@ -26,6 +27,7 @@ import turnsheet.evidence.LookedAt;
 import turnsheet.reading.SampleBench;
 import turnsheet.testing.AsTechnician;
 import turnsheet.testing.ServiceTest;
+import turnsheet.web.PageLanguage;
 
 /** The sensor wheel on the page of a closer look. */
 @ServiceTest
@@ -40,6 +42,7 @@ class WheelSectionTest {
   @Autowired Intake intake;
   @Autowired Captures captures;
   @Autowired Evidence evidence;
+  @Autowired ShopLanguage language;
 
   private LookedAt bench;
 
@@ -63,15 +66,15 @@ class WheelSectionTest {
         .contains("The pattern round the wheel")
         .contains("switch off, unplug")
         .doesNotContain("??");
-    String german =
-        mvc.perform(get(address).header("Accept-Language", "de"))
-            .andReturn()
-            .getResponse()
-            .getContentAsString();
-    assertThat(german)
-        .contains("Das Rad hat 60 Plätze je Umdrehung")
-        .contains("Zahn 17: Seine Flanke kommt um")
-        .doesNotContain("??");
+    language.put(PageLanguage.GERMAN);
+    try {
+      assertThat(page(address))
+          .contains("Das Rad hat 60 Plätze je Umdrehung")
+          .contains("Zahn 17: Seine Flanke kommt um")
+          .doesNotContain("??");
+    } finally {
+      language.put(PageLanguage.ENGLISH);
+    }
     mvc.perform(get("/api/v1" + address))
         .andExpect(jsonPath("$[0].sections[?(@.name=='wheel')].found.finding.places").value(60))
         .andExpect(
