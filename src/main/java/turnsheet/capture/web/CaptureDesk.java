@@ -21,6 +21,7 @@ import turnsheet.capture.Intake;
 import turnsheet.capture.MissingFile;
 import turnsheet.capture.StoreException;
 import turnsheet.capture.UploadTrouble;
+import turnsheet.job.Job;
 import turnsheet.job.JobId;
 import turnsheet.job.Jobs;
 import turnsheet.web.NotFoundException;
@@ -65,9 +66,10 @@ class CaptureDesk {
   }
 
   ProgressDocument progress(UUID id) {
-    Capture capture = capture(id);
-    JobId job = capture.job();
-    return ProgressDocument.of(capture, job == null ? null : jobs.find(job).orElse(null));
+    JobId jobId = capture(id).job();
+    Job job = jobId == null ? null : jobs.find(jobId).orElse(null);
+    // read after its job: one that ends in between must not be told as done and waiting
+    return ProgressDocument.of(capture(id), job);
   }
 
   /** The original bytes, always as a download, never as something that a browser would run. */

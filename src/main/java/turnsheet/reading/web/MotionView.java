@@ -1,8 +1,10 @@
 package turnsheet.reading.web;
 
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
+import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import org.jspecify.annotations.Nullable;
@@ -30,11 +32,23 @@ class MotionView {
 
   private static final Numbers.Sign PLAIN = Numbers.Sign.PLAIN;
   private static final int USUAL_FACTOR = 20;
+  private static final int MOST_KEPT = 64;
 
   private final Readings readings;
   private final CapturePlaces places;
   private final MachineModels models;
   private final MessageSource messages;
+
+  /** What was found in the latest readings asked for; a reading never changes. */
+  private final Map<ReadingId, Found> kept =
+      new LinkedHashMap<>(MOST_KEPT, 0.75f, true) {
+        @Override
+        protected boolean removeEldestEntry(Map.Entry<ReadingId, Found> eldest) {
+          return size() > MOST_KEPT;
+        }
+      };
+
+  private record Found(List<MovingLine> lines, Optional<RateMap> map) {}
 
   MotionView(
       Readings readings, CapturePlaces places, MachineModels models, MessageSource messages) {
@@ -60,9 +74,9 @@ class MotionView {
     if (fluctuation == null) {
       return new MotionPage(words.text("motion.notKept"), null, "", List.of(), null);
     }
-    Motion motion = new Motion(MovingLines.of(fluctuation), tapeSpeed(stored));
-    Optional<RateMap> map =
-        RateMap.possible(fluctuation) ? Optional.of(RateMap.of(fluctuation)) : Optional.empty();
+    Found found = found(id, fluctuation);
+    Motion motion = new Motion(found.lines(), tapeSpeed(stored));
+    Optional<RateMap> map = found.map();
     MotionDrawing drawing = new MotionDrawing(words);
     return new MotionPage(
         sentence(motion, fluctuation, words),
@@ -80,7 +94,26 @@ class MotionView {
             stored ->
                 readings
                     .fluctuation(id)
-                    .map(f -> new Motion(MovingLines.of(f), tapeSpeed(stored))));
+                    .map(f -> new Motion(found(id, f).lines(), tapeSpeed(stored))));
+  }
+
+  private Found found(ReadingId id, Fluctuation fluctuation) {
+    synchronized (kept) {
+      Found before = kept.get(id);
+      if (before != null) {
+        return before;
+      }
+    }
+    Found now =
+        new Found(
+            MovingLines.of(fluctuation),
+            RateMap.possible(fluctuation)
+                ? Optional.of(RateMap.of(fluctuation))
+                : Optional.empty());
+    synchronized (kept) {
+      kept.put(id, now);
+    }
+    return now;
   }
 
   private OptionalDouble tapeSpeed(StoredReading stored) {

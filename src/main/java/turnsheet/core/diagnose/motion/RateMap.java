@@ -11,8 +11,8 @@ import turnsheet.core.signal.Fluctuation;
  *
  * <p>Units: a cell holds the peak, in percent of the mean speed, that a line in the middle of a bin
  * would have; a row that spans several bins shows the strongest of them. A line between bins reads
- * up to 1.42 dB low (scalloping of the Hann window, Harris 1978), a quarter of that with the zeros
- * that are padded here.
+ * up to 1.42 dB low (scalloping of the Hann window, Harris 1978), less where zeros are padded to
+ * the next power of two.
  */
 public final class RateMap {
 
@@ -25,7 +25,7 @@ public final class RateMap {
 
   private static final double SHORTEST_SECONDS = 2;
   private static final double LONGEST_SECONDS = 20;
-  private static final int COLUMNS = 96;
+  private static final int COLUMNS = 64;
   private static final int NEIGHBOURS = 8;
 
   private final double startSeconds;
@@ -67,7 +67,7 @@ public final class RateMap {
     double to = Math.min(HIGHEST_HERTZ, 0.45 * rate);
     int rows = Math.max(1, (int) (ROWS_PER_DECADE * Math.log10(to / from)));
     double[][] peaks = new double[COLUMNS][];
-    Fft fft = new Fft(Fft.lengthFor(2 * window));
+    Fft fft = new Fft(Fft.lengthFor(window));
     double[] shape = Window.HANN.values(window);
     double scale = 2 / (window * Window.HANN.coherentGain());
     for (int c = 0; c < COLUMNS; c++) {
